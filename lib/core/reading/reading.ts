@@ -1,0 +1,114 @@
+import type { Detector } from "../sweep/settings";
+import type { LevelUnit } from "../units/level-units";
+
+export const STANDINGS = ["clear", "inside-guard", "over", "undecided"] as const;
+export type Standing = (typeof STANDINGS)[number];
+
+export const STANDING_LABELS: Record<Standing, string> = {
+  clear: "clear",
+  "inside-guard": "inside guard",
+  over: "over",
+  undecided: "undecided",
+};
+
+export const BASES = ["like-for-like", "upper-bound", "cannot-decide"] as const;
+export type Basis = (typeof BASES)[number];
+
+export const DOUBT_CODES = [
+  "rbw-differs",
+  "rbw-unstated",
+  "rbw-kind-differs",
+  "step-coarse",
+  "not-covered",
+  "calibration-overdue",
+  "ambient-not-taken",
+  "ambient-near",
+  "sweep-time-short",
+  "distance-restated",
+  "overload-suspected",
+  "mask-from-memory",
+] as const;
+export type DoubtCode = (typeof DOUBT_CODES)[number];
+
+/** Something that weakens a reading. `text` is a whole sentence with its number and the remedy. */
+export interface Doubt {
+  code: DoubtCode;
+  text: string;
+  valueDb: number | null;
+}
+
+export interface FrequencyRange {
+  startHz: number;
+  stopHz: number;
+}
+
+/** Part of a mask line that was swept; `fraction` (0…1) counts log frequency. */
+export interface Coverage {
+  fraction: number;
+  gaps: FrequencyRange[];
+}
+
+export interface MarginPoint {
+  frequencyHz: number;
+  levelDb: number;
+  limitDb: number;
+  /** limit minus level, dB; positive lies under the mask. */
+  marginDb: number;
+  traceIndex: number;
+}
+
+export interface LineReading {
+  lineIndex: number;
+  name: string;
+  detector: Detector;
+  /** How the worst point was decided. */
+  basis: Basis;
+  standing: Standing;
+  worst: MarginPoint | null;
+  coverage: Coverage;
+  /** Whole sentence when the standing needs explaining, otherwise null. */
+  explanation: string | null;
+}
+
+export interface Suspect {
+  number: number;
+  /** Interpolated by a parabola through three points in dB. */
+  frequencyHz: number;
+  /** The highest sample itself; margin and limit are taken there. */
+  sampleHz: number;
+  levelDb: number;
+  limitDb: number | null;
+  marginDb: number | null;
+  prominenceDb: number;
+  lineName: string | null;
+  basis: Basis;
+  traceIndex: number;
+}
+
+/** What has to be measured again with the line's own detector before it can be decided. */
+export interface RemeasurePoint {
+  frequencyHz: number;
+  detector: Detector;
+  rbwHz: number | null;
+  lineName: string;
+  boundDb: number;
+  limitDb: number;
+}
+
+/** A sweep held against one mask revision. */
+export interface Reading {
+  engineVersion: number;
+  unit: LevelUnit;
+  guardDb: number;
+  standing: Standing;
+  /** Index into `lines` of the line that gives the standing; null when no line exists. */
+  worstLineIndex: number | null;
+  lines: LineReading[];
+  /** Lowest coverage over the lines. */
+  coverage: Coverage;
+  suspects: Suspect[];
+  remeasure: RemeasurePoint[];
+  doubts: Doubt[];
+  /** Why the sweep cannot be held against this mask at all (unit, distance); else null. */
+  notComparable: string | null;
+}

@@ -1,0 +1,31 @@
+import { fileURLToPath } from "node:url";
+import { drizzle } from "drizzle-orm/node-postgres";
+import { migrate } from "drizzle-orm/node-postgres/migrator";
+import { Client } from "pg";
+
+/** Creates the app's role when missing, sets its password, and applies what is new in `drizzle/`. */
+async function migrateDatabase(ownerUrl: string, appPassword: string): Promise<void> {
+  const client = new Client({ connectionString: ownerUrl });
+  await client.connect();
+  try {
+    // Two starts against one database wait for each other instead of colliding.
+    await client.query("select pg_advisory_lock(7316001)");
+    const role = await client.query("select 1 from pg_roles where rolname = 'neap_app'");
+    const verb = role.rowCount ? "alter" : "create";
+    await client.query(`${verb} role neap_app login password ${client.escapeLiteral(appPassword)}`);
+    await migrate(drizzle(client), {
+      migrationsFolder: fileURLToPath(new URL("../drizzle", import.meta.url)),
+    });
+  } finally {
+    await client.end();
+  }
+}
+
+const ownerUrl = process.env.NEAP_OWNER_DATABASE_URL;
+const appPassword = process.env.NEAP_APP_PASSWORD;
+if (!ownerUrl || !appPassword) {
+  console.error("NEAP_OWNER_DATABASE_URL and NEAP_APP_PASSWORD must be set; `npm start` does it.");
+  process.exitCode = 1;
+} else {
+  await migrateDatabase(ownerUrl, appPassword);
+}

@@ -1,0 +1,4 @@
+export * from "./bench";
+export * from "./mask";
+export * from "./program";
+export * from "./team";

@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import type { Database } from "@/db/client";
+import { appDatabase } from "@/db/client";
 import { hashPassword } from "@/lib/auth/password";
 import { CommandError } from "../result";
 import { parseInput } from "../run";
@@ -9,7 +9,10 @@ import { createFirstTeamSchema } from "./schemas";
  * The one command without a member behind it: on an empty database it makes the first team and
  * its admin. The database function refuses as soon as any team exists, and writes the audit row.
  */
-export async function createFirstTeam(db: Database, input: unknown): Promise<{ teamId: string }> {
+export async function createFirstTeam(
+  input: unknown,
+  db = appDatabase(),
+): Promise<{ teamId: string }> {
   const values = parseInput(createFirstTeamSchema, input);
   const hash = await hashPassword(values.password);
   const made = await db.execute<{ id: string | null }>(

@@ -22,15 +22,15 @@ afterAll(() => database.close());
 describe("first run and signing in", () => {
   test("a short password is refused at its field and nothing is made", async () => {
     await expect(
-      createFirstTeam(database.app, { ...INPUT, password: "short" }),
+      createFirstTeam({ ...INPUT, password: "short" }, database.app),
     ).rejects.toMatchObject({ fieldErrors: { password: "Use at least 10 characters." } });
     expect((await database.owner.query("select 1 from teams")).rowCount).toBe(0);
   });
 
   test("of two first runs at once only one makes a team, with an admin who can sign in", async () => {
     const outcomes = await Promise.allSettled([
-      createFirstTeam(database.app, INPUT),
-      createFirstTeam(database.app, { ...INPUT, email: "other@saltmarsh.example" }),
+      createFirstTeam(INPUT, database.app),
+      createFirstTeam({ ...INPUT, email: "other@saltmarsh.example" }, database.app),
     ]);
     expect(outcomes.filter((o) => o.status === "fulfilled")).toHaveLength(1);
     const people = await database.owner.query<{ email: string }>("select email from users");
@@ -42,7 +42,7 @@ describe("first run and signing in", () => {
     expect(member).toMatchObject({ role: "admin", teamName: "Saltmarsh Optics" });
     const rows = await auditRows(database, found.teamId);
     expect(rows.map((row) => row.action)).toEqual(["team.create"]);
-    await expect(createFirstTeam(database.app, INPUT)).rejects.toMatchObject({ code: "conflict" });
+    await expect(createFirstTeam(INPUT, database.app)).rejects.toMatchObject({ code: "conflict" });
   });
 
   test("a wrong password, an unknown address and a deactivated member get nothing", async () => {

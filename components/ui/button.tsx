@@ -1,0 +1,10 @@
+import type { ButtonHTMLAttributes } from "react";
+
+export function Button({ className = "", ...props }: ButtonHTMLAttributes<HTMLButtonElement>) {
+  return (
+    <button
+      className={`min-h-10 cursor-pointer rounded-sm bg-deep px-4 font-medium text-paper disabled:cursor-wait disabled:opacity-60 ${className}`}
+      {...props}
+    />
+  );
+}

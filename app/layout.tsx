@@ -1,6 +1,8 @@
 import type { Metadata } from "next";
 import localFont from "next/font/local";
+import { cookies } from "next/headers";
 import type { ReactNode } from "react";
+import { readTheme, THEME_COOKIE } from "@/components/shell/theme";
 import "./globals.css";
 
 const title = localFont({
@@ -24,9 +26,15 @@ export const metadata: Metadata = {
   description: "Bench emission sweeps held against emission masks.",
 };
 
-export default function RootLayout({ children }: { children: ReactNode }) {
+export default async function RootLayout({ children }: { children: ReactNode }) {
+  // The server writes the theme into the page, so that no wrong one flashes up first.
+  const theme = readTheme((await cookies()).get(THEME_COOKIE)?.value);
   return (
-    <html lang="en" className={`${title.variable} ${interfaceFont.variable} ${number.variable}`}>
+    <html
+      lang="en"
+      data-theme={theme}
+      className={`${title.variable} ${interfaceFont.variable} ${number.variable}`}
+    >
       <body>{children}</body>
     </html>
   );

@@ -3,7 +3,9 @@ export function ErrorNote({ message }: { message: string | null }) {
   return (
     <div role="alert">
       {message ? (
-        <p className="mb-4 border-l-4 border-aground bg-sheet px-3 py-2">{message}</p>
+        <p className="mb-4 border border-l-4 border-rule border-l-aground bg-sheet px-3 py-2">
+          {message}
+        </p>
       ) : null}
     </div>
   );

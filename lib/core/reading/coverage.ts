@@ -1,0 +1,105 @@
+import { frequencyAt, indexAtOrAfter, pointCount } from "../sweep/axis";
+import { median } from "../stats/percentile";
+import type { FrequencyAxis, Trace } from "../sweep/trace";
+import type { Coverage, FrequencyRange } from "./reading";
+
+const NEIGHBOURS = 10;
+
+/** Median spacing in Hz around the spacing that follows point i. */
+function localStepHz(axis: FrequencyAxis, i: number): number {
+  if (axis.kind === "regular") return axis.stepHz;
+  const from = Math.max(0, i - NEIGHBOURS);
+  const to = Math.min(pointCount(axis) - 2, i + NEIGHBOURS);
+  const steps: number[] = [];
+  for (let k = from; k <= to; k += 1) steps.push(frequencyAt(axis, k + 1) - frequencyAt(axis, k));
+  return median(steps);
+}
+
+/** Ranges merged and in ascending order. */
+export function mergeRanges(ranges: readonly FrequencyRange[]): FrequencyRange[] {
+  const merged: FrequencyRange[] = [];
+  for (const range of [...ranges].sort((a, b) => a.startHz - b.startHz)) {
+    const last = merged.at(-1);
+    if (last && range.startHz <= last.stopHz) last.stopHz = Math.max(last.stopHz, range.stopHz);
+    else merged.push({ ...range });
+  }
+  return merged;
+}
+
+/** Whether a frequency lies in ascending, merged ranges (ends included). */
+export function inRanges(ranges: readonly FrequencyRange[], hz: number): boolean {
+  let low = 0;
+  let high = ranges.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if ((ranges[middle]?.stopHz ?? 0) < hz) low = middle + 1;
+    else high = middle;
+  }
+  const range = ranges[low];
+  return range !== undefined && range.startHz <= hz;
+}
+
+/**
+ * What a scan swept: broken at NaN and at spacings above twice the median step around them;
+ * its first and last point reach half a step further. Spots cover nothing.
+ */
+export function coveredRanges(trace: Trace): FrequencyRange[] {
+  const { axis, levelsDb } = trace;
+  const count = Math.min(pointCount(axis), levelsDb.length);
+  if (trace.kind === "spots" || count < 2) return [];
+  const covered = (i: number) => Number.isFinite(levelsDb[i]);
+  const ranges: FrequencyRange[] = [];
+  let startHz: number | null = null;
+  for (let i = 0; i < count; i += 1) {
+    const hz = frequencyAt(axis, i);
+    if (!covered(i)) continue;
+    if (startHz === null) startHz = i === 0 ? hz - localStepHz(axis, 0) / 2 : hz;
+    const gap = frequencyAt(axis, i + 1) - hz;
+    const joined =
+      i + 1 < count &&
+      covered(i + 1) &&
+      (axis.kind === "regular" || gap <= 2 * localStepHz(axis, i));
+    if (joined) continue;
+    const stopHz = i === count - 1 ? hz + localStepHz(axis, Math.max(0, i - 1)) / 2 : hz;
+    if (stopHz > startHz) ranges.push({ startHz, stopHz });
+    startHz = null;
+  }
+  return ranges;
+}
+
+/** Whether a finite sample of the trace falls into the range. */
+export function hasSample(trace: Trace, range: FrequencyRange): boolean {
+  const count = Math.min(pointCount(trace.axis), trace.levelsDb.length);
+  for (let i = indexAtOrAfter(trace.axis, range.startHz); i < count; i += 1) {
+    if (frequencyAt(trace.axis, i) > range.stopHz) return false;
+    if (Number.isFinite(trace.levelsDb[i])) return true;
+  }
+  return false;
+}
+
+/** Share of the bands (in log frequency) that the traces swept, and the gaps left. */
+export function coverageOf(bands: readonly FrequencyRange[], traces: readonly Trace[]): Coverage {
+  const swept = traces.map((trace) => ({ trace, ranges: coveredRanges(trace) }));
+  const gaps: FrequencyRange[] = [];
+  let whole = 0;
+  let missing = 0;
+  for (const band of bands) {
+    whole += Math.log(band.stopHz / band.startHz);
+    const ranges = mergeRanges(swept.flatMap((s) => (hasSample(s.trace, band) ? s.ranges : [])));
+    let at = band.startHz;
+    const gap = (toHz: number) => {
+      if (toHz <= at) return;
+      gaps.push({ startHz: at, stopHz: toHz });
+      missing += Math.log(toHz / at);
+    };
+    for (const range of ranges) {
+      if (range.stopHz <= at) continue;
+      if (range.startHz >= band.stopHz) break;
+      gap(range.startHz);
+      at = Math.max(at, range.stopHz);
+    }
+    gap(band.stopHz);
+  }
+  const fraction = whole > 0 ? Math.max(0, 1 - missing / whole) : 0;
+  return { fraction: gaps.length === 0 && whole > 0 ? 1 : fraction, gaps };
+}

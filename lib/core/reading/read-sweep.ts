@@ -1,0 +1,101 @@
+import type { Mask } from "../mask/mask";
+import type { MeasurementSettings } from "../sweep/settings";
+import type { Trace } from "../sweep/trace";
+import { convertLevel } from "../units/convert-level";
+import { LEVEL_UNIT_LABELS } from "../units/level-units";
+import { doubtsOf, type ReadingContext } from "./doubts";
+import { readLine } from "./line-reading";
+import type { Reading, Standing } from "./reading";
+import { findSuspects } from "./suspects";
+
+/** Counts up whenever the same input may read differently. */
+export const ENGINE_VERSION = 1;
+
+export interface ReadSweepInput {
+  traces: readonly Trace[];
+  settings: MeasurementSettings;
+  mask: Mask;
+  /** Margin in dB that the team keeps free under the mask. */
+  guardDb: number;
+  /** Impedance of the instrument; null or left out: not stated, then powers are not restated. */
+  impedanceOhm?: number | null;
+  suspectProminenceDb?: number;
+  suspectMarginDb?: number;
+  context?: ReadingContext;
+}
+
+const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
+
+/** The traces in the mask's unit, or the sentence that says why they cannot be. */
+function inMaskUnit(input: ReadSweepInput): Trace[] | string {
+  const { mask, settings } = input;
+  if (mask.distanceM !== null && settings.distanceM !== mask.distanceM) {
+    const swept =
+      settings.distanceM === null
+        ? "the sweep does not state its distance"
+        : `the sweep was taken at ${settings.distanceM} m`;
+    return `The mask holds at ${mask.distanceM} m and ${swept}; levels are never restated silently.`;
+  }
+  const traces: Trace[] = [];
+  for (const trace of input.traces) {
+    if (trace.unit === mask.unit) {
+      traces.push(trace);
+      continue;
+    }
+    const stated = input.impedanceOhm ?? null;
+    const add = convertLevel(0, trace.unit, mask.unit, stated ?? 50);
+    const units = `${LEVEL_UNIT_LABELS[trace.unit]} and the mask in ${LEVEL_UNIT_LABELS[mask.unit]}`;
+    if (add === null)
+      return `Trace ${trace.name} is in ${units}; these are different quantities, so a signal path has to be applied first.`;
+    if (stated === null && add !== convertLevel(0, trace.unit, mask.unit, 75))
+      return `Trace ${trace.name} is in ${units}; state the impedance of the instrument to restate one in the other.`;
+    const levelsDb = Float32Array.from(trace.levelsDb, (level) => level + add);
+    traces.push({ ...trace, unit: mask.unit, levelsDb });
+  }
+  return traces;
+}
+
+/** Holds a sweep against a mask: margins, standing, coverage, suspects and doubts, in dB and Hz. */
+export function readSweep(input: ReadSweepInput): Reading {
+  const { mask, settings, guardDb } = input;
+  const traces = inMaskUnit(input);
+  const refused = typeof traces === "string";
+  const empty: Reading = {
+    engineVersion: ENGINE_VERSION,
+    unit: mask.unit,
+    guardDb,
+    standing: "undecided",
+    worstLineIndex: null,
+    lines: [],
+    coverage: { fraction: 0, gaps: [] },
+    suspects: [],
+    remeasure: [],
+    doubts: [],
+    notComparable: refused ? traces : null,
+  };
+  if (refused || mask.lines.length === 0) return empty;
+  const rbwHz = settings.rbwHz ?? 0;
+  const read = mask.lines.map((line, i) => readLine(line, i, traces, rbwHz, guardDb));
+  const lines = read.map((r) => r.reading);
+  const rank = (standing: Standing) => WORST_FIRST.indexOf(standing);
+  const margin = (i: number) => lines[i]?.worst?.marginDb ?? Number.POSITIVE_INFINITY;
+  const worst = lines.reduce((best, line, i) => {
+    const byStanding = rank(line.standing) - rank(lines[best]?.standing ?? "clear");
+    return byStanding < 0 || (byStanding === 0 && margin(i) < margin(best)) ? i : best;
+  }, 0);
+  const coverage = lines.reduce(
+    (low, line) => (line.coverage.fraction < low.fraction ? line.coverage : low),
+    lines[0]?.coverage ?? empty.coverage,
+  );
+  const { suspectProminenceDb = 6, suspectMarginDb = 20, context = {} } = input;
+  return {
+    ...empty,
+    standing: lines[worst]?.standing ?? "undecided",
+    worstLineIndex: worst,
+    lines,
+    coverage,
+    suspects: findSuspects(traces, mask, rbwHz, suspectProminenceDb, suspectMarginDb),
+    remeasure: read.flatMap((r) => r.remeasure),
+    doubts: doubtsOf(mask, settings, traces, lines, context),
+  };
+}

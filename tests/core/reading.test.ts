@@ -103,3 +103,17 @@ it("never restates a distance or makes a field of a voltage", () => {
   expect(far.notComparable).toContain("10 m");
   expect(read(traces.map((t) => ({ ...t, unit: "dBuV" }))).notComparable).toContain("signal path");
 });
+
+it("takes the higher of two peak traces on one grid as the bound, in either order", () => {
+  const low = scan("peak", () => 20);
+  const high = scan("peak", (i) => (i === 5 ? 44 : 20));
+  for (const traces of [
+    [low, high],
+    [high, low],
+  ]) {
+    const reading = readSweep({ traces, settings, mask, guardDb: 0 });
+    expect(reading.standing).toBe("undecided");
+    expect(reading.lines[0]?.worst?.marginDb).toBe(-4);
+    expect(reading.remeasure.map((point) => point.frequencyHz)).toEqual([30.25e6]);
+  }
+});

@@ -66,12 +66,15 @@ function tighterRanges(used: Usable, all: readonly Usable[], rbwHz: number): Fre
   );
 }
 
-/** The lower of bounds that are equally tight at exactly the same frequency. */
-function lowestBounds(bounds: readonly Deciding[]): Deciding[] {
+/**
+ * The highest of bounds that are equally tight at the same frequency: two peak traces may be two
+ * polarizations or heights, and the line has to hold in the worse of them.
+ */
+function highestBounds(bounds: readonly Deciding[]): Deciding[] {
   const byFrequency = new Map<number, Deciding>();
   for (const point of bounds) {
     const known = byFrequency.get(point.frequencyHz);
-    if (!known || point.levelDb < known.levelDb) byFrequency.set(point.frequencyHz, point);
+    if (!known || point.levelDb > known.levelDb) byFrequency.set(point.frequencyHz, point);
   }
   return [...byFrequency.values()].sort((a, b) => a.frequencyHz - b.frequencyHz);
 }
@@ -152,7 +155,7 @@ export function readLine(
     for (const point of points) if (!inRanges(silent, point.frequencyHz)) kept.push(point);
     boundsByRank.set(used.rank, kept);
   }
-  const bounds = [...boundsByRank.values()].flatMap(lowestBounds);
+  const bounds = [...boundsByRank.values()].flatMap(highestBounds);
   const points = own.concat(bounds);
   const worst = worstOf(points);
   const coverage = coverageOf(

@@ -76,3 +76,25 @@ export const builds = pgTable(
     teamPolicy("team_id"),
   ],
 );
+
+/** Known oscillators, bit rates and converters of a build. */
+export const clocks = pgTable(
+  "clocks",
+  {
+    id: uuid("id").primaryKey().defaultRandom(),
+    teamId: teamId(),
+    buildId: uuid("build_id").notNull(),
+    name: text("name").notNull(),
+    frequencyHz: doublePrecision("frequency_hz").notNull(),
+    tolerancePpm: doublePrecision("tolerance_ppm"),
+  },
+  (t) => [
+    foreignKey({
+      name: "clocks_build",
+      columns: [t.teamId, t.buildId],
+      foreignColumns: [builds.teamId, builds.id],
+    }).onDelete("cascade"),
+    unique("clocks_name").on(t.teamId, t.buildId, t.name),
+    teamPolicy("team_id"),
+  ],
+);

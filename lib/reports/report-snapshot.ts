@@ -6,9 +6,7 @@ import type { Reading } from "@/lib/core/reading/reading";
 import type { Detector, Hold, MeasurementSettings, SweepPurpose } from "@/lib/core/sweep/settings";
 import type { TraceView } from "@/lib/core/sweep/trace-view";
 import type { LevelUnit } from "@/lib/core/units/level-units";
-
-export const PAPERS = ["a4", "letter"] as const;
-export type Paper = (typeof PAPERS)[number];
+import type { Paper } from "./paper";
 
 export interface SnapshotTrace {
   name: string;

@@ -1,0 +1,2 @@
+export const PAPERS = ["a4", "letter"] as const;
+export type Paper = (typeof PAPERS)[number];

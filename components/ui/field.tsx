@@ -1,5 +1,7 @@
 import type { InputHTMLAttributes, ReactNode } from "react";
 import { useId } from "react";
+import { CONTROL } from "./control-style";
+import { describedBy, FieldFrame } from "./field-frame";
 
 interface FieldProps extends InputHTMLAttributes<HTMLInputElement> {
   label: string;
@@ -8,31 +10,16 @@ interface FieldProps extends InputHTMLAttributes<HTMLInputElement> {
 }
 
 /** A labelled input with its hint and its error; the error is announced with the field. */
-export function Field({ label, hint, error, ...input }: FieldProps) {
+export function Field({ label, hint, error, className = "", ...input }: FieldProps) {
   const id = useId();
-  const described = [hint ? `${id}-hint` : "", error ? `${id}-error` : ""].join(" ").trim();
   return (
-    <div className="mb-4">
-      <label htmlFor={id} className="mb-1 block font-medium">
-        {label}
-      </label>
-      {hint ? (
-        <p id={`${id}-hint`} className="mb-1 text-sm text-ink-soft">
-          {hint}
-        </p>
-      ) : null}
+    <FieldFrame id={id} label={label} hint={hint} error={error}>
       <input
         id={id}
-        aria-invalid={error ? true : undefined}
-        aria-describedby={described || undefined}
-        className="min-h-10 w-full rounded-sm border border-ink-soft bg-sheet px-3 aria-invalid:border-aground"
+        {...describedBy(id, hint, error)}
+        className={`${CONTROL} ${className}`}
         {...input}
       />
-      {error ? (
-        <p id={`${id}-error`} className="mt-1 text-sm text-aground">
-          {error}
-        </p>
-      ) : null}
-    </div>
+    </FieldFrame>
   );
 }

@@ -10,11 +10,11 @@ import { useActionForm } from "@/components/ui/use-action-form";
 async function trySignIn(input: { email: string; password: string }) {
   const answer = await signIn("credentials", { ...input, redirect: false });
   if (answer?.ok) return { ok: true as const, data: null };
-  return {
-    ok: false as const,
-    message: "The address or the password is not right, or the account is no longer active.",
-    fieldErrors: {},
-  };
+  const message =
+    answer?.error === "too-many-tries"
+      ? "Too many tries. Wait some minutes and try again."
+      : "The address or the password is not right, or the account is no longer active.";
+  return { ok: false as const, message, fieldErrors: {} };
 }
 
 export function SignInForm() {

@@ -91,3 +91,22 @@ export const auditEvents = pgTable(
   },
   (t) => [index("audit_events_by_time").on(t.teamId, t.at), teamPolicy("team_id")],
 );
+
+/**
+ * Tries to sign in that were not (yet) proven right. They come before a team is known, so the rows
+ * carry none, and the app's role has no grant here: the security-definer functions are the only way
+ * in. Address and origin are kept as digests, since people type passwords into the wrong field.
+ */
+export const signInAttempts = pgTable(
+  "sign_in_attempts",
+  {
+    id: uuid("id").primaryKey().defaultRandom(),
+    addressDigest: text("address_digest").notNull(),
+    originDigest: text("origin_digest").notNull(),
+    at: timestamp("at", { withTimezone: true }).notNull().defaultNow(),
+  },
+  (t) => [
+    index("sign_in_attempts_by_address").on(t.addressDigest, t.at),
+    index("sign_in_attempts_by_time").on(t.at),
+  ],
+).enableRLS();

@@ -2,6 +2,7 @@ import type { NextAuthOptions } from "next-auth";
 import CredentialsProvider from "next-auth/providers/credentials";
 import { appDatabase } from "@/db/client";
 import { signIn } from "./sign-in";
+import { readOrigin } from "./throttle";
 
 declare module "next-auth" {
   interface Session {
@@ -27,9 +28,11 @@ export const authOptions: NextAuthOptions = {
     CredentialsProvider({
       name: "E-mail and password",
       credentials: { email: { type: "email" }, password: { type: "password" } },
-      async authorize(credentials) {
+      async authorize(credentials, request) {
         if (!credentials?.email || !credentials.password) return null;
-        const found = await signIn(appDatabase(), credentials.email, credentials.password);
+        const origin = readOrigin(request.headers?.["x-forwarded-for"]);
+        // What signIn throws when there were too many tries reaches the form by its message.
+        const found = await signIn(appDatabase(), credentials.email, credentials.password, origin);
         if (!found) return null;
         return { id: found.userId, teamId: found.teamId, name: found.name, email: found.email };
       },

@@ -27,7 +27,7 @@ describe("row-level security", () => {
     expect(role.rows).toEqual([{ rolsuper: false, rolbypassrls: false }]);
   });
 
-  test("every table but teams and users carries the team", async () => {
+  test("every table but teams, users and the tries to sign in carries the team", async () => {
     const without = await database.owner.query(
       `select t.table_name from information_schema.tables t
        where t.table_schema = 'public' and not exists (
@@ -36,7 +36,22 @@ describe("row-level security", () => {
            and c.column_name = 'team_id')
        order by 1`,
     );
-    expect(without.rows.map((row) => row.table_name)).toEqual(["teams", "users"]);
+    expect(without.rows.map((row) => row.table_name)).toEqual([
+      "sign_in_attempts",
+      "teams",
+      "users",
+    ]);
+  });
+
+  test("the tries to sign in, which belong to no team, are out of the app's reach", async () => {
+    for (const statement of [
+      sql`select 1 from sign_in_attempts`,
+      sql`insert into sign_in_attempts (address_digest, origin_digest) values ('a', 'b')`,
+      sql`delete from sign_in_attempts`,
+    ]) {
+      const tried = database.app.execute(statement);
+      await expect(tried).rejects.toMatchObject({ cause: { code: "42501" } });
+    }
   });
 
   test("a query that forgets its team, or sets none, returns nothing of another team", async () => {

@@ -178,7 +178,7 @@ CREATE TABLE "traces" (
 	"max_db" double precision,
 	"max_at_hz" double precision,
 	"floor_db" double precision,
-	"band_power_db" double precision,
+	"power_sum_db" double precision,
 	CONSTRAINT "traces_position" UNIQUE("team_id","sweep_id","position"),
 	CONSTRAINT "traces_tenant" UNIQUE("team_id","id")
 );

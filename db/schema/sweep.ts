@@ -120,7 +120,8 @@ export const traces = pgTable(
     maxDb: doublePrecision("max_db"),
     maxAtHz: doublePrecision("max_at_hz"),
     floorDb: doublePrecision("floor_db"),
-    bandPowerDb: doublePrecision("band_power_db"),
+    /** 10 log10 of the sum of power ratio times step in Hz; see lib/core/sweep/band-power.ts. */
+    powerSumDb: doublePrecision("power_sum_db"),
   },
   (t) => [
     foreignKey({

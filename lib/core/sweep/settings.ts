@@ -20,6 +20,13 @@ export const DETECTOR_LABELS: Record<Detector, string> = {
 export const HOLDS = ["none", "max-hold", "min-hold", "average"] as const;
 export type Hold = (typeof HOLDS)[number];
 
+export const HOLD_LABELS: Record<Hold, string> = {
+  none: "no hold",
+  "max-hold": "max hold",
+  "min-hold": "min hold",
+  average: "trace average",
+};
+
 export const TRACE_KINDS = ["scan", "spots"] as const;
 export type TraceKind = (typeof TRACE_KINDS)[number];
 

@@ -1,0 +1,82 @@
+import type { FactorPoint, SignalPath, Transducer } from "./signal-path";
+
+/** `path` names the field ("transducers.0.factors"), `text` is a sentence for a person. */
+export interface SignalPathProblem {
+  path: string;
+  text: string;
+}
+
+/** No transducer, amplifier or pad on a bench has a factor beyond this; a typing error has. */
+const MAX_FACTOR_DB = 200;
+
+/** True for a date of the form 2026-03-31 that exists in the calendar. */
+function isIsoDate(text: string): boolean {
+  if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return false;
+  const date = new Date(`${text}T00:00:00Z`);
+  return !Number.isNaN(date.getTime()) && date.toISOString().startsWith(text);
+}
+
+function factorProblem(points: readonly FactorPoint[]): string | null {
+  if (points.length < 2) {
+    return points.length === 0
+      ? "The factor table is empty: give at least two rows of frequency and factor."
+      : "The factor table has one row: give at least two, since nothing is assumed outside it.";
+  }
+  let before: FactorPoint | undefined;
+  for (const [i, point] of points.entries()) {
+    const { frequencyHz, factorDb } = point;
+    const row = `Row ${i + 1}`;
+    if (!Number.isFinite(frequencyHz) || frequencyHz <= 0)
+      return `${row}: the frequency must be a number above 0 Hz.`;
+    if (!Number.isFinite(factorDb)) return `${row}: the factor must be a number in dB.`;
+    if (Math.abs(factorDb) > MAX_FACTOR_DB)
+      return `${row}: a factor of ${factorDb} dB is out of reach; at most ${MAX_FACTOR_DB} dB either way is taken.`;
+    if (before && frequencyHz === before.frequencyHz)
+      return `${row}: the frequency ${frequencyHz} Hz stands twice.`;
+    if (before && frequencyHz < before.frequencyHz)
+      return `${row}: frequencies must ascend, and ${frequencyHz} Hz lies below the row before it.`;
+    before = point;
+  }
+  return null;
+}
+
+function dateProblems(transducer: Transducer, at: string): SignalPathProblem[] {
+  const { calibratedOn, dueOn } = transducer;
+  const problems: SignalPathProblem[] = [];
+  const text = "Write the date as year-month-day, for example 2026-03-31.";
+  const fine = (date: string | null) => date === null || isIsoDate(date);
+  if (!fine(calibratedOn)) problems.push({ path: `${at}.calibratedOn`, text });
+  if (!fine(dueOn)) problems.push({ path: `${at}.dueOn`, text });
+  // Sound ISO dates compare as text.
+  if (problems.length === 0 && calibratedOn !== null && dueOn !== null && dueOn < calibratedOn)
+    problems.push({ path: `${at}.dueOn`, text: "The due date lies before the calibration." });
+  return problems;
+}
+
+/**
+ * Everything that keeps a signal path from being used; empty when it can be. Checked: an
+ * impedance in Ω above 0, names that are there and differ, factor tables of two rows or more
+ * with ascending frequencies in Hz and factors in dB, and dates (ISO) that exist and are in order.
+ * A path without transducers is sound: the level at the instrument's input is then the result.
+ */
+export function validateSignalPath(path: SignalPath): SignalPathProblem[] {
+  const problems: SignalPathProblem[] = [];
+  if (!(path.impedanceOhm > 0 && Number.isFinite(path.impedanceOhm)))
+    problems.push({ path: "impedanceOhm", text: "The impedance must be above 0 Ω." });
+  const names = new Set<string>();
+  path.transducers.forEach((transducer, i) => {
+    const at = `transducers.${i}`;
+    const name = transducer.name.trim();
+    if (name === "") problems.push({ path: `${at}.name`, text: "Name this transducer." });
+    else if (names.has(name))
+      problems.push({
+        path: `${at}.name`,
+        text: `Two transducers are named "${name}": give each its own name.`,
+      });
+    names.add(name);
+    problems.push(...dateProblems(transducer, at));
+    const text = factorProblem(transducer.factors);
+    if (text !== null) problems.push({ path: `${at}.factors`, text });
+  });
+  return problems;
+}

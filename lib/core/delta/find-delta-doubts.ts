@@ -1,0 +1,39 @@
+import { HOLD_LABELS } from "../sweep/settings";
+import { formatFrequency } from "../units/format";
+import type { ComparedSweep } from "./compared-sweep";
+import { sharedTraces } from "./find-mismatches";
+
+function differs<T>(
+  label: string,
+  before: T | null,
+  after: T | null,
+  show: (value: T) => string,
+): string[] {
+  if (before === after) return [];
+  const said = (value: T | null) => (value === null ? "not stated" : show(value));
+  return [`${label} differs: ${said(before)} before, ${said(after)} after.`];
+}
+
+/** Differences that weaken a delta without forbidding it; whole sentences. */
+export function findDeltaDoubts(before: ComparedSweep, after: ComparedSweep): string[] {
+  const [a, b] = [before.settings, after.settings];
+  const shared = sharedTraces(before, after);
+  const doubts = [
+    ...differs("Attenuation", a.attenuationDb, b.attenuationDb, (v) => `${v} dB`),
+    ...differs("The video bandwidth", a.vbwHz, b.vbwHz, (v) => formatFrequency(v)),
+    ...differs("The sweep time", a.sweepTimeS, b.sweepTimeS, (v) => `${v} s`),
+    ...differs("The preamplifier", a.preamplifier, b.preamplifier, (v) => (v ? "on" : "off")),
+  ];
+  if (a.rbwHz !== null && a.rbwKind !== b.rbwKind && (a.rbwKind === null || b.rbwKind === null))
+    doubts.push("Only one side states whether its bandwidth is counted at 3 dB or 6 dB.");
+  if (shared) {
+    const { before: earlier, after: later } = shared;
+    doubts.push(...differs("The hold", earlier.hold, later.hold, (v) => HOLD_LABELS[v]));
+    const [s, t] = [earlier.stepHz ?? 0, later.stepHz ?? 0];
+    if (Math.abs(s - t) > 0.01 * Math.max(s, t))
+      doubts.push(
+        `The frequency step differs: ${formatFrequency(s)} before, ${formatFrequency(t)} after.`,
+      );
+  }
+  return doubts;
+}

@@ -49,7 +49,8 @@ export const GANNET_STORY: StoryLadder[] = [
     ...common,
     buildName: "G2",
     name: "From firmware to cables",
-    description: "The scrambler is in the firmware now; the supply lead is the next to go.",
+    description:
+      "The scrambler is in the firmware now and the cable has a clamp; the supply lead is next.",
     ambient: { siteSeed: SITE_SEED, gainDb: 0.5 },
     steps: [
       {
@@ -57,28 +58,28 @@ export const GANNET_STORY: StoryLadder[] = [
         description: "Scrambler on, coding off.",
         measuredOn: "2026-07-27",
         link: scrambling,
-        treatments: [housing("Board shield can", 3)],
+        treatments: [housing("Board shield can", 3), connectorShell(1.5)],
       },
       {
         name: "8b/10b coding",
         description: "Sync words shortened; coding on the payload.",
         measuredOn: "2026-07-28",
         link: coded,
-        treatments: [housing("Board shield can", 3)],
+        treatments: [housing("Board shield can", 3), connectorShell(1.5)],
       },
       {
         name: "Clock spread 0.5 % down",
         description: "Triangular, 31.5 kHz.",
         measuredOn: "2026-07-30",
         link: { ...coded, ...spreadBy(0.5) },
-        treatments: [housing("Board shield can", 3)],
+        treatments: [housing("Board shield can", 3), connectorShell(1.5)],
       },
       {
         name: "Ferrite on the supply cable",
         description: "Split core, two turns, 4 cm from the housing.",
         measuredOn: "2026-08-04",
         link: { ...coded, ...spreadBy(0.5) },
-        treatments: [housing("Board shield can", 3), supplyFerrite()],
+        treatments: [housing("Board shield can", 3), connectorShell(1.5), supplyFerrite()],
       },
     ],
   },

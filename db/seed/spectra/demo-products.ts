@@ -88,7 +88,7 @@ export const GANNET: ProductModel = {
   },
   clocks: [
     oscillator(seam(-58, 640e6), 18),
-    converter(supplyCable(-80, 52e6), 1.117e6, 12),
+    converter(supplyCable(-79, 52e6), 1.117e6, 12),
     wordClock(seam(-58, 640e6), 3.2e9),
   ],
 };
@@ -96,7 +96,7 @@ export const GANNET: ProductModel = {
 export const PLOVER: ProductModel = {
   amplitudeV: 0.5,
   coupling: {
-    atOneGhzDb: -46,
+    atOneGhzDb: -44,
     slopeDbPerDecade: 14,
     resonances: [
       { hz: 2.95e9, gainDb: 5, q: 5 },
@@ -117,7 +117,7 @@ export const PLOVER: ProductModel = {
 export const TERN: ProductModel = {
   amplitudeV: 0.8,
   coupling: {
-    atOneGhzDb: -47,
+    atOneGhzDb: -52,
     slopeDbPerDecade: 6,
     resonances: [
       { hz: 590e6, gainDb: 6, q: 5 },
@@ -129,7 +129,7 @@ export const TERN: ProductModel = {
   },
   clocks: [
     oscillator(seam(-52, 720e6), 41),
-    converter(supplyCable(-72, 38e6), 1.83e6, 24),
+    converter(supplyCable(-85, 38e6), 1.83e6, 24),
     wordClock(seam(-54, 720e6), 1.2e9),
   ],
 };
@@ -150,7 +150,7 @@ export function supplyFerrite(): Treatment {
   return {
     name: "Ferrite core on the supply cable",
     leaks: ["supply-cable"],
-    attenuation: over([30, 6], [80, 9], [200, 10], [500, 7], [1000, 4]),
+    attenuation: over([30, 7], [80, 10], [200, 11], [500, 7], [1000, 4]),
   };
 }
 
@@ -173,6 +173,6 @@ export function supplyFilter(): Treatment {
   return {
     name: "Common-mode choke at the supply entry",
     leaks: ["supply-cable"],
-    attenuation: over([30, 9], [100, 8], [300, 5], [1000, 2]),
+    attenuation: over([30, 7], [100, 7], [300, 5], [1000, 2]),
   };
 }

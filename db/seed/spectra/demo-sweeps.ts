@@ -1,63 +1,14 @@
-import type { SignalPath } from "@/lib/core/bench/signal-path";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { MeasurementSettings, Polarization, SweepPurpose } from "@/lib/core/sweep/settings";
+import { DEMO_BENCHES, type DemoBench } from "./demo-benches";
 import { GANNET_STORY } from "./demo-gannet";
 import { PLOVER_STORY } from "./demo-plover";
 import type { BuildName, ProgramName, StoryLadder } from "./demo-story";
 import { TERN_STORY } from "./demo-tern";
 import { deriveSeed } from "./random";
-import type { Receiver, SeedDetector, SpectrumSetup } from "./setup";
+import type { SeedDetector, SpectrumSetup } from "./setup";
 import { makeSpectrum } from "./spectrum";
-import { PATH_ABOVE_1_GHZ, PATH_BELOW_1_GHZ } from "./transducers";
 import { writeSweepCsv, type CsvLayout } from "./write-csv";
-
-export interface DemoBench {
-  key: "below-1-ghz" | "above-1-ghz";
-  name: string;
-  distanceM: number;
-  path: SignalPath;
-  startHz: number;
-  stopHz: number;
-  points: number;
-  rbwHz: number;
-  receiver: Receiver;
-}
-
-/** 50 kHz and 500 kHz steps: under half the RBW, and exact in a file that is rounded to 1 Hz. */
-export const DEMO_BENCHES: DemoBench[] = [
-  {
-    key: "below-1-ghz",
-    name: "3 m semi-open bench (30 MHz–1 GHz)",
-    distanceM: 3,
-    path: PATH_BELOW_1_GHZ,
-    startHz: 30e6,
-    stopHz: 1e9,
-    points: 19_401,
-    rbwHz: 120e3,
-    receiver: {
-      noiseFigureDb: 10,
-      attenuationDb: 0,
-      preamplifierNoiseFigureDb: 0,
-      looks: 3000,
-    },
-  },
-  {
-    key: "above-1-ghz",
-    name: "3 m horn bench (1–6 GHz)",
-    distanceM: 3,
-    path: PATH_ABOVE_1_GHZ,
-    startHz: 1e9,
-    stopHz: 6e9,
-    points: 10_001,
-    rbwHz: 1e6,
-    receiver: {
-      noiseFigureDb: 16,
-      attenuationDb: 0,
-      preamplifierNoiseFigureDb: 3.5,
-      looks: 5000,
-    },
-  },
-];
 
 export interface DemoSweep {
   name: string;

@@ -137,7 +137,6 @@ CREATE TABLE "sweeps" (
 	"settings" jsonb NOT NULL,
 	"link" jsonb NOT NULL,
 	"guard_db" double precision NOT NULL,
-	"distance_m" double precision,
 	"notes" text DEFAULT '' NOT NULL,
 	"on_record" boolean NOT NULL,
 	"imported_by" uuid NOT NULL,

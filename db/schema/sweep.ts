@@ -47,7 +47,6 @@ export const sweeps = pgTable(
     settings: jsonb("settings").$type<MeasurementSettings>().notNull(),
     link: jsonb("link").$type<LinkSettings>().notNull(),
     guardDb: doublePrecision("guard_db").notNull(),
-    distanceM: doublePrecision("distance_m"),
     notes: text("notes").notNull().default(""),
     /** Counts for the trend of its build. */
     onRecord: boolean("on_record").notNull(),

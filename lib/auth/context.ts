@@ -2,9 +2,17 @@ import type { Database } from "@/db/client";
 import type { Permission, Role } from "./permissions";
 import { can } from "./permissions";
 
+/** Where whole files lie, by key. A key's bytes never change once put. */
+export interface FileStore {
+  put: (key: string, bytes: Uint8Array) => Promise<void>;
+  /** null when nothing lies there. */
+  get: (key: string) => Promise<Uint8Array | null>;
+}
+
 /** Who acts, for which team, on which database. Every command and query starts from one. */
 export interface Context {
   db: Database;
+  files: FileStore;
   teamId: string;
   userId: string;
   role: Role;

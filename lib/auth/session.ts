@@ -3,6 +3,7 @@ import { getServerSession } from "next-auth";
 import { redirect } from "next/navigation";
 import { appDatabase } from "@/db/client";
 import type { Context } from "./context";
+import { folderStore } from "@/lib/adapters/folder-store";
 import { authOptions } from "./options";
 import type { Member } from "./read-member";
 import { readMember } from "./read-member";
@@ -21,7 +22,13 @@ export const findCurrentMember = cache(async (): Promise<CurrentMember | null> =
   if (!member) return null;
   return {
     member,
-    ctx: { db, teamId: member.teamId, userId: member.userId, role: member.role },
+    ctx: {
+      db,
+      files: folderStore(),
+      teamId: member.teamId,
+      userId: member.userId,
+      role: member.role,
+    },
   };
 });
 

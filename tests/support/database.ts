@@ -4,6 +4,7 @@ import type { Database } from "@/db/client";
 import { openDatabase } from "@/db/client";
 import type { Context } from "@/lib/auth/context";
 import type { Role } from "@/lib/auth/permissions";
+import { memoryFiles } from "./files";
 
 export interface TestDatabase {
   /** As the app: bound by row-level security. */
@@ -74,5 +75,5 @@ export async function makeMember(
     user.rows[0].id,
     role,
   ]);
-  return { db: database.app, teamId: team, userId: user.rows[0].id, role };
+  return { db: database.app, files: memoryFiles(), teamId: team, userId: user.rows[0].id, role };
 }

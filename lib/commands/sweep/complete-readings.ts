@@ -1,0 +1,101 @@
+import { and, eq, isNull, sql } from "drizzle-orm";
+import type { Transaction } from "@/db/client";
+import {
+  builds,
+  maskRevisions,
+  masks,
+  programMasks,
+  readings,
+  signalPathRevisions,
+  sweeps,
+} from "@/db/schema";
+import { loadTraces } from "@/lib/queries/sweep/load-trace";
+import { overdueOn } from "./overdue";
+import type { SweepToRead } from "./store-reading";
+import { storeReading } from "./store-reading";
+
+/** Which sweeps to look at: all that concern one program, or one mask. */
+type Scope = { programId: string } | { maskId: string };
+
+/** Product sweeps in scope and the newest mask revisions that they have not been held against. */
+function selectMissing(tx: Transaction, teamId: string, scope: Scope) {
+  const newest = sql`${maskRevisions.revision} = (
+    select max(r.revision) from mask_revisions r
+    where r.team_id = ${maskRevisions.teamId} and r.mask_id = ${maskRevisions.maskId})`;
+  return tx
+    .select({
+      sweepId: sweeps.id,
+      settings: sweeps.settings,
+      guardDb: sweeps.guardDb,
+      measuredOn: sweeps.measuredOn,
+      path: signalPathRevisions.content,
+      maskId: masks.id,
+      revisionId: maskRevisions.id,
+      content: maskRevisions.content,
+    })
+    .from(sweeps)
+    .innerJoin(builds, and(eq(builds.teamId, sweeps.teamId), eq(builds.id, sweeps.buildId)))
+    .innerJoin(
+      programMasks,
+      and(eq(programMasks.teamId, builds.teamId), eq(programMasks.programId, builds.programId)),
+    )
+    .innerJoin(masks, and(eq(masks.teamId, programMasks.teamId), eq(masks.id, programMasks.maskId)))
+    .innerJoin(
+      maskRevisions,
+      and(eq(maskRevisions.teamId, masks.teamId), eq(maskRevisions.maskId, masks.id), newest),
+    )
+    .innerJoin(
+      signalPathRevisions,
+      and(
+        eq(signalPathRevisions.teamId, sweeps.teamId),
+        eq(signalPathRevisions.id, sweeps.signalPathRevisionId),
+      ),
+    )
+    .leftJoin(
+      readings,
+      and(
+        eq(readings.teamId, sweeps.teamId),
+        eq(readings.sweepId, sweeps.id),
+        eq(readings.maskRevisionId, maskRevisions.id),
+      ),
+    )
+    .where(
+      and(
+        eq(sweeps.teamId, teamId),
+        eq(sweeps.purpose, "product"),
+        isNull(sweeps.archivedAt),
+        isNull(readings.id),
+        "maskId" in scope ? eq(masks.id, scope.maskId) : eq(builds.programId, scope.programId),
+      ),
+    )
+    .orderBy(sweeps.id);
+}
+
+/**
+ * Makes the readings that are missing after a mask or a program's masks changed, inside the
+ * transaction of that change. Returns how many were made.
+ */
+export async function completeReadings(
+  tx: Transaction,
+  teamId: string,
+  scope: Scope,
+): Promise<number> {
+  const missing = await selectMissing(tx, teamId, scope);
+  let sweep: SweepToRead | undefined;
+  // Rows come ordered by sweep, so that only one sweep's levels are in memory at a time.
+  for (const row of missing) {
+    if (sweep?.sweepId !== row.sweepId) {
+      sweep = {
+        teamId,
+        sweepId: row.sweepId,
+        traces: await loadTraces(tx, teamId, row.sweepId),
+        settings: row.settings,
+        guardDb: row.guardDb,
+        impedanceOhm: row.path.impedanceOhm,
+        overdueTransducers: overdueOn(row.path, row.measuredOn),
+      };
+    }
+    await storeReading(tx, sweep, row);
+  }
+  return missing.length;
+}

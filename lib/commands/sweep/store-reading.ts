@@ -1,0 +1,65 @@
+import type { Transaction } from "@/db/client";
+import { readings, suspects } from "@/db/schema";
+import type { Mask } from "@/lib/core/mask/mask";
+import { readSweep } from "@/lib/core/reading/read-sweep";
+import type { MeasurementSettings } from "@/lib/core/sweep/settings";
+import type { Trace } from "@/lib/core/sweep/trace";
+
+export interface MaskToHold {
+  maskId: string;
+  revisionId: string;
+  content: Mask;
+}
+
+export interface SweepToRead {
+  teamId: string;
+  sweepId: string;
+  traces: Trace[];
+  settings: MeasurementSettings;
+  guardDb: number;
+  impedanceOhm: number;
+  overdueTransducers: string[];
+}
+
+/** Holds a sweep against one mask revision and keeps the reading with its suspects. */
+export async function storeReading(
+  tx: Transaction,
+  sweep: SweepToRead,
+  mask: MaskToHold,
+): Promise<void> {
+  const { teamId, sweepId, overdueTransducers, ...measured } = sweep;
+  const reading = readSweep({
+    ...measured,
+    mask: mask.content,
+    context: { overdueTransducers },
+  });
+  const { suspects: found, ...content } = reading;
+  const worst = reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];
+  const [row] = await tx
+    .insert(readings)
+    .values({
+      teamId,
+      sweepId,
+      maskId: mask.maskId,
+      maskRevisionId: mask.revisionId,
+      engineVersion: reading.engineVersion,
+      standing: reading.standing,
+      marginDb: worst?.worst?.marginDb ?? null,
+      marginAtHz: worst?.worst?.frequencyHz ?? null,
+      lineName: worst?.name ?? null,
+      coverage: reading.coverage.fraction,
+      notComparable: reading.notComparable,
+      content,
+    })
+    .returning({ id: readings.id });
+  if (!row) throw new Error("The reading was not stored.");
+  if (found.length === 0) return;
+  await tx.insert(suspects).values(
+    found.map(({ traceIndex, ...suspect }) => ({
+      teamId,
+      readingId: row.id,
+      tracePosition: traceIndex,
+      ...suspect,
+    })),
+  );
+}

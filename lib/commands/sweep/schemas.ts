@@ -132,3 +132,9 @@ export const importSweepSchema = z.object({
   again: z.boolean(),
 });
 export type ImportSweepInput = z.infer<typeof importSweepSchema>;
+
+export const sweepIdSchema = z.object({ sweepId: z.uuid() });
+
+export const setOnRecordSchema = z.object({ sweepId: z.uuid(), onRecord: z.boolean() });
+
+export const recordStepSchema = z.object({ stepId: z.uuid() });

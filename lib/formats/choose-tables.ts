@@ -1,0 +1,92 @@
+import type { FoundTable, HeaderLine, TextParts } from "./find-tables";
+import { isNumeric } from "./parse-number";
+import { cellProblem, shapedCells } from "./read-rows";
+import { quote, Refusal } from "./refusal";
+
+/** Tables shorter than this may be settings that happen to line up; they are read as header too. */
+const SETTING_ROWS = 200;
+
+export interface ChosenTable {
+  table: FoundTable;
+  /** All lines above it that may speak of it. */
+  header: HeaderLine[];
+}
+
+function asLines(table: FoundTable): HeaderLine[] {
+  if (table.rows.rows > SETTING_ROWS) return [];
+  const joint = table.shape.delimiter.length === 1 ? table.shape.delimiter : " ";
+  return table.probe
+    .slice(0, table.rows.rows)
+    .map((cells, i) => ({ line: table.rows.firstLine + i, text: cells.join(joint) }));
+}
+
+function refuseWithoutTable({ footer }: TextParts): never {
+  const single = footer.find(({ text }) => {
+    const cells = text.split(/[;,\t ]+/).filter((cell) => cell !== "");
+    return cells.length >= 2 && cells.every(isNumeric);
+  });
+  if (single)
+    throw new Refusal(
+      `Line ${single.line} is the only row of numbers; a trace needs at least two points. Export the whole trace.`,
+      single.line,
+    );
+  const bad = footer.find(({ text }) => /^\s*[+-]?\d[\d.]*\s*[,;\t]/.test(text));
+  const lines = footer.filter(({ text }) => text.trim() !== "").length;
+  throw new Refusal(
+    bad
+      ? `No table of frequency and level was found; line ${bad.line} begins like one but is none: ${quote(bad.text)}. Correct it or export the trace again.`
+      : `No table of frequency and level was found: the file holds ${lines} ${lines === 1 ? "line" : "lines"} of header or text and no data. Export the trace's data, not only its settings.`,
+    bad?.line ?? null,
+  );
+}
+
+/** A row above the table that would belong to it but for one bad cell must not vanish. */
+function checkRowsAbove({ table, header }: ChosenTable): void {
+  const { shape, rows } = table;
+  if (shape.frequencyColumn < 0) return;
+  for (const { line, text } of header.slice(-3).reverse()) {
+    const cells = text.trim() === "" ? null : shapedCells(text, shape);
+    if (cells === null || line < rows.firstLine - 3) return;
+    if (!isNumeric(cells[shape.frequencyColumn] ?? "")) return;
+    const problem = cellProblem(cells, shape, line);
+    if (problem) throw problem;
+  }
+}
+
+/** The longest table, and those that repeat its layout at a like length: further traces. */
+export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warnings: string[] } {
+  const { tables } = parts;
+  const main = tables.toSorted((a, b) => b.rows.rows - a.rows.rows)[0];
+  if (!main) return refuseWithoutTable(parts);
+  const chosen: ChosenTable[] = [];
+  const warnings: string[] = [];
+  let lines: HeaderLine[] = [];
+  for (const table of tables) {
+    lines = [...lines, ...table.header];
+    const isSibling =
+      table.columns.length === main.columns.length &&
+      table.shape.frequencyColumn === main.shape.frequencyColumn &&
+      table.shape.delimiter === main.shape.delimiter &&
+      2 * table.rows.rows >= main.rows.rows;
+    if (table === main || isSibling) {
+      chosen.push({ table, header: lines });
+      lines = [];
+    } else {
+      if (table.rows.rows >= 5)
+        warnings.push(
+          `The smaller table in lines ${table.rows.firstLine} to ${table.rows.lastLine} was not read as a trace.`,
+        );
+      lines = [...lines, ...asLines(table)];
+    }
+  }
+  for (const entry of chosen) {
+    checkRowsAbove(entry);
+    if (entry.table.rows.problem) throw entry.table.rows.problem;
+  }
+  if (main.rows.rows < 2)
+    throw new Refusal(
+      `Line ${main.rows.firstLine} is the only row of the table; a trace needs at least two points.`,
+      main.rows.firstLine,
+    );
+  return { chosen, warnings };
+}

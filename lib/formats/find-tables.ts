@@ -1,0 +1,168 @@
+import { describeColumns, type ColumnInfo } from "./describe-columns";
+import { detectDecimal } from "./detect-decimal";
+import { isGap, isNumeric, type DecimalMark } from "./parse-number";
+import { readRows, type TableRows, type TableShape } from "./read-rows";
+import { splitRow, trimCells, WHITESPACE } from "./split-row";
+import { isComment, lineEnd, nextLine } from "./text-lines";
+
+export interface HeaderLine {
+  line: number;
+  text: string;
+}
+
+export interface FoundTable {
+  shape: TableShape;
+  rows: TableRows;
+  columns: ColumnInfo[];
+  /** The first rows as text. */
+  probe: string[][];
+  /** Lines above it, back to the table before. */
+  header: HeaderLine[];
+  isDecimalOpen: boolean;
+  /** Why the frequency column was chosen, when another might be it. */
+  frequencyDoubt: string | null;
+}
+
+const DELIMITERS = ["\t", ";", "^", "|", ",", WHITESPACE];
+const PROBE_ROWS = 200;
+/** A file without a table is not searched for ever. */
+const MAX_HEADER_LINES = 20_000;
+/** Text that may stand in a row of data: a label, a unit, a date or a time. */
+const ROW_TEXT = /^(?:[\p{L}\u00b5<(["']|\d{1,4}[-/.:]\d)/u;
+
+type CellKind = "number" | "text" | "odd";
+
+function kindOf(cell: string): CellKind {
+  if (isNumeric(cell) || isGap(cell)) return "number";
+  return ROW_TEXT.test(cell) ? "text" : "odd";
+}
+
+function sameShape(first: string[], second: string[]): boolean {
+  const [a, b] = [trimCells(first), trimCells(second)];
+  if (first.length !== second.length && a.length !== b.length) return false;
+  const kinds = Array.from({ length: Math.max(a.length, b.length) }, (_, i) => [
+    kindOf(a[i] ?? ""),
+    kindOf(b[i] ?? ""),
+  ]);
+  if (kinds.some(([x, y]) => x !== y || x === "odd")) return false;
+  const numbers = kinds.filter((_, i) => isNumeric(a[i] ?? "") && isNumeric(b[i] ?? "")).length;
+  return numbers >= 2 || (numbers === 1 && kinds.length === 1);
+}
+
+/** Delimiter under which two neighbouring lines are rows of one table; null when none is. */
+function rowDelimiter(line: string, next: string, preferred: string | null): string | null {
+  if (!/\d/.test(line) || !/\d/.test(next)) return null;
+  const candidates = preferred === null ? DELIMITERS : [preferred, ...DELIMITERS];
+  for (const delimiter of candidates) {
+    if (delimiter !== WHITESPACE && !line.includes(delimiter)) continue;
+    const [first, second] = [splitRow(line, delimiter), splitRow(next, delimiter)];
+    if (trimCells(first).length >= 2 && sameShape(first, second)) return delimiter;
+  }
+  const lone = [line, next].map((text) => [text.trim().replace(/[,;]$/, "")]);
+  return sameShape(lone[0] ?? [], lone[1] ?? []) ? (line.includes(";") ? ";" : ",") : null;
+}
+
+/** The first rows of a table as cells; comments and blank lines are passed over. */
+function probeRows(text: string, from: number, delimiter: string): string[][] {
+  const rows: string[][] = [];
+  let count = 0;
+  for (let at = from, tries = 0; at < text.length && tries < PROBE_ROWS; tries += 1) {
+    const end = lineEnd(text, at);
+    const line = text.slice(at, end);
+    at = nextLine(text, end);
+    if (line.trim() === "" || isComment(line)) continue;
+    const cells = splitRow(line, delimiter);
+    if (rows.length === 0) count = cells.length;
+    if (Math.abs(cells.length - count) > 1) break;
+    rows.push(cells);
+  }
+  return rows;
+}
+
+function columnCells(probe: string[][], column: number): string[] {
+  return probe.map((cells) => cells[column] ?? "").filter((cell) => cell !== "");
+}
+
+function readTable(
+  text: string,
+  from: number,
+  header: HeaderLine[],
+  line: number,
+  delimiter: string,
+  decimalAnswer: DecimalMark | undefined,
+): FoundTable {
+  const raw = probeRows(text, from, delimiter);
+  const count = Math.max(1, ...raw.slice(0, PROBE_ROWS).map((cells) => trimCells(cells).length));
+  const probe = raw.map((cells) => cells.slice(0, count));
+  const cellsByColumn = Array.from({ length: count }, (_, i) => columnCells(probe, i));
+  const isNumberColumn = cellsByColumn.map((cells) => {
+    const numbers = cells.filter(isNumeric).length;
+    return numbers > 0
+      ? 2 * numbers >= cells.filter((cell) => !isGap(cell)).length
+      : cells.every(isGap);
+  });
+  const guess = detectDecimal(cellsByColumn.filter((_, i) => isNumberColumn[i]));
+  const decimal = decimalAnswer ?? guess.decimal;
+  const description = describeColumns({
+    probe,
+    isNumberColumn,
+    header: header.map((entry) => entry.text),
+    delimiter,
+    decimal,
+  });
+  const shape: TableShape = {
+    delimiter,
+    decimal,
+    columns: description.columns.map((column) => {
+      if (column.isNumber) return { kind: "number" };
+      return column.rowUnit === null ? { kind: "text" } : { kind: "unit", text: column.rowUnit };
+    }),
+    frequencyColumn: description.frequencyColumn,
+  };
+  return {
+    shape,
+    rows: readRows(text, from, line, shape),
+    columns: description.columns,
+    probe,
+    header,
+    isDecimalOpen: guess.isOpen && decimalAnswer === undefined,
+    frequencyDoubt: description.frequencyDoubt,
+  };
+}
+
+export interface TextParts {
+  tables: FoundTable[];
+  /** Lines after the last table. */
+  footer: HeaderLine[];
+}
+
+/** Finds every table of numbers by its structure; nothing is known about who wrote the file. */
+export function findTables(text: string, decimalAnswer?: DecimalMark): TextParts {
+  const tables: FoundTable[] = [];
+  let header: HeaderLine[] = [];
+  let preferred: string | null = null;
+  let position = 0;
+  let line = 1;
+  while (position < text.length && header.length < MAX_HEADER_LINES) {
+    const end = lineEnd(text, position);
+    const content = text.slice(position, end);
+    const following = nextLine(text, end);
+    preferred = /^\s*"?sep=(.)"?\s*$/i.exec(content)?.[1] ?? preferred;
+    const next = text.slice(following, lineEnd(text, following));
+    const delimiter = isComment(content) ? null : rowDelimiter(content, next, preferred);
+    if (delimiter !== null) {
+      const table = readTable(text, position, header, line, delimiter, decimalAnswer);
+      if (table.rows.rows > 0) {
+        tables.push(table);
+        header = [];
+        position = table.rows.endPosition;
+        line = table.rows.lastLine + 1;
+        continue;
+      }
+    }
+    header.push({ line, text: content });
+    position = following;
+    line += 1;
+  }
+  return { tables, footer: header };
+}

@@ -76,14 +76,17 @@ function SizedChart(props: CoastChartProps & { width: number }) {
   });
   const ready = state === "ready" && !prepared.empty;
   const readout = ready && pointedHz !== null ? readAt(traces, mask, pointedHz, view, scale) : null;
-  const rows = readoutRows(prepared.traces, mask, width);
+  // On a narrow screen it stands below, where its rows do not push the chart from under the finger.
+  const narrow = width < 640;
+  const rows = narrow ? 2 : readoutRows(prepared.traces, mask, width);
+  const reading = <CoastReadout readout={readout} hint={ready ? HINT : ""} rows={rows} />;
   return (
     <>
       <div className="flex flex-wrap items-start justify-between gap-x-4 gap-y-1">
         <CoastKey traces={prepared.traces} />
         <CoastControls {...{ view, extent, scale, onView, onScale }} />
       </div>
-      <CoastReadout readout={readout} hint={ready ? HINT : ""} rows={rows} />
+      {narrow ? null : reading}
       <div
         ref={listenToWheel}
         role="group"
@@ -155,6 +158,7 @@ function SizedChart(props: CoastChartProps & { width: number }) {
           right={plane.right}
         />
       ) : null}
+      {narrow ? reading : null}
       {prepared.notes.map((note) => (
         <p key={note} className="mt-1 text-[0.8rem] text-ink-soft">
           {note}

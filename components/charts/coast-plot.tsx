@@ -2,10 +2,9 @@
 
 import { memo, useId } from "react";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
-import { ChartFrame } from "./chart-frame";
 import type { ChartMargin } from "./chart-plane";
+import { FrequencyFrame } from "./frequency-frame";
 import { Coast, Land } from "./land";
-import { labelLevel } from "./level-ticks";
 import type { PreparedCoast, PreparedTrace } from "./prepare-coast";
 
 function Water({ trace, id, index }: { trace: PreparedTrace; id: string; index: number }) {
@@ -65,32 +64,13 @@ export const CoastPlot = memo(function CoastPlot(props: {
   const { plane, coastline, traces, unit } = prepared;
   const id = useId();
   const order = { main: 0, ambient: 1, outline: 2 };
-  const x = plane.scale === "log" ? { ...plane.view, fromHz: plane.hzAt(plane.left) } : plane.view;
   return (
-    <ChartFrame
-      width={width}
-      height={height}
-      margin={margin}
+    <FrequencyFrame
+      {...{ plane, width, height, margin }}
+      frequencyTicks={prepared.frequencyTicks}
+      levelTicks={prepared.levelTicks}
+      unit={unit ? LEVEL_UNIT_LABELS[unit] : null}
       label={prepared.summary}
-      x={{
-        kind: plane.scale,
-        from: x.fromHz,
-        to: x.toHz,
-        ticks: prepared.frequencyTicks.map(({ hz, label, weight }) => ({
-          value: hz,
-          label: label ?? "",
-          minor: weight === "minor",
-        })),
-      }}
-      y={{
-        kind: "linear",
-        from: plane.levels.fromDb,
-        to: plane.levels.toDb,
-        ticks: prepared.levelTicks.map((level) => ({
-          value: level,
-          label: unit ? labelLevel(level) : "",
-        })),
-      }}
     >
       <defs>
         <clipPath id={`${id}-plot`}>
@@ -115,11 +95,6 @@ export const CoastPlot = memo(function CoastPlot(props: {
           ))}
         {coastline ? <Coast coastline={coastline} /> : null}
       </g>
-      {unit ? (
-        <text x={0} y={11} fontSize="11" fill="var(--ink-soft)">
-          {LEVEL_UNIT_LABELS[unit]}
-        </text>
-      ) : null}
-    </ChartFrame>
+    </FrequencyFrame>
   );
 });

@@ -1,7 +1,9 @@
+import { WrittenNames } from "./written-names";
 import type { Coastline } from "./prepare-coastline";
 
 /** Hatched land above the coast; drawn below the water. */
-export function Land({ coastline, id }: { coastline: Coastline; id: string }) {
+export function Land(props: { coastline: Pick<Coastline, "land" | "shore">; id: string }) {
+  const { coastline, id } = props;
   return (
     <g>
       <defs>
@@ -47,24 +49,7 @@ export function Coast({ coastline }: { coastline: Coastline }) {
           strokeLinejoin="round"
         />
       ))}
-      {coastline.names.map((name, i) => (
-        <text
-          key={i}
-          transform={`translate(${name.x.toFixed(1)} ${name.y.toFixed(1)}) rotate(${name.angleDeg.toFixed(1)})`}
-          dy="0.33em"
-          textAnchor="middle"
-          fontSize="11"
-          fontWeight="500"
-          fill="var(--ink)"
-          stroke="var(--sheet)"
-          strokeWidth="3"
-          strokeOpacity="0.75"
-          strokeLinejoin="round"
-          paintOrder="stroke"
-        >
-          {name.name}
-        </text>
-      ))}
+      <WrittenNames names={coastline.names} />
     </g>
   );
 }

@@ -1,3 +1,4 @@
+import type { SQL } from "drizzle-orm";
 import { and, eq, isNull, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import {
@@ -14,8 +15,14 @@ import { overdueOn } from "./overdue";
 import type { SweepToRead } from "./store-reading";
 import { storeReading } from "./store-reading";
 
-/** Which sweeps to look at: all that concern one program, or one mask. */
-type Scope = { programId: string } | { maskId: string };
+/** Which sweeps to look at: all that concern one program or one mask, or a single one. */
+type Scope = { programId: string } | { maskId: string } | { sweepId: string };
+
+function inScope(scope: Scope): SQL {
+  if ("maskId" in scope) return eq(masks.id, scope.maskId);
+  if ("sweepId" in scope) return eq(sweeps.id, scope.sweepId);
+  return eq(builds.programId, scope.programId);
+}
 
 /** Product sweeps in scope and the newest mask revisions that they have not been held against. */
 function selectMissing(tx: Transaction, teamId: string, scope: Scope) {
@@ -65,7 +72,7 @@ function selectMissing(tx: Transaction, teamId: string, scope: Scope) {
         eq(sweeps.purpose, "product"),
         isNull(sweeps.archivedAt),
         isNull(readings.id),
-        "maskId" in scope ? eq(masks.id, scope.maskId) : eq(builds.programId, scope.programId),
+        inScope(scope),
       ),
     )
     .orderBy(sweeps.id);

@@ -1,6 +1,6 @@
 import type { Mask } from "../mask/mask";
 import { firstHz, lastHz, medianStepHz } from "../sweep/axis";
-import type { MeasurementSettings } from "../sweep/settings";
+import type { MeasurementSettings, Port } from "../sweep/settings";
 import type { Trace } from "../sweep/trace";
 import { formatFrequency } from "../units/format";
 import { lineRanges } from "../mask/limit-at";
@@ -58,6 +58,14 @@ function shortestScanS(fromHz: number, toHz: number): number {
   );
 }
 
+/** The doubt of a radiated sweep without an ambient sweep of its bench and day; else none. */
+export function ambientDoubt(port: Port, ambientTaken: boolean): Doubt[] {
+  if (port !== "radiated" || ambientTaken) return [];
+  const text =
+    "No ambient sweep of this bench and day is here: take one with the product off and import it.";
+  return [{ code: "ambient-not-taken", text, valueDb: null }];
+}
+
 /** Everything the inputs show that weakens the reading, each with its number and remedy. */
 export function doubtsOf(
   mask: Mask,
@@ -89,10 +97,8 @@ export function doubtsOf(
     const text = `Calibration was overdue on the date of the sweep: ${context.overdueTransducers.join(", ")}. Have it calibrated and compare.`;
     doubts.push({ code: "calibration-overdue", text, valueDb: null });
   }
-  if (settings.port === "radiated" && context.ambientTaken === false) {
-    const text = "No ambient sweep was taken: take one with the product off.";
-    doubts.push({ code: "ambient-not-taken", text, valueDb: null });
-  }
+  if (context.ambientTaken !== undefined)
+    doubts.push(...ambientDoubt(settings.port, context.ambientTaken));
   if (mask.provenance === "from memory") {
     const text =
       "This mask was written down from memory: confirm it against your own copy of the document.";

@@ -1,0 +1,103 @@
+import type { SQL } from "drizzle-orm";
+import { and, asc, eq, isNull, sql } from "drizzle-orm";
+import { inTeam } from "@/db/client";
+import { benches, ladders, ladderSteps, readings, sweeps, traces } from "@/db/schema";
+import type { Context } from "@/lib/auth/context";
+import type { Standing } from "@/lib/core/reading/reading";
+import type { Detector, Polarization, SweepPurpose } from "@/lib/core/sweep/settings";
+import { requirePermission } from "@/lib/commands/run";
+import { isNewestRevision } from "./newest-revision";
+import { worstOf } from "./worst-of";
+
+export interface SweepRow {
+  id: string;
+  name: string;
+  fileName: string;
+  purpose: SweepPurpose;
+  measuredOn: string | null;
+  polarization: Polarization | null;
+  onRecord: boolean;
+  benchName: string;
+  ladderId: string | null;
+  ladderName: string | null;
+  stepId: string | null;
+  stepName: string | null;
+  stepPosition: number | null;
+  fromHz: number | null;
+  toHz: number | null;
+  detectors: (Detector | null)[];
+  /** Over the readings against the program's masks; null for sweeps that are not held. */
+  standing: Standing | null;
+  marginDb: number | null;
+}
+
+async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
+  requirePermission(ctx, "sweep.read");
+  return inTeam(ctx.db, ctx.teamId, async (tx) => {
+    const rows = await tx
+      .select({
+        id: sweeps.id,
+        name: sweeps.name,
+        fileName: sweeps.fileName,
+        purpose: sweeps.purpose,
+        measuredOn: sweeps.measuredOn,
+        settings: sweeps.settings,
+        onRecord: sweeps.onRecord,
+        benchName: benches.name,
+        ladderId: ladders.id,
+        ladderName: ladders.name,
+        stepId: ladderSteps.id,
+        stepName: ladderSteps.name,
+        stepPosition: ladderSteps.position,
+        fromHz: sql<number | null>`min(${traces.firstHz})`,
+        toHz: sql<number | null>`max(${traces.lastHz})`,
+        detectors: sql<
+          (Detector | null)[]
+        >`array_agg(${traces.detector} order by ${traces.position})`,
+      })
+      .from(sweeps)
+      .innerJoin(benches, and(eq(benches.teamId, sweeps.teamId), eq(benches.id, sweeps.benchId)))
+      .leftJoin(
+        ladderSteps,
+        and(eq(ladderSteps.teamId, sweeps.teamId), eq(ladderSteps.id, sweeps.stepId)),
+      )
+      .leftJoin(
+        ladders,
+        and(eq(ladders.teamId, ladderSteps.teamId), eq(ladders.id, ladderSteps.ladderId)),
+      )
+      .leftJoin(traces, and(eq(traces.teamId, sweeps.teamId), eq(traces.sweepId, sweeps.id)))
+      .where(and(eq(sweeps.teamId, ctx.teamId), isNull(sweeps.archivedAt), scope))
+      .groupBy(sweeps.teamId, sweeps.id, benches.name, ladders.id, ladderSteps.id)
+      .orderBy(asc(ladderSteps.position), asc(sweeps.measuredOn), asc(sweeps.createdAt));
+    const held = await tx
+      .select({
+        sweepId: readings.sweepId,
+        standing: readings.standing,
+        marginDb: readings.marginDb,
+      })
+      .from(readings)
+      .innerJoin(sweeps, and(eq(sweeps.teamId, readings.teamId), eq(sweeps.id, readings.sweepId)))
+      .where(
+        and(
+          eq(readings.teamId, ctx.teamId),
+          isNull(readings.notComparable),
+          isNewestRevision(),
+          scope,
+        ),
+      );
+    return rows.map(({ settings, ...row }) => {
+      const worst = worstOf(held.filter((reading) => reading.sweepId === row.id));
+      return {
+        ...row,
+        polarization: settings.polarization,
+        standing: worst?.standing ?? null,
+        marginDb: worst?.marginDb ?? null,
+      };
+    });
+  });
+}
+
+/** Sweeps of a build that are not archived, by step and date. */
+export function listBuildSweeps(ctx: Context, buildId: string): Promise<SweepRow[]> {
+  return selectSweeps(ctx, eq(sweeps.buildId, buildId));
+}

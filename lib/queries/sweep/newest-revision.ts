@@ -1,0 +1,14 @@
+import { sql } from "drizzle-orm";
+import { readings } from "@/db/schema";
+
+/** Only readings against the revision of their mask that is in force and that the program names. */
+export const isNewestRevision = () => sql`${readings.maskRevisionId} = (
+  select r.id from mask_revisions r
+  where r.team_id = ${readings.teamId} and r.mask_id = ${readings.maskId}
+  order by r.revision desc limit 1)
+  and exists (
+    select 1 from program_masks pm
+    join builds b on b.team_id = pm.team_id and b.program_id = pm.program_id
+    join sweeps s on s.team_id = b.team_id and s.build_id = b.id
+    where pm.team_id = ${readings.teamId} and pm.mask_id = ${readings.maskId}
+      and s.id = ${readings.sweepId})`;

@@ -1,0 +1,39 @@
+import type { Context } from "@/lib/auth/context";
+import { CommandError } from "../result";
+import { change, parseInput, requirePermission } from "../run";
+import { readMaskInput } from "./read-mask-input";
+import { importMaskSchema, MAX_MASK_BYTES } from "./schemas";
+import { storeMask } from "./store-mask";
+
+function parseJson(text: string): unknown {
+  try {
+    return JSON.parse(text.replace(/^\uFEFF/, ""));
+  } catch (error) {
+    const reason = error instanceof Error ? error.message : "";
+    throw new CommandError("invalid", "This text is no JSON, so nothing was stored.", {
+      text: `It cannot be read as JSON: ${reason}`,
+    });
+  }
+}
+
+/** Adds a mask of the team's own from the text of a mask file; all its problems are named at once. */
+export async function importMask(ctx: Context, input: unknown): Promise<{ maskId: string }> {
+  requirePermission(ctx, "mask.write");
+  const { text } = parseInput(importMaskSchema, input);
+  if (Buffer.byteLength(text) > MAX_MASK_BYTES) {
+    throw new CommandError("invalid", "This file is too large, so nothing was stored.", {
+      text: "A mask file is at most 1 MB.",
+    });
+  }
+  const mask = readMaskInput(parseJson(text));
+  return change(ctx, async (tx, audit) => {
+    const { maskId, key } = await storeMask(tx, ctx, mask);
+    await audit({
+      action: "mask.import",
+      subjectType: "mask",
+      subjectId: maskId,
+      detail: { key, keyInFile: mask.key, title: mask.title, provenance: mask.provenance },
+    });
+    return { maskId };
+  });
+}

@@ -1,0 +1,101 @@
+"use client";
+
+import { useRouter } from "next/navigation";
+import { Button, ButtonLink } from "@/components/ui/button";
+import { ErrorNote } from "@/components/ui/error-note";
+import { Field } from "@/components/ui/field";
+import { readNumber } from "@/components/ui/read-number";
+import { TextArea } from "@/components/ui/text-area";
+import { useActionForm } from "@/components/ui/use-action-form";
+
+type Outcome =
+  | { ok: true; data: { benchId: string } }
+  | { ok: false; message: string; fieldErrors: Record<string, string> };
+
+interface BenchFormProps {
+  action: (input: unknown) => Promise<Outcome>;
+  /** The bench that is edited; without it a new one is made. */
+  bench?: {
+    id: string;
+    name: string;
+    site: string;
+    instrument: string;
+    distanceM: number | null;
+    guardDb: number;
+    notes: string;
+  };
+}
+
+export function BenchForm({ action, bench }: BenchFormProps) {
+  const router = useRouter();
+  const form = useActionForm({
+    action,
+    read: (data): unknown => ({
+      ...(bench ? { benchId: bench.id } : { impedanceOhm: readNumber(data.get("impedanceOhm")) }),
+      name: data.get("name"),
+      site: data.get("site"),
+      instrument: data.get("instrument"),
+      distanceM:
+        String(data.get("distanceM") ?? "").trim() === ""
+          ? null
+          : readNumber(data.get("distanceM")),
+      guardDb: readNumber(data.get("guardDb")),
+      notes: data.get("notes"),
+    }),
+    onDone: ({ benchId }) =>
+      router.push(bench ? `/benches/${benchId}` : `/benches/${benchId}/signal-path`),
+  });
+  const { fieldErrors } = form;
+  return (
+    <form onSubmit={form.onSubmit} method="post" className="max-w-md">
+      <ErrorNote message={form.message} />
+      <Field label="Name" name="name" defaultValue={bench?.name} error={fieldErrors.name} />
+      <Field
+        label="Site"
+        name="site"
+        hint="Where it stands: a room, a chamber, a table."
+        defaultValue={bench?.site}
+        error={fieldErrors.site}
+      />
+      <Field
+        label="Instrument"
+        name="instrument"
+        defaultValue={bench?.instrument}
+        error={fieldErrors.instrument}
+      />
+      <Field
+        label="Measuring distance in m"
+        name="distanceM"
+        inputMode="decimal"
+        hint="Leave it empty where there is none, as on a mains bench."
+        defaultValue={bench?.distanceM ?? ""}
+        error={fieldErrors.distanceM}
+      />
+      <Field
+        label="Guard in dB"
+        name="guardDb"
+        inputMode="decimal"
+        hint="Margins smaller than this are shown as inside guard. Write 0 for none."
+        defaultValue={bench?.guardDb}
+        error={fieldErrors.guardDb}
+      />
+      {bench ? null : (
+        <Field
+          label="Impedance of the instrument's input in Ω"
+          name="impedanceOhm"
+          inputMode="decimal"
+          hint="50 on most analyzers, 75 on some for cable networks. Levels in dBm are turned into dBµV with it."
+          defaultValue={50}
+          error={fieldErrors.impedanceOhm}
+        />
+      )}
+      <TextArea label="Notes" name="notes" defaultValue={bench?.notes} error={fieldErrors.notes} />
+      <div className="flex gap-2">
+        <Button type="submit" disabled={form.pending}>
+          {bench ? "Save bench" : "Create bench"}
+        </Button>
+        <ButtonLink href={bench ? `/benches/${bench.id}` : "/benches"}>Cancel</ButtonLink>
+      </div>
+    </form>
+  );
+}

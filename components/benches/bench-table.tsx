@@ -1,0 +1,76 @@
+"use client";
+
+import Link from "next/link";
+import type { DataColumn } from "@/components/ui/data-table";
+import { DataTable } from "@/components/ui/data-table";
+import { calibrationWords } from "./calibration";
+
+interface BenchLine {
+  id: string;
+  name: string;
+  site: string;
+  instrument: string;
+  distanceM: number | null;
+  guardDb: number;
+  revision: number;
+  transducers: number;
+  overdue: number;
+  undated: number;
+  archived: boolean;
+}
+
+const COLUMNS: DataColumn<BenchLine>[] = [
+  {
+    id: "name",
+    header: "Bench",
+    value: (b) => b.name,
+    cell: (b) => (
+      <>
+        <Link href={`/benches/${b.id}`} className="font-medium text-deep underline">
+          {b.name}
+        </Link>
+        {b.archived ? <span className="ml-2 text-sm text-ink-soft">archived</span> : null}
+      </>
+    ),
+  },
+  { id: "site", header: "Site", value: (b) => b.site || null },
+  { id: "instrument", header: "Instrument", value: (b) => b.instrument || null },
+  {
+    id: "distance",
+    header: "Distance in m",
+    align: "right",
+    mono: true,
+    value: (b) => b.distanceM,
+  },
+  { id: "guard", header: "Guard in dB", align: "right", mono: true, value: (b) => b.guardDb },
+  {
+    id: "transducers",
+    header: "Transducers",
+    align: "right",
+    mono: true,
+    value: (b) => b.transducers,
+  },
+  { id: "revision", header: "Revision", align: "right", mono: true, value: (b) => b.revision },
+  {
+    id: "calibrations",
+    header: "Calibrations",
+    value: calibrationWords,
+    cell: (b) => (
+      <span className={b.overdue > 0 ? "bg-shoal-bed px-1 text-shoal" : ""}>
+        {calibrationWords(b)}
+      </span>
+    ),
+  },
+];
+
+export function BenchTable({ benches }: { benches: BenchLine[] }) {
+  return (
+    <DataTable
+      label="Benches"
+      columns={COLUMNS}
+      rows={benches}
+      rowKey={(bench) => bench.id}
+      exportName="benches"
+    />
+  );
+}

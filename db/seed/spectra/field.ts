@@ -6,7 +6,7 @@ import { noiseBandwidthHz } from "./detector-noise";
 import { makeLinkSource } from "./link-source";
 import { deriveSeed } from "./random";
 import type { Coupling, Leak, SpectrumSetup } from "./setup";
-import { spreadReductionDb } from "./spread-reduction";
+import { readSweptLine } from "./spread-reduction";
 
 /** Field at the antenna, (µV/m)² per point: steady and swept lines and noise-like power apart. */
 export interface Field {
@@ -27,7 +27,8 @@ function addLine(
   lowHz: number,
   highHz: number,
   levelDb: number,
-  combine: (present: number, added: number) => number = (present, added) => present + added,
+  combine: (present: number, added: number, hz: number) => number = (present, added) =>
+    present + added,
 ): void {
   const stepHz = (setup.stopHz - setup.startHz) / (setup.points - 1);
   const reachHz = SKIRT_B6 * setup.rbwHz;
@@ -38,7 +39,7 @@ function addLine(
     const outsideHz = Math.max(0, lowHz - hz, hz - highHz);
     // 6.02 dB at half the 6 dB width.
     const level = levelDb - 24.08 * (outsideHz / setup.rbwHz) ** 2;
-    into[i] = combine(into[i] ?? 0, fromDb(level));
+    into[i] = combine(into[i] ?? 0, fromDb(level), hz);
   }
 }
 
@@ -54,12 +55,26 @@ function addSourceLine(
   if (!spread) return addLine(field.lines, setup, hz, hz, levelDb);
   const widthHz = (hz * spread.depthPercent) / 100;
   const below = { down: 1, centre: 0.5, up: 0 }[spread.direction];
-  const lowHz = hz - widthHz * below;
-  const reduction = spreadReductionDb(spread, widthHz, setup.rbwHz, setup.detector);
-  // Neighbouring lines that cover the same frequency pass it one after the other: a peak detector
-  // keeps the highest of them, an average detector sees the sum of their times.
-  const combine = setup.detector === "average" ? undefined : Math.max;
-  addLine(field.swept, setup, lowHz, lowHz + widthHz, levelDb - reduction, combine);
+  const centreHz = hz + widthHz * (0.5 - below);
+  const { reductionDb, rippleDb } = readSweptLine(spread, widthHz, setup.rbwHz, setup.detector);
+  const level = levelDb - reductionDb;
+  if (setup.detector !== "average") {
+    // Neighbouring lines that cover the same frequency come by one after the other: a peak
+    // detector keeps the highest of them.
+    const ends = [centreHz - widthHz / 2, centreHz + widthHz / 2] as const;
+    return addLine(field.swept, setup, ...ends, level, (present, added) =>
+      Math.max(present, added),
+    );
+  }
+  // An average detector sees the sum of their times. As wide as keeps the line's power.
+  const bandwidthHz = noiseBandwidthHz(setup.rbwHz);
+  const filledHz = bandwidthHz * (fromDb(reductionDb) - 1);
+  const lowHz = centreHz - filledHz / 2;
+  const depth = fromDb(rippleDb) - 1;
+  const periodHz = Math.max(4 * setup.rbwHz, widthHz / 9);
+  addLine(field.swept, setup, lowHz, lowHz + filledHz, level, (present, added, at) => {
+    return present + added * (1 + depth * Math.cos((2 * Math.PI * (at - lowHz)) / periodHz));
+  });
 }
 
 /** Adds link and clocks; what follows the spread clock is swept. */

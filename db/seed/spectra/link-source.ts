@@ -49,7 +49,7 @@ function coefficientPowers(bits: Int8Array): Float64Array {
  * Spectrum of the link data at the transmitter, for a peak-to-peak swing in V, up to `stopHz`.
  * A period of P bits makes lines at k·f_b/P with one-sided power 2|c_k|²·(V/2)²·shape, so a 1 V
  * square wave has its fundamental at 113.07 dBµV (computed). What never repeats within a sweep is
- * a density 2/f_b·shape, plus the line that the regular share of the frames leaves at f_b/2. The
+ * a density 2/f_b·shape, plus the lines that the regular share of the frames leaves at f_b/2 and its odd multiples. The
  * power is the same in every case: coding and scrambling only move it.
  */
 export function makeLinkSource(
@@ -76,7 +76,8 @@ export function makeLinkSource(
     }
     return { ...silent, lines };
   }
-  const regular = regularShare(link) ** 2;
+  // A bare test sequence has no sync words that could stay regular.
+  const regular = link.payload?.startsWith("prbs") ? 0 : regularShare(link) ** 2;
   const lines: SourceLine[] = [];
   for (let hz = bitRateHz / 2; hz <= stopHz; hz += bitRateHz)
     lines.push({ hz, powerV2: 2 * regular * shape(hz) });

@@ -51,7 +51,7 @@ export function makeSpectrum(setup: SpectrumSetup): Spectrum {
   addProduct(field, setup, frequenciesHz);
   addAmbient(field, setup, frequenciesHz);
   const random = makeRandom(deriveSeed(setup.seed, `noise ${detector}`));
-  const moments = makeRandom(deriveSeed(setup.seed, `modulation ${detector}`));
+  const moments = makeRandom(deriveSeed(setup.seed, "modulation"));
   const levelsDbuv = new Float32Array(points);
   frequenciesHz.forEach((hz, i) => {
     const { totalDb, afterGainDb } = pathAt(setup.path, hz);
@@ -59,7 +59,7 @@ export function makeSpectrum(setup: SpectrumSetup): Spectrum {
     const noise =
       (field.noise[i] ?? 0) * lossless + receiverNoiseUv2(receiver, setup.rbwHz, afterGainDb);
     const reading = noise * drawNoiseReading(detector, receiver.looks, random);
-    // Each point meets the modulation at another moment.
+    // Each point meets the modulation at another moment, the same for all detectors at once.
     const swept = (field.swept[i] ?? 0) * fromDb(SWEPT_SPREAD_DB * drawNormal(moments));
     const lines = (field.lines[i] ?? 0) + swept;
     levelsDbuv[i] = 10 * Math.log10(lines * lossless + reading);

@@ -3,13 +3,21 @@ import type { SweepDelta } from "@/lib/core/delta/delta";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { Reading } from "@/lib/core/reading/reading";
-import type { Detector, Hold, MeasurementSettings, SweepPurpose } from "@/lib/core/sweep/settings";
+import type {
+  Detector,
+  Hold,
+  MeasurementSettings,
+  SweepPurpose,
+  TraceKind,
+} from "@/lib/core/sweep/settings";
 import type { TraceView } from "@/lib/core/sweep/trace-view";
 import type { LevelUnit } from "@/lib/core/units/level-units";
 import type { Paper } from "./paper";
 
 export interface SnapshotTrace {
   name: string;
+  /** Spots are drawn as points: a line between them would claim what nobody measured. */
+  kind: TraceKind;
   detector: Detector | null;
   hold: Hold;
   unit: LevelUnit;

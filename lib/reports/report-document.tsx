@@ -1,0 +1,61 @@
+import { Document } from "@react-pdf/renderer";
+import { SectionTitle } from "./parts/blocks";
+import { PageFrame } from "./parts/page-frame";
+import type { ReportSnapshot, ReportState } from "./report-snapshot";
+import type { SummaryFit } from "./summary-fit";
+import { DecisionRule } from "./sections/decision-rule";
+import { Ladder } from "./sections/ladder";
+import { Masks } from "./sections/masks";
+import { ItemAndPeople, Records } from "./sections/records";
+import { SummaryPage } from "./sections/summary-page";
+import { SweepBlock } from "./sections/sweep";
+
+interface ReportDocumentProps {
+  snapshot: ReportSnapshot;
+  state: ReportState;
+  fit: SummaryFit;
+}
+
+/** The summary alone with an empty chart, to see whether it stays on one page. */
+export function SummaryDocument({ snapshot, state, fit }: ReportDocumentProps) {
+  return (
+    <Document>
+      <PageFrame snapshot={snapshot} state={state}>
+        <SummaryPage snapshot={snapshot} fit={fit} isMeasured />
+      </PageFrame>
+    </Document>
+  );
+}
+
+/** The whole report: a summary page, then the record it rests on. */
+export function ReportDocument({ snapshot, state, fit }: ReportDocumentProps) {
+  const issuedAt = new Date(snapshot.issuedAt);
+  return (
+    <Document
+      title={`${snapshot.number} · ${snapshot.title}`}
+      author={snapshot.team}
+      subject={`${snapshot.program.name}, ${snapshot.build.name}`}
+      keywords={state.sha256}
+      creator="Neap"
+      producer="Neap"
+      language="en"
+      creationDate={issuedAt}
+      modificationDate={issuedAt}
+    >
+      <PageFrame snapshot={snapshot} state={state}>
+        <SummaryPage snapshot={snapshot} fit={fit} />
+      </PageFrame>
+      <PageFrame snapshot={snapshot} state={state}>
+        <ItemAndPeople snapshot={snapshot} state={state} />
+        <DecisionRule snapshot={snapshot} />
+        <Masks snapshot={snapshot} />
+        <SectionTitle aheadPt={150}>Sweeps and readings</SectionTitle>
+        {snapshot.sweeps.map((sweep) => (
+          <SweepBlock key={sweep.sweepId} sweep={sweep} issuedAt={snapshot.issuedAt} />
+        ))}
+        <Ladder ladder={snapshot.ladder} />
+        <Records snapshot={snapshot} state={state} />
+      </PageFrame>
+    </Document>
+  );
+}

@@ -1,0 +1,308 @@
+import { readFileSync } from "node:fs";
+import { join } from "node:path";
+import type { SweepDelta } from "@/lib/core/delta/delta";
+import { maskFromJson } from "@/lib/core/mask/mask-json";
+import type { Mask } from "@/lib/core/mask/mask";
+import { readSweep } from "@/lib/core/reading/read-sweep";
+import type { MeasurementSettings } from "@/lib/core/sweep/settings";
+import type { Trace } from "@/lib/core/sweep/trace";
+import { hashSnapshot } from "@/lib/reports/snapshot-hash";
+import type {
+  ReportSnapshot,
+  ReportState,
+  SnapshotSweep,
+  SnapshotTrace,
+} from "@/lib/reports/report-snapshot";
+
+export function shippedMask(key: string): Mask {
+  const path = join(process.cwd(), "masks", `${key}.json`);
+  const read = maskFromJson(JSON.parse(readFileSync(path, "utf8")));
+  if (!read.ok) throw new Error(`${key} is no mask.`);
+  return read.mask;
+}
+
+const START_HZ = 30e6;
+const STEP_HZ = 50e3;
+const COUNT = 19_401;
+const RBW_HZ = 120e3;
+
+/** Lines every `spacingHz` on a rising floor; repeats exactly, with a small even ripple. */
+export function inventedTrace(name: string, peakDb: number, spacingHz = 24.2e6): Trace {
+  const levelsDb = new Float32Array(COUNT);
+  for (let i = 0; i < COUNT; i += 1) {
+    const hz = START_HZ + i * STEP_HZ;
+    const off = hz - Math.round(hz / spacingHz) * spacingHz;
+    const order = Math.round(hz / spacingHz);
+    const height = peakDb - 9 + 9 * Math.sin(order * 1.7) - 3 * Math.log2(1 + order / 12);
+    const floor =
+      13 + 6 * Math.log10(hz / START_HZ) + 1.6 * Math.sin(i * 12.9898) * Math.sin(i * 0.37);
+    const line = height - (off / RBW_HZ) ** 2 * 12;
+    levelsDb[i] = Math.max(floor, line);
+  }
+  const axis = { kind: "regular" as const, startHz: START_HZ, stepHz: STEP_HZ, count: COUNT };
+  return { name, kind: "scan", detector: "peak", hold: "max-hold", unit: "dBuV/m", axis, levelsDb };
+}
+
+/** A regular trace as a snapshot keeps it, in buckets that keep each maximum. */
+export function snapshotTrace(trace: Trace, samplesPerBucket = 16): SnapshotTrace {
+  const { levelsDb } = trace;
+  const hz: number[] = [];
+  const maxDb: (number | null)[] = [];
+  const minDb: (number | null)[] = [];
+  for (let from = 0; from < levelsDb.length; from += samplesPerBucket) {
+    const bucket = levelsDb.slice(from, from + samplesPerBucket);
+    const finite = [...bucket].filter(Number.isFinite);
+    const highest = Math.max(...finite);
+    const at = from + Math.max(0, bucket.indexOf(highest));
+    hz.push(START_HZ + at * STEP_HZ);
+    maxDb.push(finite.length > 0 ? highest : null);
+    minDb.push(finite.length > 0 ? Math.min(...finite) : null);
+  }
+  const finite = levelsDb.filter(Number.isFinite);
+  const top = finite.reduce((a, b) => Math.max(a, b), Number.NEGATIVE_INFINITY);
+  const lastHz = START_HZ + (levelsDb.length - 1) * STEP_HZ;
+  return {
+    name: trace.name,
+    kind: trace.kind,
+    detector: trace.detector,
+    hold: trace.hold,
+    unit: trace.unit,
+    points: levelsDb.length,
+    firstHz: START_HZ,
+    lastHz,
+    stepHz: STEP_HZ,
+    maxDb: finite.length > 0 ? top : null,
+    maxAtHz: finite.length > 0 ? START_HZ + levelsDb.indexOf(top) * STEP_HZ : null,
+    view: {
+      unit: trace.unit,
+      firstHz: START_HZ,
+      lastHz,
+      points: levelsDb.length,
+      samplesPerBucket,
+      hz,
+      maxDb,
+      minDb,
+    },
+  };
+}
+
+const SETTINGS: MeasurementSettings = {
+  rbwHz: RBW_HZ,
+  rbwKind: "6dB",
+  vbwHz: null,
+  sweepTimeS: 0.4,
+  attenuationDb: 10,
+  preamplifier: true,
+  referenceLevelDb: null,
+  polarization: "vertical",
+  heightM: 1.2,
+  azimuthDeg: null,
+  distanceM: 3,
+  port: "radiated",
+};
+
+interface SweepChoices {
+  id?: string;
+  name?: string;
+  traces?: Trace[];
+  masks?: { mask: Mask; revision: number }[];
+  guardDb?: number;
+}
+
+/** One product sweep of the invented team's bench, read by the real rules. */
+export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
+  const { id = "sweep-1", name = "Gannet B3, scrambler on, vertical", guardDb = 4 } = choices;
+  const traces = choices.traces ?? [inventedTrace("Trace 1", 41)];
+  const masks = choices.masks ?? [
+    { mask: shippedMask("cispr-32-radiated-class-b-3m"), revision: 2 },
+  ];
+  return {
+    sweepId: id,
+    name,
+    fileName: `${name.toLowerCase().replaceAll(/[^a-z0-9]+/g, "_")}_scan_with_a_name_as_long_as_benches_make_them_0007.csv`,
+    fileSha256: (id === "sweep-1" ? "a7" : "5c").repeat(32),
+    purpose: "product",
+    measuredOn: "2026-11-24",
+    importedBy: "Maren Holt",
+    importedAt: "2026-11-24T15:02:10.000Z",
+    corrected: false,
+    settings: SETTINGS,
+    link: {
+      bitRateHz: 3.2e9,
+      payload: "prbs23",
+      patternBits: null,
+      scrambler: "additive",
+      scramblerPolynomial: null,
+      scramblerRestartBits: null,
+      coding: "8b10b",
+      spread: { depthPercent: 0.5, direction: "down", modulationHz: 31.5e3, profile: "triangular" },
+      spreadOff: null,
+      edgeTimeS: null,
+      cable: "coax, 7 m, two ferrites",
+    },
+    bench: {
+      name: "Boathouse bench",
+      site: "semi-anechoic corner, pier 2",
+      instrument: "analyzer, 9 kHz to 3 GHz",
+      distanceM: 3,
+      guardDb,
+      signalPathRevision: 5,
+      impedanceOhm: 50,
+      transducers: [
+        {
+          name: "Broadband antenna, 30 MHz to 1 GHz",
+          kind: "antenna",
+          calibratedOn: "2025-03-02",
+          dueOn: "2026-09-02",
+        },
+        {
+          name: "Coax run to the bench",
+          kind: "cable",
+          calibratedOn: "2026-05-11",
+          dueOn: "2027-05-11",
+        },
+        { name: "Preamplifier 20 dB", kind: "preamplifier", calibratedOn: null, dueOn: null },
+      ],
+    },
+    traces: traces.map((trace) => snapshotTrace(trace)),
+    readings: masks.map(({ mask, revision }) => ({
+      maskRevision: revision,
+      mask,
+      reading: readSweep({
+        traces,
+        settings: SETTINGS,
+        mask,
+        guardDb,
+        impedanceOhm: 50,
+        context: {
+          ambientTaken: false,
+          overdueTransducers: ["Broadband antenna, 30 MHz to 1 GHz"],
+        },
+      }),
+    })),
+  };
+}
+
+export function sampleDelta(change: Partial<NonNullable<SweepDelta["changes"]>> = {}): SweepDelta {
+  return {
+    beforeName: "Gannet B3, plain, vertical",
+    afterName: "Gannet B3, scrambler on, vertical",
+    mismatches: [],
+    doubts: ["VBW is not stated for either sweep."],
+    changes: {
+      detector: "peak",
+      margins: [
+        {
+          maskRevisionId: "revision-2",
+          maskTitle: "CISPR 32 class B, 3 m",
+          lineName: "Quasi-peak",
+          beforeDb: -5.4,
+          afterDb: 4.2,
+          beforeStanding: "undecided",
+          afterStanding: "clear",
+          changeDb: 9.6,
+          note: null,
+        },
+      ],
+      peakDb: -9.6,
+      floorDb: 12.04,
+      bandPowerDb: 0.1,
+      bandPowerIsPower: false,
+      sentence:
+        "Peaks came down 9.6 dB, the floor came up 12.0 dB, band power moved 0.1 dB: the energy was spread, not removed.",
+      ...change,
+    },
+  };
+}
+
+const REFUSED: SweepDelta = {
+  beforeName: "Gannet B3, scrambler on, vertical",
+  afterName: "Gannet B3, clamp, vertical",
+  mismatches: [{ field: "rbw", text: "The RBW was 120.0 kHz before and 1.000 MHz after." }],
+  doubts: [],
+  changes: null,
+};
+
+/** A report with two sweeps and a ladder of three steps, the last of them not comparable. */
+export function sampleSnapshot(change: Partial<ReportSnapshot> = {}): ReportSnapshot {
+  const spread = sampleDelta();
+  return {
+    version: 1,
+    number: "SO-2026-0007",
+    title: "Gannet B3: what scrambling and spreading bought before the chamber",
+    summary:
+      "The docking camera head reads close under the class B mask with the scrambler on. What is left are harmonics of the reference clock on the cable screen; the next step is a clamp at the bulkhead.",
+    paper: "a4",
+    team: "Saltmarsh Optics",
+    program: {
+      name: "Gannet",
+      description: "Docking camera head on a coax link.",
+      targetMarginDb: 6,
+    },
+    build: { name: "B3, second cable screen", builtOn: "2026-11-12", notes: "" },
+    issuedAt: "2026-11-27T09:30:00.000Z",
+    issuedBy: "Maren Holt",
+    replaces: "SO-2026-0004",
+    sweeps: [
+      sampleSweep(),
+      sampleSweep({
+        id: "sweep-2",
+        name: "Gannet B3, scrambler on, horizontal, cable routed along the gunwale",
+        traces: [
+          inventedTrace("Trace 1", 37),
+          { ...inventedTrace("Trace 2", 31), detector: "quasi-peak" },
+        ],
+        masks: [
+          { mask: shippedMask("cispr-32-radiated-class-b-3m"), revision: 2 },
+          { mask: shippedMask("iec-60945-radiated-3m"), revision: 1 },
+        ],
+      }),
+    ],
+    ladder: {
+      name: "Link mitigations",
+      steps: [
+        {
+          position: 0,
+          name: "As built",
+          description: "Alternating payload, no scrambling.",
+          sweeps: ["Gannet B3, plain, vertical"],
+          againstPrevious: [],
+          againstStart: [],
+        },
+        {
+          position: 1,
+          name: "Scrambler on",
+          description: "Additive scrambler of the link switched on.",
+          sweeps: ["Gannet B3, scrambler on, vertical"],
+          againstPrevious: [spread],
+          againstStart: [spread],
+        },
+        {
+          position: 2,
+          name: "Clamp at the bulkhead",
+          description: "",
+          sweeps: ["Gannet B3, clamp, vertical"],
+          againstPrevious: [REFUSED],
+          againstStart: [REFUSED],
+        },
+      ],
+    },
+    ...change,
+  };
+}
+
+export function issuedState(
+  snapshot: ReportSnapshot,
+  change: Partial<ReportState> = {},
+): ReportState {
+  return {
+    state: "issued",
+    sha256: hashSnapshot(snapshot),
+    approvedBy: null,
+    approvedAt: null,
+    withdrawnBy: null,
+    withdrawnAt: null,
+    withdrawnReason: null,
+    ...change,
+  };
+}

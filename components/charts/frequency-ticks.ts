@@ -8,7 +8,7 @@ export interface FrequencyTick {
 }
 
 const LABEL_CHARACTER_PX = 6.7;
-const LABEL_AIR_PX = 12;
+const LABEL_AIR_PX = 16;
 
 /** A round frequency in engineering units, without digits it does not have: "200 MHz". */
 export function labelFrequency(hz: number): string {

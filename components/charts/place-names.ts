@@ -70,12 +70,33 @@ function candidates(piece: readonly ScreenPoint[], widthPx: number, plot: Box) {
     const x = Math.min(plot.right - EDGE_PX - widthPx, Math.max(plot.left + EDGE_PX, start));
     const here = yAt(piece, Math.max(x, first));
     const there = yAt(piece, Math.min(x + widthPx, last));
-    const middle = yAt(piece, Math.min(last, Math.max(first, x + widthPx / 2)));
-    if (here === null || there === null || middle === null) return [];
+    if (here === null || there === null) return [];
+    const middle = (here + there) / 2;
     // On a bend or a step a name would leave its line.
-    if (Math.abs((here + there) / 2 - middle) > 4) return [];
+    const bends = [1, 2, 3, 4, 5, 6, 7].some((k) => {
+      const on = yAt(piece, Math.min(last, Math.max(first, x + (widthPx * k) / 8)));
+      return on === null || Math.abs(here + ((there - here) * k) / 8 - on) > 3;
+    });
+    if (bends) return [];
     const angle = Math.atan2(there - here, widthPx);
     return Math.abs(angle) > 1 ? [] : [-1, 1].map((side) => ({ x, middle, angle, side }));
+  });
+}
+
+/** Where no straight stretch is long enough: level, over an end or the top, or under the bottom. */
+function levelCandidates(piece: readonly ScreenPoint[], widthPx: number, plot: Box) {
+  const byHeight = [...piece].sort((a, b) => a.y - b.y);
+  const spots = [
+    { point: piece.at(-1), side: -1 },
+    { point: piece[0], side: -1 },
+    { point: byHeight[0], side: -1 },
+    { point: byHeight.at(-1), side: 1 },
+  ];
+  return spots.flatMap(({ point, side }) => {
+    if (!point) return [];
+    const centred = point.x - widthPx / 2;
+    const x = Math.min(plot.right - EDGE_PX - widthPx, Math.max(plot.left + EDGE_PX, centred));
+    return [{ x, middle: point.y + side * 3, angle: 0, side }];
   });
 }
 
@@ -93,12 +114,14 @@ export function placeNames(
   const placed: PlacedName[] = [];
   const unplaced: string[] = [];
   for (const curve of curves) {
-    if (curve.pieces.length === 0) continue;
+    if (curve.pieces.length === 0 || curve.name === "") continue;
     const widthPx = curve.name.length * CHARACTER_PX;
     const width = (piece: ScreenPoint[]) => (piece.at(-1)?.x ?? 0) - (piece[0]?.x ?? 0);
-    const spots = [...curve.pieces]
-      .sort((a, b) => width(b) - width(a))
-      .flatMap((piece) => candidates(piece, widthPx, plot));
+    const widest = [...curve.pieces].sort((a, b) => width(b) - width(a));
+    const spots = [
+      ...widest.flatMap((piece) => candidates(piece, widthPx, plot)),
+      ...widest.flatMap((piece) => levelCandidates(piece, widthPx, plot)),
+    ];
     const boxes = spots.map(({ x, middle, angle, side }) => {
       const centreX = x + widthPx / 2 - Math.sin(angle) * side * -1 * (HALF_HEIGHT_PX + 2);
       const centreY = middle + side * Math.cos(angle) * (HALF_HEIGHT_PX + 2);

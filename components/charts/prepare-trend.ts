@@ -38,6 +38,8 @@ export interface PreparedTrend {
     requiredY: number | null;
   }[];
   todayX: number | null;
+  /** No room for names at the line ends: they stand in a list below. */
+  compact: boolean;
   notes: string[];
   summary: string;
 }
@@ -56,6 +58,7 @@ const ROW_PX = 13;
 const CHARACTER_PX = 5.9;
 const LEFT_PX = 38;
 const BOTTOM_PX = 24;
+const COMPACT_PX = 600;
 
 function needed(milestone: TrendMilestone): string {
   const { requiredMarginDb, dueOn } = milestone;
@@ -86,8 +89,9 @@ function describe(input: TrendInput): string {
 /** Margins over builds in px, with target, coast at zero, and milestones. */
 export function prepareTrend(input: TrendInput): PreparedTrend {
   const { series, targetDb, milestones, today, width, height } = input;
+  const compact = width < COMPACT_PX;
   const longest = Math.max(...series.map((one) => one.maskTitle.length), 10) * CHARACTER_PX + 20;
-  const right = Math.round(Math.min(longest, Math.max(84, width * 0.2)));
+  const right = compact ? 14 : Math.round(Math.min(longest, Math.max(110, width * 0.2)));
   const axis = makeTrendAxis(series, milestones, today, width - LEFT_PX - right);
   const left = LEFT_PX;
   const across = Math.max(1, width - left - right);
@@ -100,9 +104,10 @@ export function prepareTrend(input: TrendInput): PreparedTrend {
     })
     .sort((a, b) => a.x - b.x)
     .map(({ milestone, x }) => {
-      const wide = (milestone.name.length + needed(milestone).length + 1) * 6.3 + 8;
+      const detail = compact ? "" : needed(milestone);
+      const wide = (milestone.name.length + detail.length + 1) * 6.3 + 8;
       const pushed = x + wide > width;
-      return { milestone, x, width: wide, pushed, textX: pushed ? x - wide : x };
+      return { milestone, detail, x, width: wide, pushed, textX: pushed ? x - wide : x };
     });
   const rows = rowsOf(flags.map((flag) => ({ x: flag.textX, width: flag.width })));
   const top = 22 + Math.max(0, ...rows.map((row) => row + 1)) * 15;
@@ -149,6 +154,8 @@ export function prepareTrend(input: TrendInput): PreparedTrend {
     height - 4,
   );
   const notes: string[] = [];
+  if (compact && flags.length > 0)
+    notes.push(`${flags.map(({ milestone: m }) => `${m.name}: ${needed(m)}`).join("; ")}.`);
   if (axis.kind === "order" && milestones.length > 0) {
     const told = milestones.map((m) => `${m.name} ${needed(m)}`).join("; ");
     notes.push(`Builds without a date stand in order, so milestones have no place: ${told}.`);
@@ -166,15 +173,16 @@ export function prepareTrend(input: TrendInput): PreparedTrend {
     targetY: yOf(targetDb),
     lines,
     names: ends.map((end, i) => ({ ...end, y: ys[i] ?? end.fromY })),
-    milestones: flags.map(({ milestone, x, pushed }, i) => ({
+    milestones: flags.map(({ milestone, detail, x, pushed }, i) => ({
       pushed,
       name: milestone.name,
-      detail: needed(milestone),
+      detail,
       x,
       row: rows[i] ?? 0,
       requiredY: milestone.requiredMarginDb === null ? null : yOf(milestone.requiredMarginDb),
     })),
     todayX: axis.kind === "date" && todayDay !== null ? xOf(todayDay) : null,
+    compact,
     notes,
     summary: describe(input),
   };

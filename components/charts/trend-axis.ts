@@ -23,6 +23,15 @@ export interface TrendAxis {
   at: (build: { buildName: string; builtOn: string | null }) => number | null;
 }
 
+/** A date at the very edge would run into its neighbour once it is pushed inside. */
+function withoutEdgeLabels(ticks: FrameTick[], from: number, to: number, widthPx: number) {
+  return ticks.map((tick) => {
+    const x = ((tick.value - from) / (to - from)) * widthPx;
+    const half = tick.label.length * 3.4;
+    return x < half || x > widthPx - half ? { ...tick, label: "" } : tick;
+  });
+}
+
 /** Round dates: days or weeks while they are few, then months, quarters, years. */
 function dateTicks(from: number, to: number, widthPx: number): FrameTick[] {
   const most = Math.max(2, widthPx / 86);
@@ -72,7 +81,7 @@ export function makeTrendAxis(
     const high = Math.max(...known);
     const air = Math.max(2, (high - low) * 0.03);
     const [from, to] = [low - air, high + air];
-    const ticks = dateTicks(from, to, widthPx);
+    const ticks = withoutEdgeLabels(dateTicks(from, to, widthPx), from, to, widthPx);
     return { kind: "date", from, to, ticks, at: (build) => dayOf(build.builtOn) };
   }
   const names = [...new Set(builds.map((build) => build.buildName))];

@@ -81,6 +81,23 @@ export function TrendChart(props: TrendChartProps) {
           )}
         </div>
       ) : null}
+      {prepared.compact ? (
+        <ul className="mt-1 text-[0.8rem]">
+          {prepared.names.map(({ key, rows, last }, i) => (
+            <li key={key}>
+              <svg width="30" height="8" aria-hidden="true" className="inline-block">
+                <path
+                  d="M1,4H29"
+                  stroke={lines[i]?.style.stroke}
+                  strokeWidth="1.5"
+                  strokeDasharray={lines[i]?.style.dash}
+                />
+              </svg>{" "}
+              {rows.join(" ")} <span className="font-mono">{last}</span>
+            </li>
+          ))}
+        </ul>
+      ) : null}
       <ul className="mt-1 flex flex-wrap gap-x-4 text-[0.8rem] text-ink-soft">
         {STANDINGS.map((standing) => (
           <li key={standing}>

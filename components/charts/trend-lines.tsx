@@ -19,7 +19,7 @@ export function TrendLines({ prepared, width }: { prepared: PreparedTrend; width
           strokeLinejoin="round"
         />
       ))}
-      {prepared.names.map(({ key, rows, last, y, fromX, fromY }, i) => {
+      {(prepared.compact ? [] : prepared.names).map(({ key, rows, last, y, fromX, fromY }, i) => {
         const first = y - (rows.length * ROW_PX) / 2 + 4;
         const style = prepared.lines[i]?.style;
         return (

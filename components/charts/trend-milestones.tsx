@@ -44,6 +44,10 @@ export function TrendMilestones(props: {
               fontSize="11"
               textAnchor={pushed ? "end" : "start"}
               fill="var(--ink)"
+              stroke="var(--paper)"
+              strokeWidth="3"
+              strokeLinejoin="round"
+              paintOrder="stroke"
             >
               <tspan fontWeight="600">{name}</tspan>
               <tspan dx="5" className="font-mono" fill="var(--ink-soft)">

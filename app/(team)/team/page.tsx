@@ -1,7 +1,12 @@
 import type { Metadata } from "next";
+import { AddMemberForm } from "@/components/team/add-member-form";
+import { MemberTable } from "@/components/team/member-table";
+import { PageHead } from "@/components/ui/page-head";
+import { Section } from "@/components/ui/section";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { listMembers } from "@/lib/queries/team/list-members";
+import { addPerson, letInAgain, shutOut, storeRole } from "./actions";
 
 export const metadata: Metadata = { title: "Team" };
 
@@ -10,38 +15,29 @@ export default async function TeamPage() {
   if (!isAllowed(ctx, "people.read")) {
     return (
       <>
-        <h1 className="mb-4 text-3xl">Team</h1>
+        <PageHead title="Team" />
         <p>Only an admin of your team sees its people.</p>
       </>
     );
   }
-  const members = await listMembers(ctx);
+  const members = (await listMembers(ctx)).map(({ deactivatedAt, ...member }) => ({
+    ...member,
+    deactivatedOn: deactivatedAt?.toISOString().slice(0, 10) ?? null,
+  }));
   return (
     <>
-      <h1 className="mb-6 text-3xl">Team</h1>
-      <div className="overflow-x-auto border border-rule bg-sheet">
-        <table className="w-full text-left">
-          <thead className="text-sm text-ink-soft">
-            <tr className="border-b border-rule">
-              <th className="px-4 py-2 font-medium">Name</th>
-              <th className="px-4 py-2 font-medium">E-mail</th>
-              <th className="px-4 py-2 font-medium">Role</th>
-            </tr>
-          </thead>
-          <tbody>
-            {members.map((member) => (
-              <tr key={member.userId} className="border-b border-rule last:border-0">
-                <td className="px-4 py-3">{member.name}</td>
-                <td className="px-4 py-3">{member.email}</td>
-                <td className="px-4 py-3">
-                  {member.role}
-                  {member.deactivatedAt ? " (deactivated)" : ""}
-                </td>
-              </tr>
-            ))}
-          </tbody>
-        </table>
-      </div>
+      <PageHead title="Team" lead="Who may sign in, and what each may do." />
+      <MemberTable
+        members={members}
+        ownUserId={ctx.userId}
+        actions={{ changeRole: storeRole, deactivate: shutOut, reactivate: letInAgain }}
+      />
+      <Section
+        title="Add a member"
+        lead="Neap sends no e-mail: you choose a first password and hand it over yourself."
+      >
+        <AddMemberForm action={addPerson} />
+      </Section>
     </>
   );
 }

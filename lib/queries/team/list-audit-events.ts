@@ -25,6 +25,8 @@ export interface AuditPage {
   events: AuditEvent[];
   /** The last event of the page when older ones follow: the next page's `before`. */
   nextBefore: string | null;
+  /** When the page was read, for telling how long ago an event was. */
+  readAt: Date;
 }
 
 export interface AuditFilter {
@@ -63,8 +65,9 @@ async function readSubjectNames(
 export async function listAuditEvents(ctx: Context, filter: AuditFilter): Promise<AuditPage> {
   requirePermission(ctx, "audit.read");
   const { before, action, actorId } = filter;
+  const readAt = new Date();
   if ([before, actorId].some((id) => id !== undefined && !UUID.test(id))) {
-    return { events: [], nextBefore: null };
+    return { events: [], nextBefore: null, readAt };
   }
   return inTeam(ctx.db, ctx.teamId, async (tx) => {
     // The mark is an event, not a time: a time would lose its microseconds on the way through a URL.
@@ -98,6 +101,7 @@ export async function listAuditEvents(ctx: Context, filter: AuditFilter): Promis
     return {
       events: shown.map((row) => ({ ...row, subjectName: names.get(row.subjectId) ?? null })),
       nextBefore: rows.length > PAGE_SIZE ? (shown.at(-1)?.id ?? null) : null,
+      readAt,
     };
   });
 }

@@ -92,9 +92,9 @@ describe("listAuditEvents", () => {
     const [mark] = (await listAuditEvents(theirs, {})).events;
     await createProgram(ours, program("Gannet"));
     const nothing = { events: [], nextBefore: null };
-    expect(await listAuditEvents(ours, { before: mark?.id })).toEqual(nothing);
-    expect(await listAuditEvents(ours, { actorId: theirs.userId })).toEqual(nothing);
-    expect(await listAuditEvents(ours, { before: "yesterday" })).toEqual(nothing);
+    expect(await listAuditEvents(ours, { before: mark?.id })).toMatchObject(nothing);
+    expect(await listAuditEvents(ours, { actorId: theirs.userId })).toMatchObject(nothing);
+    expect(await listAuditEvents(ours, { before: "yesterday" })).toMatchObject(nothing);
     expect((await listAuditEvents(ours, {})).events).toHaveLength(1);
   });
 });

@@ -2,6 +2,7 @@ import { sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { applySignalPath } from "@/lib/core/bench/apply-signal-path";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
+import type { Standing } from "@/lib/core/reading/reading";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 import { parseSweepFile } from "@/lib/formats/parse-sweep-file";
@@ -44,14 +45,18 @@ function throughPath(traces: Trace[], path: SignalPath, corrected: boolean): Tra
   });
 }
 
+export interface ImportedSweep {
+  sweepId: string;
+  name: string;
+  /** One for each mask of the program that the sweep can be held against. */
+  readings: { maskTitle: string; standing: Standing; marginDb: number | null }[];
+}
+
 /**
  * Takes one file in: the original bytes, its traces after the signal path, and a reading against
  * each mask of the program, in one transaction. Whatever is not understood stores nothing.
  */
-export async function importSweep(
-  ctx: Context,
-  input: unknown,
-): Promise<{ sweepId: string; name: string }> {
+export async function importSweep(ctx: Context, input: unknown): Promise<ImportedSweep> {
   requirePermission(ctx, "sweep.write");
   const values = parseInput(importSweepSchema, input);
   const read = readTraces(values);
@@ -87,6 +92,7 @@ export async function importSweep(
       const fileUnit = read[position]?.unit ?? trace.unit;
       await storeTrace(tx, { ...place, position, fileUnit, rbwHz: values.settings.rbwHz }, trace);
     }
+    const readings: ImportedSweep["readings"] = [];
     if (values.purpose === "product") {
       const sweep = {
         ...place,
@@ -97,7 +103,15 @@ export async function importSweep(
         overdueTransducers: overdueOn(bench.path, values.measuredOn),
       };
       for (const mask of await listProgramMasks(tx, teamId, programId)) {
-        await storeReading(tx, sweep, mask);
+        const reading = await storeReading(tx, sweep, mask);
+        if (reading.notComparable !== null) continue;
+        const worst =
+          reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];
+        readings.push({
+          maskTitle: mask.content.title,
+          standing: reading.standing,
+          marginDb: worst?.worst?.marginDb ?? null,
+        });
       }
     }
     await audit({
@@ -106,6 +120,6 @@ export async function importSweep(
       subjectId: row.id,
       detail: { name: values.name, fileName: values.fileName, sha256, buildId: values.buildId },
     });
-    return { sweepId: row.id, name: values.name };
+    return { sweepId: row.id, name: values.name, readings };
   });
 }

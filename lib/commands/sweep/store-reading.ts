@@ -1,6 +1,7 @@
 import type { Transaction } from "@/db/client";
 import { readings, suspects } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
+import type { Reading } from "@/lib/core/reading/reading";
 import { readSweep } from "@/lib/core/reading/read-sweep";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import type { Trace } from "@/lib/core/sweep/trace";
@@ -26,7 +27,7 @@ export async function storeReading(
   tx: Transaction,
   sweep: SweepToRead,
   mask: MaskToHold,
-): Promise<void> {
+): Promise<Reading> {
   const { teamId, sweepId, overdueTransducers, ...measured } = sweep;
   const reading = readSweep({
     ...measured,
@@ -53,7 +54,7 @@ export async function storeReading(
     })
     .returning({ id: readings.id });
   if (!row) throw new Error("The reading was not stored.");
-  if (found.length === 0) return;
+  if (found.length === 0) return reading;
   await tx.insert(suspects).values(
     found.map(({ traceIndex, ...suspect }) => ({
       teamId,
@@ -62,4 +63,5 @@ export async function storeReading(
       ...suspect,
     })),
   );
+  return reading;
 }

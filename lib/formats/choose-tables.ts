@@ -53,6 +53,41 @@ function checkRowsAbove({ table, header }: ChosenTable): void {
   }
 }
 
+/**
+ * "30,50,41,25" may be 30.50 and 41.25. Pairs of whole numbers, the second of constant width, are
+ * not told from decimal commas unless the header names every column.
+ */
+function checkCommas({ table }: ChosenTable): void {
+  const { columns, probe, shape, rows } = table;
+  if (shape.delimiter !== "," || columns.length < 4 || columns.length % 2 !== 0) return;
+  if (columns.some(({ name, unitText }) => name !== null || unitText !== null)) return;
+  const isPair = columns.every((_, i) => {
+    const cells = probe.map((row) => row[i] ?? "");
+    if (i % 2 === 0) return cells.every((cell) => /^[+-]?\d+$/.test(cell));
+    return cells.every((cell) => /^\d+$/.test(cell) && cell.length === cells[0]?.length);
+  });
+  if (isPair)
+    throw new Refusal(
+      `Line ${rows.firstLine}: the comma seems to be both delimiter and decimal mark. Export with another delimiter or with decimal points, or name every column.`,
+      rows.firstLine,
+    );
+}
+
+/** Same columns of levels, and no other names for them. */
+function hasSameColumns(table: FoundTable, main: FoundTable): boolean {
+  return (
+    table.columns.length === main.columns.length &&
+    table.columns.every((column, i) => {
+      const other = main.columns[i];
+      return (
+        column.isNumber === other?.isNumber &&
+        (column.notLevels === null) === (other.notLevels === null) &&
+        (column.name === null || other.name === null || column.name === other.name)
+      );
+    })
+  );
+}
+
 /** The longest table, and those that repeat its layout at a like length: further traces. */
 export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warnings: string[] } {
   const { tables } = parts;
@@ -64,7 +99,7 @@ export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warning
   for (const table of tables) {
     lines = [...lines, ...table.header];
     const isSibling =
-      table.columns.length === main.columns.length &&
+      hasSameColumns(table, main) &&
       table.shape.frequencyColumn === main.shape.frequencyColumn &&
       table.shape.delimiter === main.shape.delimiter &&
       2 * table.rows.rows >= main.rows.rows;
@@ -80,6 +115,7 @@ export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warning
     }
   }
   for (const entry of chosen) {
+    checkCommas(entry);
     checkRowsAbove(entry);
     if (entry.table.rows.problem) throw entry.table.rows.problem;
   }

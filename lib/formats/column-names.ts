@@ -1,4 +1,5 @@
 import { parseFrequencyUnit, parseUnit } from "@/lib/core/units/parse-unit";
+import { headerKeyOf } from "./header-keys";
 import { isNumeric, type DecimalMark } from "./parse-number";
 import { splitRow, trimCells, WHITESPACE } from "./split-row";
 import { withoutComment } from "./text-lines";
@@ -55,7 +56,6 @@ function isUnitRow(cells: string[]): boolean {
 function isNameRow(cells: string[]): boolean {
   const filled = cells.filter((cell) => cell !== "");
   if (filled.length === 0 || filled.some(isNumeric)) return false;
-  const first = filled[0] ?? "";
   const levels = cells.slice(1);
   const hasAxis = cells.some(
     (cell) =>
@@ -65,7 +65,7 @@ function isNameRow(cells: string[]): boolean {
   );
   const isKeyAndUnit = filled.length === 2 && parseFrequencyUnit(filled[1] ?? "") !== null;
   if (isKeyAndUnit) return false;
-  if (hasAxis) return cells.length === 1 || filled.length > 1 || levelUnitIn(first) !== null;
+  if (hasAxis) return filled.length > 1;
   return cells[0] === "" && levels.filter((cell) => LEVEL_NAME.test(cell)).length > 0;
 }
 
@@ -98,8 +98,10 @@ export function findColumnNames({ probe, header, delimiter }: NamesInput): Colum
       break;
     }
     // Right above a row of units stand the names, whatever language they are in.
-    if (found.units.length > 0 && !cells.some(isNumeric)) {
-      found.names = cells.map((cell) => (cell === "" ? null : cell));
+    if (found.units.length > 0) {
+      // Two cells may as well be a setting and its value.
+      if (count > 2 && !cells.some(isNumeric) && headerKeyOf(cells[0] ?? "") === null)
+        found.names = cells.map((cell) => (cell === "" ? null : cell));
       break;
     }
   }

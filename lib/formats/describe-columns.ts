@@ -55,6 +55,7 @@ function chooseFrequency(
   values: number[][],
 ): { column: number; doubt: string | null } {
   const numbers = columns.flatMap((column, i) => (column.isNumber ? [i] : []));
+  if (numbers.length < 2) return { column: -1, doubt: null };
   const orders = values.map(orderOf);
   const named = numbers.filter((i) => columns[i]?.frequencyUnitHz !== null);
   const called = numbers.filter((i) => FREQUENCY_NAME.test(columns[i]?.name?.trim() ?? ""));
@@ -114,10 +115,12 @@ export function describeColumns(input: ColumnInput): {
     column.isNumber ? probe.map((row) => parseNumber(row[i] ?? "", decimal) ?? NaN) : [],
   );
   const { column: frequencyColumn, doubt } = chooseFrequency(columns, values);
+  const numbers = columns.filter((column) => column.isNumber).length;
   columns.forEach((column, i) => {
     if (!column.isNumber || i === frequencyColumn || column.levelUnit !== null) return;
     if (column.frequencyUnitHz !== null) column.notLevels = "it holds frequencies";
-    else if (orderOf(values[i] ?? []) === "counting") column.notLevels = "it counts the points";
+    else if (orderOf(values[i] ?? []) === "counting" && numbers > 2)
+      column.notLevels = "it counts the points";
     else if (isOtherQuantity(column.name ?? "") || otherAxisIn(column.unitText ?? "") !== null)
       column.notLevels = "its name is not that of a level";
     else if (/^(?:deg|degrees?|\u00b0|rad|%|count|counts)$/i.test(column.unitText ?? ""))

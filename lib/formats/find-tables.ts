@@ -3,7 +3,8 @@ import { detectDecimal } from "./detect-decimal";
 import { isGap, isNumeric, type DecimalMark } from "./parse-number";
 import { readRows, type TableRows, type TableShape } from "./read-rows";
 import { splitRow, trimCells, WHITESPACE } from "./split-row";
-import { isComment, lineEnd, nextLine } from "./text-lines";
+import { isComment, lineEnd, nextLine, withoutComment } from "./text-lines";
+import { frequencyUnitIn, levelUnitIn } from "./unit-words";
 
 export interface HeaderLine {
   line: number;
@@ -44,43 +45,80 @@ function sameShape(first: string[], second: string[]): boolean {
     kindOf(a[i] ?? ""),
     kindOf(b[i] ?? ""),
   ]);
-  if (kinds.some(([x, y]) => x !== y || x === "odd")) return false;
+  return !kinds.some(([x, y]) => x !== y || x === "odd");
+}
+
+/** Rows of one shape that share at least two numbers, or are one number each. */
+function areRows(first: string[], second: string[]): boolean {
+  if (!sameShape(first, second)) return false;
+  const [a, b] = [trimCells(first), trimCells(second)];
+  const kinds = Array.from({ length: Math.max(a.length, b.length) });
   const numbers = kinds.filter((_, i) => isNumeric(a[i] ?? "") && isNumeric(b[i] ?? "")).length;
   return numbers >= 2 || (numbers === 1 && kinds.length === 1);
 }
 
-/** Delimiter under which two neighbouring lines are rows of one table; null when none is. */
+/** Lines that may follow a first row before the next good one: blanks, notes, a bad row. */
+const LOOK_AHEAD = 4;
+
+/** The next few lines that hold numbers. */
+function linesAfter(text: string, from: number): string[] {
+  const lines: string[] = [];
+  for (let at = from, tries = 0; at < text.length && tries < LOOK_AHEAD; tries += 1) {
+    const end = lineEnd(text, at);
+    const line = text.slice(at, end);
+    if (/\d/.test(line) && !isComment(line)) lines.push(line);
+    at = nextLine(text, end);
+  }
+  return lines;
+}
+
+/** Delimiter under which two lines are rows of one table; null when none is. */
 function rowDelimiter(line: string, next: string, preferred: string | null): string | null {
-  if (!/\d/.test(line) || !/\d/.test(next)) return null;
   const candidates = preferred === null ? DELIMITERS : [preferred, ...DELIMITERS];
   for (const delimiter of candidates) {
     if (delimiter !== WHITESPACE && !line.includes(delimiter)) continue;
     const [first, second] = [splitRow(line, delimiter), splitRow(next, delimiter)];
-    if (trimCells(first).length >= 2 && sameShape(first, second)) return delimiter;
+    // Under a comma, "50 100" is what two columns with decimal commas leave, no number.
+    if (delimiter === "," && first.some((cell) => / /.test(cell) && isNumeric(cell))) continue;
+    if (trimCells(first).length >= 2 && areRows(first, second)) return delimiter;
   }
   const lone = [line, next].map((text) => [text.trim().replace(/[,;]$/, "")]);
-  return sameShape(lone[0] ?? [], lone[1] ?? []) ? (line.includes(";") ? ";" : ",") : null;
+  return areRows(lone[0] ?? [], lone[1] ?? []) ? (line.includes(";") ? ";" : ",") : null;
 }
 
 /** The first rows of a table as cells; comments and blank lines are passed over. */
 function probeRows(text: string, from: number, delimiter: string): string[][] {
   const rows: string[][] = [];
-  let count = 0;
+  let first: string[] | null = null;
   for (let at = from, tries = 0; at < text.length && tries < PROBE_ROWS; tries += 1) {
     const end = lineEnd(text, at);
     const line = text.slice(at, end);
     at = nextLine(text, end);
     if (line.trim() === "" || isComment(line)) continue;
     const cells = splitRow(line, delimiter);
-    if (rows.length === 0) count = cells.length;
-    if (Math.abs(cells.length - count) > 1) break;
-    rows.push(cells);
+    if (first === null || sameShape(first, cells)) rows.push(cells);
+    else if (rows.length >= 3) break;
+    first ??= cells;
   }
   return rows;
 }
 
 function columnCells(probe: string[][], column: number): string[] {
   return probe.map((cells) => cells[column] ?? "").filter((cell) => cell !== "");
+}
+
+/** Columns that hold something, or that the header names though they are empty. */
+function columnCount(raw: string[][], header: HeaderLine[], delimiter: string): number {
+  const filled = Math.max(1, ...raw.map((cells) => trimCells(cells).length));
+  const width = Math.min(...raw.map((cells) => cells.length));
+  const isNamed =
+    width > filled &&
+    header.some(({ text }) => {
+      const cells = trimCells(splitRow(withoutComment(text), delimiter));
+      const units = cells.filter((cell) => frequencyUnitIn(cell) ?? levelUnitIn(cell));
+      return cells.length === width && units.length >= 2 && !cells.some(isNumeric);
+    });
+  return isNamed ? width : filled;
 }
 
 function readTable(
@@ -92,7 +130,7 @@ function readTable(
   decimalAnswer: DecimalMark | undefined,
 ): FoundTable {
   const raw = probeRows(text, from, delimiter);
-  const count = Math.max(1, ...raw.slice(0, PROBE_ROWS).map((cells) => trimCells(cells).length));
+  const count = columnCount(raw, header, delimiter);
   const probe = raw.map((cells) => cells.slice(0, count));
   const cellsByColumn = Array.from({ length: count }, (_, i) => columnCells(probe, i));
   const isNumberColumn = cellsByColumn.map((cells) => {
@@ -148,8 +186,11 @@ export function findTables(text: string, decimalAnswer?: DecimalMark): TextParts
     const content = text.slice(position, end);
     const following = nextLine(text, end);
     preferred = /^\s*"?sep=(.)"?\s*$/i.exec(content)?.[1] ?? preferred;
-    const next = text.slice(following, lineEnd(text, following));
-    const delimiter = isComment(content) ? null : rowDelimiter(content, next, preferred);
+    const mayStart = /\d/.test(content) && !isComment(content);
+    const delimiter = (mayStart ? linesAfter(text, following) : []).reduce<string | null>(
+      (found, next) => found ?? rowDelimiter(content, next, preferred),
+      null,
+    );
     if (delimiter !== null) {
       const table = readTable(text, position, header, line, delimiter, decimalAnswer);
       if (table.rows.rows > 0) {

@@ -3,8 +3,10 @@ export type DecimalMark = "." | ",";
 const PLAIN_DOT = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
 const PLAIN_COMMA = /^[+-]?(?:\d+,?\d*|,\d+)(?:[eE][+-]?\d+)?$/;
 /** Thousands in equal groups of three, by one kind of separator throughout. */
-const GROUPED_DOT = /^[+-]?\d{1,3}(?:([,'\u2019 \u00a0\u2009\u202f])\d{3})(?:\1\d{3})*(?:\.\d*)?$/;
-const GROUPED_COMMA = /^[+-]?\d{1,3}(?:([.'\u2019 \u00a0\u2009\u202f])\d{3})(?:\1\d{3})*(?:,\d*)?$/;
+const GROUPED_DOT =
+  /^[+-]?[1-9]\d{0,2}(?:([,'\u2019 \u00a0\u2009\u202f])\d{3})(?:\1\d{3})*(?:\.\d*)?$/;
+const GROUPED_COMMA =
+  /^[+-]?[1-9]\d{0,2}(?:([.'\u2019 \u00a0\u2009\u202f])\d{3})(?:\1\d{3})*(?:,\d*)?$/;
 const GAP = /^(?:|[-+]?nan(?:\(.*\))?|-+|\*+|n\/?a|null|none|invalid|[-+]?1\.#(?:qnan|ind)\d*)$/i;
 const INFINITE = /^[-+\u2212]?(?:inf(?:inity)?|\u221e|1\.#inf\d*)$/i;
 

@@ -167,8 +167,9 @@ export function readRows(text: string, from: number, line: number, shape: TableS
         const isInside =
           next !== null && goesOn(table, next[shape.frequencyColumn] ?? NaN, shape.frequencyColumn);
         if (!isPause)
-          table.problem = rowProblem(content, cells, problem, isInside, shape, current, table);
-        if (!isPause || !isInside) break;
+          table.problem ??= rowProblem(content, cells, problem, isInside, shape, current, table);
+        // A bad row inside is passed over, so that the table keeps its length and can be refused.
+        if (!isInside) break;
         position = following;
         current += 1;
         table.jumps.push([table.rows, current]);

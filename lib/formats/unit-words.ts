@@ -6,8 +6,12 @@ function unitPieces(name: string): string[] {
   const bracketed = [...name.matchAll(/[[(]\s*([^\])]+?)\s*[\])]/g)].map((match) => match[1] ?? "");
   const pieces = [...bracketed.reverse(), name];
   const slash = name.indexOf("/");
-  if (slash > 0) pieces.push(name.slice(slash + 1));
+  // "Level/dBm" names a unit behind the slash, "dBm/Hz" is one unit, and not Hz.
+  if (slash > 0 && !/dB\S*$|[WVA]$|[[(]/i.test(name.slice(0, slash)))
+    pieces.push(name.slice(slash + 1));
   for (const match of name.matchAll(/[\s_,:]+/g)) pieces.push(name.slice(match.index + 1));
+  const [firstWord = ""] = name.split(/\s+/);
+  if (/^dB/i.test(firstWord)) pieces.push(firstWord);
   return pieces;
 }
 

@@ -17,8 +17,8 @@ const CONTENTS: readonly Omit<SummaryFit, "chartHeightPt">[] = [
   { rows: 3, doubts: 2, steps: 3, summaryLength: 100, sentenceLength: 110 },
 ];
 
-const CHART_HEIGHTS_PT = [240, 220, 200, 184, 170, 156, 142] as const;
 const LOWEST_CHART_PT = 130;
+const HIGHEST_CHART_PT = 250;
 const LAST_RESORT: SummaryFit = {
   chartHeightPt: 104,
   rows: 3,
@@ -28,18 +28,19 @@ const LAST_RESORT: SummaryFit = {
   sentenceLength: 90,
 };
 
-/** The roomiest summary that stays on one page; the tightest when none does. */
+/** The fullest summary that stays on one page, with the highest chart (±4 pt) that leaves. */
 export async function chooseFit(
   staysOnePage: (fit: SummaryFit) => Promise<boolean>,
 ): Promise<SummaryFit> {
   for (const content of CONTENTS) {
-    const lowest = { ...content, chartHeightPt: LOWEST_CHART_PT };
-    if (!(await staysOnePage(lowest))) continue;
-    for (const chartHeightPt of CHART_HEIGHTS_PT) {
-      const fit = { ...content, chartHeightPt };
-      if (await staysOnePage(fit)) return fit;
+    let [low, high] = [LOWEST_CHART_PT, HIGHEST_CHART_PT];
+    if (!(await staysOnePage({ ...content, chartHeightPt: low }))) continue;
+    while (high - low > 8) {
+      const middle = (low + high) / 2;
+      if (await staysOnePage({ ...content, chartHeightPt: middle })) low = middle;
+      else high = middle;
     }
-    return lowest;
+    return { ...content, chartHeightPt: low };
   }
   return LAST_RESORT;
 }

@@ -6,7 +6,7 @@ import { COLOURS, TYPE } from "../style";
 import { ShoalMark } from "./marks";
 
 /** Heading that keeps at least `aheadPt` of what follows on its page. */
-export function SectionTitle({ children, aheadPt = 90 }: { children: string; aheadPt?: number }) {
+export function SectionTitle({ children, aheadPt = 130 }: { children: string; aheadPt?: number }) {
   return (
     <View
       minPresenceAhead={aheadPt}

@@ -42,7 +42,7 @@ function StateBand(props: Framed) {
         borderLeftColor: loud ? COLOURS.ink : COLOURS.deep,
         paddingVertical: loud ? 6 : 3.5,
         paddingHorizontal: 8,
-        marginBottom: 12,
+        marginBottom: 10,
       }}
     >
       <Words
@@ -114,7 +114,7 @@ export function PageFrame({ children, ...framed }: Framed & { children: ReactNod
         color: COLOURS.ink,
         backgroundColor: COLOURS.sheet,
         paddingTop: 30,
-        paddingBottom: 66,
+        paddingBottom: 62,
         paddingHorizontal: PAGE_MARGIN_PT,
       }}
     >

@@ -98,7 +98,7 @@ function Step({ step }: { step: SnapshotStep }) {
     same && step.position === 1 ? "Against step 0" : `Against step ${step.position - 1}`;
   return (
     <>
-      <SubTitle>{`Step ${step.position} · ${step.name}`}</SubTitle>
+      <SubTitle aheadPt={116}>{`Step ${step.position} · ${step.name}`}</SubTitle>
       {step.description === "" ? null : <Paragraph>{step.description}</Paragraph>}
       <Paragraph soft>
         {step.sweeps.length === 0 ? "No sweep in this step." : `Sweeps: ${step.sweeps.join(", ")}.`}

@@ -43,7 +43,7 @@ function segmentRows(mask: Mask, line: MaskLine) {
 function MaskBlock({ mask, revision }: HeldMask) {
   return (
     <>
-      <SubTitle>{`${mask.title} · revision ${revision}`}</SubTitle>
+      <SubTitle aheadPt={96}>{`${mask.title} · revision ${revision}`}</SubTitle>
       {mask.provenance === "from memory" ? (
         <Warning>
           FROM MEMORY: this mask was written down from memory and not read from the document.

@@ -75,14 +75,14 @@ function Suspects({ held: { reading }, sweep }: HeldProps) {
       ) : (
         <Table
           columns={[
-            { title: "No.", share: 0.5, kind: "number", align: "right" },
-            { title: "Frequency", share: 1.5, kind: "number", align: "right" },
-            { title: "Level", share: 1.6, kind: "number", align: "right" },
-            { title: "Limit", share: 1.6, kind: "number", align: "right" },
-            { title: "Margin", share: 1.2, kind: "number", align: "right" },
-            { title: "Prominence", share: 1.2, kind: "number", align: "right" },
-            { title: "Line", share: 1.4, kind: "small", longest: 18 },
-            { title: "Basis", share: 1.2, kind: "small" },
+            { title: "No.", share: 0.45, kind: "number", align: "right" },
+            { title: "Frequency", share: 1.35, kind: "number", align: "right" },
+            { title: "Level", share: 1.35, kind: "number", align: "right" },
+            { title: "Limit", share: 1.35, kind: "number", align: "right" },
+            { title: "Margin", share: 1.05, kind: "number", align: "right" },
+            { title: "Prominence", share: 1.15, kind: "number", align: "right" },
+            { title: "Line", share: 2.3, kind: "small", longest: 24 },
+            { title: "Basis", share: 1.15, kind: "small" },
           ]}
           rows={reading.suspects.map((suspect) => [
             String(suspect.number),
@@ -152,8 +152,10 @@ export function ReadingBlock({ held, sweep }: HeldProps) {
           </Text>
         ))}
       </View>
-      <Label>{`Doubts (${reading.doubts.length})`}</Label>
-      {reading.doubts.length === 0 ? (
+      {reading.notComparable === null || reading.doubts.length > 0 ? (
+        <Label aheadPt={24}>{`Doubts (${reading.doubts.length})`}</Label>
+      ) : null}
+      {reading.notComparable === null && reading.doubts.length === 0 ? (
         <Paragraph soft>No doubt was found in what the sweep states.</Paragraph>
       ) : null}
       {reading.doubts.map((doubt, i) => (

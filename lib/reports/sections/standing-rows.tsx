@@ -30,13 +30,13 @@ function Row({ row }: { row: LineSummary }) {
         flexDirection: "row",
         borderTopWidth: 0.4,
         borderTopColor: COLOURS.rule,
-        paddingVertical: 3,
+        paddingVertical: 2.2,
       }}
     >
-      <View style={{ width: 82 }}>
+      <View style={{ width: 72 }}>
         <StandingLabel standing={row.standing} />
       </View>
-      <View style={{ flexBasis: 0, flexGrow: 1, paddingRight: 10 }}>
+      <View style={{ flexBasis: 0, flexGrow: 1, paddingRight: 6 }}>
         <Words
           style={TYPE.strong}
           longest={40}
@@ -45,7 +45,7 @@ function Row({ row }: { row: LineSummary }) {
           {explain(row)}
         </Words>
       </View>
-      <View style={{ width: 152, alignItems: "flex-end" }}>
+      <View style={{ width: 146, alignItems: "flex-end" }}>
         <Text style={{ ...TYPE.strongNumber, fontSize: 11, color: STANDING_COLOURS[row.standing] }}>
           {formatMargin(worst?.point.marginDb ?? null)}
         </Text>

@@ -30,9 +30,7 @@ interface SummaryProps {
 
 function Masthead({ snapshot, fit }: SummaryProps) {
   const { program, build } = snapshot;
-  const benches = [
-    ...new Set(productSweeps(snapshot).map(({ bench }) => `${bench.name}, ${bench.site}`)),
-  ];
+  const benches = [...new Set(productSweeps(snapshot).map(({ bench }) => bench.name))];
   const facts = [
     ["Program and build", `${shorten(program.name, 48)}, ${shorten(build.name, 60)}`],
     ["Measured", measuredOn(snapshot)],
@@ -52,7 +50,10 @@ function Masthead({ snapshot, fit }: SummaryProps) {
           <Text style={TYPE.strongNumber}>{snapshot.number}</Text>
         </View>
       </View>
-      <Words style={{ ...TYPE.h1, marginBottom: 7 }} longest={40}>
+      <Words
+        style={{ ...TYPE.h1, fontSize: snapshot.title.length > 56 ? 17 : 21, marginBottom: 6 }}
+        longest={40}
+      >
         {snapshot.title}
       </Words>
       <View style={{ flexDirection: "row", marginBottom: 6 }}>
@@ -128,7 +129,7 @@ export function SummaryPage({
         </View>
       ) : null}
       <View style={{ flexDirection: "row", gap: 16 }}>
-        <View style={{ flexBasis: 0, flexGrow: 1.35 }}>
+        <View style={{ flexBasis: 0, flexGrow: 1.5 }}>
           <WorstSuspects deciding={deciding} />
         </View>
         <View style={{ flexBasis: 0, flexGrow: 1 }}>

@@ -27,11 +27,11 @@ export function WorstSuspects({ deciding }: { deciding: Deciding | null }) {
       ) : (
         <Table
           columns={[
-            { title: "", share: 0.35, kind: "number" },
-            { title: "Frequency", share: 1.55, kind: "number", align: "right" },
-            { title: "Level", share: 1.75, kind: "number", align: "right" },
-            { title: "Margin", share: 1.2, kind: "number", align: "right" },
-            { title: "Against", share: 1.9, kind: "small", longest: 18 },
+            { title: "", share: 0.32, kind: "number" },
+            { title: "Frequency", share: 1.3, kind: "number", align: "right" },
+            { title: "Level", share: 1.5, kind: "number", align: "right" },
+            { title: "Margin", share: 1.1, kind: "number", align: "right" },
+            { title: "Against", share: 2.3, kind: "small", longest: 18 },
           ]}
           rows={suspects
             .slice(0, SHOWN_SUSPECTS)

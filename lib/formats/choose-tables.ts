@@ -1,4 +1,5 @@
 import type { FoundTable, HeaderLine, TextParts } from "./find-tables";
+import { expandHops } from "./expand-hops";
 import { isNumeric } from "./parse-number";
 import { cellProblem, shapedCells } from "./read-rows";
 import { quote, Refusal } from "./refusal";
@@ -10,6 +11,8 @@ export interface ChosenTable {
   table: FoundTable;
   /** All lines above it that may speak of it. */
   header: HeaderLine[];
+  /** Lines after the last table; what they state counts where the header is silent. */
+  footer: HeaderLine[];
 }
 
 function asLines(table: FoundTable): HeaderLine[] {
@@ -30,7 +33,7 @@ function refuseWithoutTable({ footer }: TextParts): never {
       `Line ${single.line} is the only row of numbers; a trace needs at least two points. Export the whole trace.`,
       single.line,
     );
-  const bad = footer.find(({ text }) => /^\s*[+-]?\d[\d.]*\s*[,;\t]/.test(text));
+  const bad = footer.find(({ text }) => /^\s*[+-]?\d[\d.]*\s*(?:[kmg]?hz)?\s*[,;\t]/i.test(text));
   const lines = footer.filter(({ text }) => text.trim() !== "").length;
   throw new Refusal(
     bad
@@ -90,7 +93,7 @@ function hasSameColumns(table: FoundTable, main: FoundTable): boolean {
 
 /** The longest table, and those that repeat its layout at a like length: further traces. */
 export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warnings: string[] } {
-  const { tables } = parts;
+  const tables = parts.tables.map((table) => expandHops(table) ?? table);
   const main = tables.toSorted((a, b) => b.rows.rows - a.rows.rows)[0];
   if (!main) return refuseWithoutTable(parts);
   const chosen: ChosenTable[] = [];
@@ -104,7 +107,7 @@ export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warning
       table.shape.delimiter === main.shape.delimiter &&
       2 * table.rows.rows >= main.rows.rows;
     if (table === main || isSibling) {
-      chosen.push({ table, header: lines });
+      chosen.push({ table, header: lines, footer: [] });
       lines = [];
     } else {
       if (table.rows.rows >= 5)
@@ -114,6 +117,8 @@ export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warning
       lines = [...lines, ...asLines(table)];
     }
   }
+  const last = chosen.at(-1);
+  if (last) last.footer = [...lines, ...parts.footer];
   for (const entry of chosen) {
     checkCommas(entry);
     checkRowsAbove(entry);

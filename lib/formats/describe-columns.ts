@@ -29,6 +29,16 @@ export interface ColumnInput {
 const FREQUENCY_NAME =
   /freq|fr[e\u00e9]q|frekv|^f$|^f[\s([_/]|\u0447\u0430\u0441\u0442\u043e\u0442/i;
 
+/** A text column of units; a lone "V" may as well be a polarization. */
+function isUnitColumn(cells: string[], name: string | null): boolean {
+  if (name !== null && !/unit|einheit|^-$/i.test(name) && parseUnit(name) === null) return false;
+  return cells.every(
+    (cell) =>
+      parseFrequencyUnit(cell) !== null ||
+      (parseUnit(cell) !== null && (cell.length > 1 || name !== null)),
+  );
+}
+
 type Order = "rising" | "falling" | "counting" | "other";
 
 /** Counting: whole numbers one apart from 0 or 1, as an index or a point number. */
@@ -87,14 +97,13 @@ export function describeColumns(input: ColumnInput): {
   const { names, units } = findColumnNames(input);
   const columns = isNumberColumn.map((isNumber, i): ColumnInfo => {
     const cells = probe.map((row) => row[i] ?? "");
-    const first = cells[0] ?? "";
-    const isUnit = parseUnit(first) !== null || parseFrequencyUnit(first) !== null;
     const name = names[i] ?? null;
+    const rowUnit = isNumber || !isUnitColumn(cells, name) ? null : (cells[0] ?? null);
     const unitText = units[i] ?? null;
     return {
       isNumber,
       name,
-      rowUnit: !isNumber && isUnit ? first : null,
+      rowUnit,
       frequencyUnitHz:
         (unitText === null ? null : parseFrequencyUnit(unitText)) ?? frequencyUnitIn(name ?? ""),
       levelUnit: (unitText === null ? null : parseUnit(unitText)) ?? levelUnitIn(name ?? ""),
@@ -129,7 +138,11 @@ export function describeColumns(input: ColumnInput): {
   columns.forEach((column, i) => {
     // "Margin (dB)" carries a level's unit and is none all the same.
     if (i !== frequencyColumn && column.isNumber && column.levelUnit !== null)
-      if (/limit|margin|mask|delta|factor|uncertain|transducer/i.test(column.name ?? ""))
+      if (
+        /limit|margin|mask|delta|factor|uncertain|transducer|corr|loss|gain|offset/i.test(
+          column.name ?? "",
+        )
+      )
         column.notLevels = "its name is not that of a level";
   });
   return { columns, frequencyColumn, frequencyDoubt: doubt };

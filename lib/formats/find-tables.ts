@@ -20,8 +20,8 @@ export interface FoundTable {
   /** Lines above it, back to the table before. */
   header: HeaderLine[];
   isDecimalOpen: boolean;
-  /** Why the frequency column was chosen, when another might be it. */
-  frequencyDoubt: string | null;
+  /** How it was understood where that was not plain; shown as warnings. */
+  notes: string[];
 }
 
 const DELIMITERS = ["\t", ";", "^", "|", ",", WHITESPACE];
@@ -164,7 +164,7 @@ function readTable(
     probe,
     header,
     isDecimalOpen: guess.isOpen && decimalAnswer === undefined,
-    frequencyDoubt: description.frequencyDoubt,
+    notes: description.frequencyDoubt === null ? [] : [description.frequencyDoubt],
   };
 }
 

@@ -67,8 +67,9 @@ function readTables(
   let facts: HeaderFacts = new Map();
   let axis: FrequencyAxis | null = null;
   let referenceUnit: string | null = null;
-  for (const [place, { table, header }] of chosen.entries()) {
-    facts = mergeFacts(facts, readHeader(header, table.shape.delimiter));
+  for (const [place, { table, header, footer }] of chosen.entries()) {
+    const own = readHeader(header, table.shape.delimiter);
+    facts = mergeFacts(readHeader(footer, table.shape.delimiter), mergeFacts(facts, own));
     const tableAxis = readTableAxis(table, facts, answers);
     axis ??= tableAxis.axis;
     if (place === 0) preview.questions.push(...tableAxis.questions);

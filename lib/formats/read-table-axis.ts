@@ -34,6 +34,11 @@ const UNIT_QUESTION = {
 } as const;
 
 function refuseOtherAxis(table: FoundTable): void {
+  const across = table.columns.filter(({ name }) => /^\d[\d.,]*\s*[kmg]?hz$/i.test(name ?? ""));
+  if (across.length > 1)
+    throw new Refusal(
+      "The frequencies stand as the names of columns, one sweep per row. Export one row per frequency.",
+    );
   const place = Math.max(0, table.shape.frequencyColumn);
   const column = table.columns[place];
   if (!column || column.frequencyUnitHz !== null) return;
@@ -108,6 +113,6 @@ export function readTableAxis(
     // frequency column that is in Hz.
     headerUnitHz: fitted ?? (isInHz ? 1 : null),
     questions: unitHz === null ? [{ ...UNIT_QUESTION, guess: String(guessUnitHz(ends)) }] : [],
-    warnings: [...order.warnings, ...(table.frequencyDoubt === null ? [] : [table.frequencyDoubt])],
+    warnings: [...order.warnings, ...table.notes],
   };
 }

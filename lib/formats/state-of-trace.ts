@@ -54,7 +54,9 @@ function unitNearby(header: HeaderLine[], delimiter: string): FileUnit | null {
 /** What the column itself calls its unit, when that is none that Neap knows. */
 function unknownUnit(column: ColumnInfo): string | null {
   if (column.levelUnit !== null) return null;
-  const inName = /[[(]\s*(dB[^\])]*|[^\])]*\/[^\])]*)[\])]/i.exec(column.name ?? "")?.[1];
+  const inName = /[[(]\s*(dB[^\])]*|[^\])]*\/[^\])]*|[num\u00b5\u03bcp]?[AVWT])\s*[\])]/i.exec(
+    column.name ?? "",
+  )?.[1];
   return inName ?? column.unitText;
 }
 

@@ -169,3 +169,44 @@ it("reads the same numbers as a general CSV reader", () => {
   expect(Array.from(trace!.levelsDb)).toEqual(rows.map((row) => Math.fround(Number(row[1]))));
   hz(trace!).forEach((value, i) => expect(value).toBeCloseTo(Number(rows[i]?.[0]) * 1e6, 0));
 });
+
+it("puts rows of bins in order, keeps the highest of several passes, and says both", () => {
+  const row = (time: string, low: number, levels: string) =>
+    `2026-03-18, ${time}, ${low}, ${low + 300}, 100.00, 12, ${levels}`;
+  const text = [
+    row("10:00:00", 1300, "-53, -54, -55"),
+    row("10:00:00", 1000, "-50, -51, -52"),
+    row("10:00:01", 1300, "-63, -44, -65"),
+    row("10:00:01", 1000, "-40, -61, -62"),
+  ].join("\n");
+  const answers = { unit: "dB", detector: "average", frequencyUnitHz: 1 } as const;
+  const [trace, ...others] = traces(text, answers);
+  expect(others).toEqual([]);
+  expect(hz(trace!)).toEqual([1050, 1150, 1250, 1350, 1450, 1550]);
+  expect(levels(trace!)).toEqual([-40, -51, -52, -53, -44, -55]);
+  expect(trace).toMatchObject({ hold: "max-hold", axis: { kind: "regular" } });
+  expect(preview(text, answers).warnings.join()).toMatch(/middle of its bin.*2 passes/s);
+  const repeated = text.replaceAll(/$/gm, ", -1");
+  expect(levels(traces(repeated, answers)[0]!)).toEqual(levels(trace!));
+});
+
+it("reads a list of final readings, and leaves out what is no level", () => {
+  const text = [
+    "Final readings",
+    "Frequency (MHz);QuasiPeak (dBµV/m);Limit (dBµV/m);Margin (dB);Meas. Time (ms);Bandwidth (kHz);Height (cm);Pol;Azimuth (deg);Corr. (dB)",
+    "31,2;33,4;40,00;6,6;1000;120,000;100,0;V;12,0;18,2",
+    "87,5;30,4;40,00;9,6;1000;120,000;150,0;V;14,0;12,2",
+    "243,9;39,4;47,00;7,6;1000;120,000;100,0;V;-12,0;14,2",
+    "612,4;38,0;47,00;9,0;1000;120,000;100,0;V;-12,0;15,9",
+  ].join("\n");
+  const read = traces(text, { kind: "spots" });
+  expect(read.map(({ unit, detector, kind }) => [unit, detector, kind])).toEqual([
+    ["dBuV/m", "quasi-peak", "spots"],
+  ]);
+  expect(hz(read[0]!)).toEqual([31.2e6, 87.5e6, 243.9e6, 612.4e6]);
+  expect(preview(text).leftOut.map(({ column }) => column)).toEqual([2, 3, 4, 5, 6, 8, 9]);
+});
+
+it("reads settings that stand below the table", () => {
+  expect(preview("MHz,dBuV\n30,40\n31,41\n\nRBW,120 kHz\n").rbwHz).toBe(120e3);
+});

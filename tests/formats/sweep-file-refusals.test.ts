@@ -44,6 +44,7 @@ it.each([
   ["a wavelength axis", "Wave;Sample\n[nm];[counts]\n515,95;1152,0\n516,03;1296,0\n", /wavelength/],
   ["a time axis", "Time (s),Level (dBm)\n0.1,-40\n0.2,-41\n0.3,-40\n", /a time/],
   ["a table in no order", "7,1\n3,9\n8,2\n1,8\n5,0\n2,7\n", /no column that runs/],
+  ["frequencies as names of columns", "Time,30 MHz,31 MHz\n1,-4,-5\n2,-6,-7\n", /names of columns/],
   ["traces that are all off", `${NAMES}30,0\n31,0\n32,0\n`, /No trace is left/],
   [
     "points that cannot be placed",

@@ -4,7 +4,10 @@ export interface ScreenPoint {
   y: number;
 }
 
-const at = ({ x, y }: ScreenPoint) => `${x.toFixed(1)},${y.toFixed(1)}`;
+/** A tenth of a pixel is as fine as a screen shows. */
+const tenth = (px: number) => Math.round(px * 10) / 10;
+
+const at = ({ x, y }: ScreenPoint) => `${tenth(x)},${tenth(y)}`;
 
 /** Splits a list at its gaps. */
 export function piecesOf<T>(points: readonly (T | null)[]): T[][] {
@@ -27,13 +30,13 @@ export function linePath(points: readonly (ScreenPoint | null)[]): string {
 
 /** Closed path between a line with gaps and a straight edge at `edgeY`. */
 export function areaPath(points: readonly (ScreenPoint | null)[], edgeY: number): string {
-  const edge = edgeY.toFixed(1);
+  const edge = tenth(edgeY);
   return piecesOf(points)
     .map((piece) => {
       const first = piece[0];
       const last = piece.at(-1);
       if (!first || !last) return "";
-      return `M${first.x.toFixed(1)},${edge}L${piece.map(at).join("L")}L${last.x.toFixed(1)},${edge}Z`;
+      return `M${tenth(first.x)},${edge}L${piece.map(at).join("L")}L${tenth(last.x)},${edge}Z`;
     })
     .join("");
 }

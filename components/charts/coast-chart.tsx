@@ -4,6 +4,7 @@ import { useCallback, useMemo } from "react";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { Suspect } from "@/lib/core/reading/reading";
 import { Buoys } from "./buoys";
+import type { ClockMark } from "./clock-marks";
 import { CoastControls } from "./coast-controls";
 import { CoastKey } from "./coast-key";
 import { CoastPlot } from "./coast-plot";
@@ -35,10 +36,13 @@ export interface CoastChartProps {
   label: string;
   /** With the guard, buoys tell inside guard from clear. */
   guardDb?: number;
+  /** Known clocks and harmonics to tick off along the top edge. */
+  clocks?: ClockMark[];
 }
 
 const HINT =
   "Point at the chart to read it. Drag, scroll or press + to zoom, double-click or press 0 for all.";
+const NO_CLOCKS: ClockMark[] = [];
 const MARGIN = { top: 24, right: 10, bottom: 24, left: 38 };
 
 export function CoastChart(props: CoastChartProps) {
@@ -54,13 +58,14 @@ function SizedChart(props: CoastChartProps & { width: number }) {
   const { traces, mask, suspects, view, extent, scale, label, width } = props;
   const { onView, onScale, highlighted, onHighlight, state, height = 380 } = props;
   const guardDb = props.guardDb ?? null;
+  const clocks = props.clocks ?? NO_CLOCKS;
   const prepared = useMemo(
     () =>
       prepareCoast({
-        ...{ traces, mask, suspects, view, extent, scale, guardDb, label },
+        ...{ traces, mask, suspects, view, extent, scale, guardDb, clocks, label },
         ...{ width: Math.max(width, 120), height, margin: MARGIN },
       }),
-    [traces, mask, suspects, view, extent, scale, guardDb, label, width, height],
+    [traces, mask, suspects, view, extent, scale, guardDb, clocks, label, width, height],
   );
   const { plane, buoys } = prepared;
   const onStep = useCallback(

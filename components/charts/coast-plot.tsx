@@ -61,7 +61,7 @@ export const CoastPlot = memo(function CoastPlot(props: {
   margin: ChartMargin;
 }) {
   const { prepared, width, height, margin } = props;
-  const { plane, coastline, traces, unit } = prepared;
+  const { plane, coastline, traces, unit, clocks } = prepared;
   const id = useId();
   const order = { main: 0, ambient: 1, outline: 2 };
   return (
@@ -95,6 +95,23 @@ export const CoastPlot = memo(function CoastPlot(props: {
           ))}
         {coastline ? <Coast coastline={coastline} /> : null}
       </g>
+      <path d={clocks.path} stroke="var(--ink)" strokeWidth="1.25" />
+      {clocks.labels.map(({ x, text }, i) => (
+        <text
+          key={i}
+          x={x}
+          y={plane.top + 16}
+          fontSize="10"
+          textAnchor="middle"
+          fill="var(--ink)"
+          stroke="var(--sheet)"
+          strokeWidth="3"
+          strokeOpacity="0.75"
+          paintOrder="stroke"
+        >
+          {text}
+        </text>
+      ))}
     </FrequencyFrame>
   );
 });

@@ -5,6 +5,7 @@ import type { TraceView } from "@/lib/core/sweep/trace-view";
 import { formatFrequency, formatMargin } from "@/lib/core/units/format";
 import { LEVEL_UNIT_LABELS, type LevelUnit } from "@/lib/core/units/level-units";
 import { makePlane, type ChartMargin, type ChartPlane } from "./chart-plane";
+import { prepareClocks, type ClockMark, type PreparedClocks } from "./clock-marks";
 import type { CoastTrace } from "./coast-trace";
 import { drawTrace, type DrawnTrace } from "./draw-trace";
 import type { AxisScaleKind, FrequencyView } from "./frequency-scale";
@@ -22,6 +23,7 @@ export interface CoastInput {
   extent: FrequencyView;
   scale: AxisScaleKind;
   guardDb: number | null;
+  clocks: readonly ClockMark[];
   label: string;
   width: number;
   height: number;
@@ -45,6 +47,7 @@ export interface PreparedCoast {
   coastline: Coastline | null;
   traces: PreparedTrace[];
   buoys: Buoy[];
+  clocks: PreparedClocks;
   /** What the chart does not show, and why. */
   notes: string[];
   /** The drawing in one sentence, for those who do not see it. */
@@ -91,18 +94,20 @@ function summarise(
     : `${label}: nothing to draw, ${range}, ${against}.`;
 }
 
-/** Tells whether a box would cover the top edge of a trace. */
+/** Tells whether a box would cover the top edge of a trace; looks up the highest one per pixel. */
 function waterTest(views: readonly TraceView[], plane: ChartPlane): (box: Box) => boolean {
-  const edges = views.map(({ hz, maxDb }) => ({ xs: hz.map(plane.xOf), maxDb }));
+  const highest = new Float64Array(Math.ceil(plane.right) + 1).fill(Number.POSITIVE_INFINITY);
+  for (const { hz, maxDb } of views)
+    hz.forEach((frequencyHz, i) => {
+      const level = maxDb[i];
+      const x = Math.round(plane.xOf(frequencyHz));
+      if (level === null || level === undefined || !(x >= 0 && x < highest.length)) return;
+      highest[x] = Math.min(highest[x] ?? Number.POSITIVE_INFINITY, plane.yOf(level));
+    });
   return (box) =>
-    edges.some(({ xs, maxDb }) =>
-      xs.some((x, i) => {
-        const level = maxDb[i];
-        return x > box.left && x < box.right && level !== null && level !== undefined
-          ? plane.yOf(level) < box.bottom
-          : false;
-      }),
-    );
+    highest
+      .subarray(Math.max(0, Math.floor(box.left)), Math.max(0, Math.ceil(box.right)))
+      .some((y) => y < box.bottom);
 }
 
 /** Everything the coast chart draws, in px, from what was measured. */
@@ -175,6 +180,7 @@ export function prepareCoast(input: CoastInput): PreparedCoast {
       };
     }),
     buoys,
+    clocks: prepareClocks(input.clocks, plane),
     notes,
     summary: summarise(
       { ...input, mask },

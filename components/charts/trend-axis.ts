@@ -37,7 +37,9 @@ function dateTicks(from: number, to: number, widthPx: number): FrameTick[] {
   const most = Math.max(2, widthPx / 86);
   const days = [1, 2, 7, 14].find((step) => (to - from) / step <= most);
   if (days !== undefined) {
-    const first = Math.ceil(from / days) * days;
+    // Weeks begin on a Monday, as 5 January 1970 did.
+    const monday = days < 7 ? 0 : 4;
+    const first = Math.ceil((from - monday) / days) * days + monday;
     return Array.from({ length: Math.floor((to - first) / days) + 1 }, (_, i) => ({
       value: first + i * days,
       label: isoOf(first + i * days),

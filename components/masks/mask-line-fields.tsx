@@ -36,16 +36,18 @@ interface MaskLineFieldsProps {
 /** One limit line: its detector, its bandwidth and its segments as a table. */
 export function MaskLineFields(props: MaskLineFieldsProps) {
   const { line, place, frequencyUnit, problems, changes } = props;
+  const [pasted, setPasted] = useState("");
   const [pasteProblems, setPasteProblems] = useState<string[]>([]);
   const at = `lines.${place}`;
   const called = line.name.trim() || `line ${place + 1}`;
   const errorAt = (field: string) => problemAt(problems, `${at}.${field}`);
 
-  function paste(at: number | null, text: string): boolean {
+  /** What cannot be read is kept in the text area, to be mended there. */
+  function paste(at: number | null, text: string) {
     const read = readPastedSegments(text, frequencyUnit);
     setPasteProblems(read.ok ? [] : read.problems);
+    setPasted(read.ok ? "" : text);
     if (read.ok) changes.insertSegments(at, read.rows);
-    return read.ok;
   }
 
   return (
@@ -132,7 +134,12 @@ export function MaskLineFields(props: MaskLineFieldsProps) {
           Remove line
         </Button>
       </div>
-      <PasteSegments problems={pasteProblems} onPaste={(text) => paste(null, text)} />
+      <PasteSegments
+        text={pasted}
+        problems={pasteProblems}
+        onText={setPasted}
+        onAdd={() => paste(null, pasted)}
+      />
     </fieldset>
   );
 }

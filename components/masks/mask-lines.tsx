@@ -21,7 +21,13 @@ function bandwidthText({ rbwHz, rbwKind }: MaskLine): string {
 /** Every line of a mask with its segments, as they are held against a sweep. */
 export function MaskLines({ mask }: { mask: Mask }) {
   return mask.lines.map((line) => (
-    <div key={line.name} className="mb-6 overflow-x-auto border border-rule bg-sheet">
+    <div
+      key={line.name}
+      className="mb-6 overflow-x-auto border border-rule bg-sheet"
+      tabIndex={0}
+      role="region"
+      aria-label={`Segments of ${line.name}`}
+    >
       <table className="w-full text-left">
         <caption className="px-3 py-2 text-left">
           <span className="font-medium">{line.name}</span>{" "}

@@ -1,18 +1,17 @@
 "use client";
 
-import { useState } from "react";
 import { Button } from "@/components/ui/button";
 import { TextArea } from "@/components/ui/text-area";
 
 interface PasteSegmentsProps {
+  text: string;
   problems: readonly string[];
-  /** True when the rows were taken. */
-  onPaste: (text: string) => boolean;
+  onText: (text: string) => void;
+  onAdd: () => void;
 }
 
 /** A place to paste a whole table; pasting one into a cell works as well. */
-export function PasteSegments({ problems, onPaste }: PasteSegmentsProps) {
-  const [text, setText] = useState("");
+export function PasteSegments({ text, problems, onText, onAdd }: PasteSegmentsProps) {
   return (
     <details className="mt-3" open={problems.length > 0 ? true : undefined}>
       <summary className="cursor-pointer text-deep">Paste segments from a spreadsheet</summary>
@@ -24,15 +23,10 @@ export function PasteSegments({ problems, onPaste }: PasteSegmentsProps) {
           spellCheck={false}
           className="font-mono"
           value={text}
-          onChange={(event) => setText(event.target.value)}
+          onChange={(event) => onText(event.target.value)}
           error={problems.length > 0 ? problems.join(" ") : undefined}
         />
-        <Button
-          look="quiet"
-          onClick={() => {
-            if (onPaste(text)) setText("");
-          }}
-        >
+        <Button look="quiet" onClick={onAdd}>
           Add these rows
         </Button>
       </div>

@@ -89,7 +89,7 @@ export function SegmentRow(props: SegmentRowProps) {
               aria-describedby={describedBy}
               autoComplete="off"
               inputMode={cell.isFrequency ? "text" : "decimal"}
-              className={`${CONTROL} min-w-24 text-right font-mono`}
+              className={`${CONTROL} min-w-20 text-right font-mono`}
               value={segment[cell.key]}
               onChange={(event) => props.onPatch({ [cell.key]: event.target.value })}
               onBlur={() => leave(cell)}

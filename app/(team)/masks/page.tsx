@@ -22,6 +22,7 @@ export default async function MasksPage(props: { searchParams: Promise<SearchPar
   const open = all.filter((mask) => !mask.archived);
   const archived = all.length - open.length;
   const unsure = open.filter((mask) => mask.provenance === "from memory").length;
+  const isFiltered = masksHref({ ...filter, archived: false }) !== "/masks";
   const shown = filterMasks(all, filter);
   return (
     <>
@@ -68,10 +69,12 @@ export default async function MasksPage(props: { searchParams: Promise<SearchPar
             }`
           ) : (
             <>
-              No mask matches.{" "}
-              <Link href="/masks" className="text-deep underline">
-                Clear the filters
-              </Link>
+              {isFiltered ? "No mask matches. " : "Every mask is archived."}
+              {isFiltered ? (
+                <Link href="/masks" className="text-deep underline">
+                  Clear the filters
+                </Link>
+              ) : null}
             </>
           )}
         </EmptyState>

@@ -3,7 +3,7 @@ import { validateSignalPath } from "@/lib/core/bench/validate-signal-path";
 import { parseFactorTable } from "@/lib/formats/parse-factor-table";
 import type { FieldErrors } from "../result";
 import { CommandError } from "../result";
-import type { ReviseSignalPathValues } from "./schemas";
+import { MAX_FACTOR_ROWS, TOO_MANY_ROWS, type ReviseSignalPathValues } from "./schemas";
 import { tableMessage } from "./table-message";
 
 /** The path as it is stored, or one message per field; a table's stand at "transducers.n.factors". */
@@ -12,8 +12,9 @@ export function readSignalPath(values: ReviseSignalPathValues): SignalPath {
   const transducers = values.transducers.map(({ table, factors, ...rest }, i): Transducer => {
     if (table === undefined) return { ...rest, factors: factors ?? [] };
     const read = parseFactorTable(table.text, table.frequencyUnitHz ?? undefined);
-    if (read.ok) return { ...rest, factors: read.factors };
-    fieldErrors[`transducers.${i}.factors`] = tableMessage(read.problems);
+    if (read.ok && read.factors.length <= MAX_FACTOR_ROWS)
+      return { ...rest, factors: read.factors };
+    fieldErrors[`transducers.${i}.factors`] = read.ok ? TOO_MANY_ROWS : tableMessage(read.problems);
     return { ...rest, factors: [] };
   });
   const path: SignalPath = { version: 1, impedanceOhm: values.impedanceOhm, transducers };

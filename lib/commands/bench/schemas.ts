@@ -34,7 +34,8 @@ export const editBenchSchema = z.object({ benchId, ...benchFields });
 export const benchIdSchema = z.object({ benchId });
 
 const MAX_TABLE_TEXT = 500_000;
-const MAX_FACTOR_ROWS = 10_000;
+export const MAX_FACTOR_ROWS = 10_000;
+export const TOO_MANY_ROWS = "A factor table holds at most 10,000 rows.";
 
 /** Text of a factor table as typed, pasted or read from a file, with the unit its header lacks. */
 export const factorTableSchema = z.object({
@@ -51,7 +52,7 @@ const transducerSchema = z
     dueOn: z.string().max(40).nullable(),
     factors: z
       .array(z.object({ frequencyHz: z.number(), factorDb: z.number() }))
-      .max(MAX_FACTOR_ROWS, "A factor table holds at most 10,000 rows.")
+      .max(MAX_FACTOR_ROWS, TOO_MANY_ROWS)
       .optional(),
     table: factorTableSchema.optional(),
   })

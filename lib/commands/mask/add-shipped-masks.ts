@@ -3,6 +3,7 @@ import { and, asc, desc, eq, inArray } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { maskRevisions, masks } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
+import { completeReadings } from "../sweep/complete-readings";
 
 /**
  * Brings a team's shipped masks up to date: adds those it lacks as revision 1, and a revision to
@@ -47,5 +48,9 @@ export async function addShippedMasks(
     if (before && isDeepStrictEqual(before.content, content)) return [];
     return [{ teamId, maskId: row.id, revision: (before?.revision ?? 0) + 1, content }];
   });
-  if (fresh.length > 0) await tx.insert(maskRevisions).values(fresh);
+  if (fresh.length === 0) return;
+  await tx.insert(maskRevisions).values(fresh);
+  for (const { maskId, revision } of fresh) {
+    if (revision > 1) await completeReadings(tx, teamId, { maskId });
+  }
 }

@@ -3,6 +3,7 @@ import { maskRevisions } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { completeReadings } from "../sweep/complete-readings";
 import { lockMask } from "./lock-mask";
 import { readMaskInput } from "./read-mask-input";
 import { reviseMaskSchema } from "./schemas";
@@ -45,6 +46,7 @@ export async function reviseMask(
       .returning({ id: maskRevisions.id });
     if (!row) throw new Error("The mask was not stored.");
     const maskRevisionId = row.id;
+    await completeReadings(tx, ctx.teamId, { maskId });
     await audit({
       action: "mask.revise",
       subjectType: "mask",

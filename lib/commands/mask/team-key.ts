@@ -5,6 +5,7 @@ export const TEAM_KEY_PREFIX = "team-";
 export function teamKey(title: string): string {
   const plain = title
     .normalize("NFKD")
+    .replace(/\p{M}/gu, "")
     .toLowerCase()
     .replace(/[^a-z0-9]+/g, "-")
     .slice(0, 60)

@@ -96,6 +96,11 @@ describe("reviseSignalPath", () => {
 
   test.each([
     ["no unit stated", [tabled("30\t18.5\n1000\t24.1", null)], "transducers.0.factors"],
+    [
+      "more rows than a certificate has",
+      [tabled(Array.from({ length: 10_001 }, (_, i) => `${i + 1}\t1`).join("\n"))],
+      "transducers.0.factors",
+    ],
     ["no kind", [{ ...ANTENNA, kind: "" }], "transducers.0.kind"],
     ["two of one name", [ANTENNA, ANTENNA], "transducers.1.name"],
     ["a due date before", [{ ...ANTENNA, dueOn: "2025-01-01" }], "transducers.0.dueOn"],

@@ -44,7 +44,7 @@ export function MemberRow({ member, isSelf, actions }: MemberRowProps) {
   }
 
   return (
-    <tr className="border-b border-rule align-top last:border-0">
+    <tr className="border-b border-rule last:border-0">
       <td className="px-4 py-3">
         {name}
         {isSelf ? <span className="text-ink-soft"> (you)</span> : null}

@@ -3,6 +3,7 @@ import { masks, programMasks } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { completeReadings } from "../sweep/complete-readings";
 import { lockOpenProgram } from "./find-open";
 import { setProgramMasksSchema } from "./schemas";
 
@@ -38,7 +39,14 @@ export async function setProgramMasks(
       eq(programMasks.teamId, ctx.teamId),
       eq(programMasks.programId, programId),
     );
-    const held = await tx.select({ id: programMasks.maskId }).from(programMasks).where(ofProgram);
+    const held = await tx
+      .select({ id: masks.id, key: masks.key })
+      .from(programMasks)
+      .innerJoin(
+        masks,
+        and(eq(masks.teamId, programMasks.teamId), eq(masks.id, programMasks.maskId)),
+      )
+      .where(ofProgram);
     const before = held.map((row) => row.id);
     const added = wanted.filter((id) => !before.includes(id));
     const removed = before.filter((id) => !wanted.includes(id));
@@ -49,13 +57,18 @@ export async function setProgramMasks(
       await tx
         .insert(programMasks)
         .values(added.map((maskId) => ({ teamId: ctx.teamId, programId, maskId })));
-      // Sweeps that the program has already are to be held against `added` here, in `tx`.
+      await completeReadings(tx, ctx.teamId, { programId });
     }
+    const keys = new Map([...held, ...found].map((mask) => [mask.id, mask.key]));
     await audit({
       action: "program.set-masks",
       subjectType: "program",
       subjectId: programId,
-      detail: { added, removed },
+      // By key, so that the trail can be read without looking up ids.
+      detail: {
+        added: added.map((id) => keys.get(id)),
+        removed: removed.map((id) => keys.get(id)),
+      },
     });
     return { added, removed };
   });

@@ -38,6 +38,15 @@ describe("setProgramMasks", () => {
     expect(await chosen(ctx, programId)).toEqual([]);
     const row = { actor_id: ctx.userId, action: "program.set-masks", subject_id: programId };
     expect((await auditRows(database, ctx.teamId)).slice(-3)).toEqual([row, row, row]);
+    const details = await database.owner.query(
+      "select detail from audit_events where subject_id = $1 and action = 'program.set-masks' order by at",
+      [programId],
+    );
+    expect(details.rows.map((event) => event.detail)).toEqual([
+      { added: ["a"], removed: [] },
+      { added: ["b"], removed: ["a"] },
+      { added: [], removed: ["b"] },
+    ]);
   });
 
   test("refuses a liaison", async () => {

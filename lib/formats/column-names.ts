@@ -26,7 +26,7 @@ const FREQUENCY_WORD =
 /** Ways a line of names may be cut into as many cells as the table has columns. */
 function cutNames(line: string, delimiter: string, count: number): string[] | null {
   const cuts = [splitRow(line, delimiter)];
-  if (delimiter === WHITESPACE) {
+  if (delimiter === WHITESPACE && line.length < 4000) {
     cuts.unshift(line.split(/\s{2,}|\t+/).map((cell) => cell.trim()));
     cuts.push([...line.matchAll(/[^\s[(]\S*(?:\s*[[(][^\])]*[\])])?/g)].map((match) => match[0]));
   }

@@ -1,6 +1,7 @@
 import { describeColumns, type ColumnInfo } from "./describe-columns";
 import { detectDecimal } from "./detect-decimal";
 import { isGap, isNumeric, type DecimalMark } from "./parse-number";
+import { Refusal } from "./refusal";
 import { readRows, type TableRows, type TableShape } from "./read-rows";
 import { splitRow, trimCells, WHITESPACE } from "./split-row";
 import { isComment, lineEnd, nextLine, withoutComment } from "./text-lines";
@@ -28,6 +29,7 @@ const DELIMITERS = ["\t", ";", "^", "|", ",", WHITESPACE];
 const PROBE_ROWS = 200;
 /** A file without a table is not searched for ever. */
 const MAX_HEADER_LINES = 20_000;
+const MAX_TABLES = 2_000;
 /** Text that may stand in a row of data: a label, a unit, a date or a time. */
 const ROW_TEXT = /^(?:[\p{L}\u00b5<(["']|\d{1,4}[-/.:]\d)/u;
 
@@ -195,6 +197,11 @@ export function findTables(text: string, decimalAnswer?: DecimalMark): TextParts
       const table = readTable(text, position, header, line, delimiter, decimalAnswer);
       if (table.rows.rows > 0) {
         tables.push(table);
+        if (tables.length > MAX_TABLES)
+          throw new Refusal(
+            `The file falls into more than ${MAX_TABLES} small tables, up to line ${line}. Export one sweep per file.`,
+            line,
+          );
         header = [];
         position = table.rows.endPosition;
         line = table.rows.lastLine + 1;

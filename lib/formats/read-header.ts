@@ -16,6 +16,9 @@ export type HeaderFacts = Map<HeaderKey, HeaderEntry[]>;
 const OTHER_SECTION =
   /marker|limit|mask|correction|transducer|gate|trigger|\bgps\b|gnss|channel power/i;
 
+/** Longer lines are data of some kind, no settings. */
+const MAX_LINE = 4000;
+
 function cellsOf(text: string, delimiter: string): string[] {
   const own = delimiter === WHITESPACE ? [text] : splitRow(text, delimiter);
   if (own.length > 1) return own;
@@ -59,6 +62,7 @@ export function readHeader(
   const facts: HeaderFacts = new Map();
   let isOther = false;
   for (const { line, text } of lines) {
+    if (text.length > MAX_LINE) continue;
     const section = /^\s*(?:\[([^\]]+)\]|#\s*(?:begin|end)\s+(.*))\s*$/i.exec(
       trimCells(text.split(/[,;\t]/)).join(" "),
     );

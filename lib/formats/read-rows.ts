@@ -133,8 +133,8 @@ function nextRow(text: string, from: number, shape: TableShape): number[] | null
 
 /** Reads the table that starts at `from`, which is line `line`, until something else follows. */
 export function readRows(text: string, from: number, line: number, shape: TableShape): TableRows {
-  const firstEnd = nextLine(text, lineEnd(text, from));
-  let room = Math.ceil(((text.length - from) / Math.max(2, firstEnd - from)) * 1.1) + 16;
+  // Small tables are many in some files, so room grows with the rows.
+  let room = 1024;
   const table: TableRows = {
     values: shape.columns.map((column) =>
       column.kind === "number" ? new Float64Array(room) : null,
@@ -165,7 +165,10 @@ export function readRows(text: string, from: number, line: number, shape: TableS
       else {
         const next = nextRow(text, following, shape);
         const isInside =
-          next !== null && goesOn(table, next[shape.frequencyColumn] ?? NaN, shape.frequencyColumn);
+          next !== null &&
+          // Without frequencies nothing tells a row of another shape from the next table's title.
+          (isPause || cells !== null || shape.frequencyColumn >= 0) &&
+          goesOn(table, next[shape.frequencyColumn] ?? NaN, shape.frequencyColumn);
         if (!isPause)
           table.problem ??= rowProblem(content, cells, problem, isInside, shape, current, table);
         // A bad row inside is passed over, so that the table keeps its length and can be refused.

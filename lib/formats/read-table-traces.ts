@@ -68,6 +68,21 @@ function toLevels(
   return { unit: isLinear(unit) ? fromLinear(1, unit).unit : unit, levelsDb, lost };
 }
 
+/**
+ * Without names, twice as many columns as the header names traces may be levels and phases by
+ * turns: every second one stays within half a turn either way and reaches beyond a right angle.
+ */
+function phaseColumns(table: FoundTable, levels: number[], traceCount: number): number[] {
+  const isNamed = levels.some((i) => table.columns[i]?.name !== null);
+  if (isNamed || traceCount === 0 || levels.length !== 2 * traceCount) return [];
+  const phases = levels.filter((_, place) => place % 2 === 1);
+  const arePhases = phases.every((i) => {
+    const values = table.rows.values[i] ?? new Float64Array(0);
+    return values.every((value) => !(Math.abs(value) > 180)) && highest(values) > 90;
+  });
+  return arePhases ? phases : [];
+}
+
 function countGaps(values: Float64Array): number {
   let gaps = 0;
   for (const value of values) if (Number.isNaN(value)) gaps += 1;
@@ -109,9 +124,12 @@ export function readTableTraces(input: TracesInput): {
   );
   const answerFor = (i: number): TraceAnswer | undefined =>
     answers.traces?.find((answer) => answer.column === i + columnOffset);
-  const levels = numbers.filter(
+  const mayBeLevels = numbers.filter(
     (i) => table.columns[i]?.notLevels === null || answerFor(i)?.use === true,
   );
+  const named = facts.get("traceName")?.length ?? 0;
+  const phases = phaseColumns(table, mayBeLevels, named).filter((i) => answerFor(i)?.use !== true);
+  const levels = mayBeLevels.filter((i) => !phases.includes(i));
   for (const i of numbers) {
     const column = table.columns[i];
     const values = table.rows.values[i];
@@ -123,13 +141,13 @@ export function readTableTraces(input: TracesInput): {
       own?.name,
       column.name,
       stated,
-      Math.max(0, place) + 1 + columnOffset / table.columns.length,
+      Math.max(0, place) + 1 + (columnOffset / table.columns.length) * levels.length,
     );
     const why =
       own?.use === false
         ? "it was not wanted"
         : place < 0
-          ? column.notLevels
+          ? (column.notLevels ?? "it reads like a phase in degrees")
           : own?.use === true
             ? null
             : whyOff(values);

@@ -3,6 +3,7 @@ import type { FileUnit } from "@/lib/core/units/level-units";
 
 /** Pieces of a column's name that may be its unit, the surest first. */
 function unitPieces(name: string): string[] {
+  if (name.length > 200) return [];
   const bracketed = [...name.matchAll(/[[(]\s*([^\])]+?)\s*[\])]/g)].map((match) => match[1] ?? "");
   const pieces = [...bracketed.reverse(), name];
   const slash = name.indexOf("/");

@@ -210,3 +210,16 @@ it("reads a list of final readings, and leaves out what is no level", () => {
 it("reads settings that stand below the table", () => {
   expect(preview("MHz,dBuV\n30,40\n31,41\n\nRBW,120 kHz\n").rbwHz).toBe(120e3);
 });
+
+it("leaves out phases that stand beside levels without a name, unless they are asked for", () => {
+  const header = "#Trace: A\n#Trace: B\n#Start: 0 Hz\n#Stop: 3 kHz\n";
+  const text = `${header}-50,180,-60,12\n-51,-179,-61,170\n-52,4,-62,-90\n-53,95,-63,0\n`;
+  const answers = { ...PEAK, unit: "dB" } as const;
+  expect(traces(text, answers).map(({ name }) => name)).toEqual(["A", "B"]);
+  expect(traces(text, answers).map(levels)).toEqual([
+    [-50, -51, -52, -53],
+    [-60, -61, -62, -63],
+  ]);
+  expect(preview(text, answers).leftOut.map(({ column }) => column)).toEqual([1, 3]);
+  expect(traces(text, { ...answers, traces: [{ column: 1, use: true }] })).toHaveLength(3);
+});

@@ -68,3 +68,8 @@ it("refuses commas that are both delimiter and decimal mark", () => {
   const text = "Frequency (MHz),Level (dBuV)\n30,50,41,25\n31,00,42,75\n31,50,43,00\n";
   expect(refusal(text)[1]).toMatch(/decimal/);
 });
+
+it("refuses a file of endless small tables instead of searching it for ever", () => {
+  const text = Array.from({ length: 2100 }, (_, i) => `Part ${i} of many\n1,2\n2,1\n`).join("");
+  expect(refusal(text)[1]).toContain("small tables");
+});

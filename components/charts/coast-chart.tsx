@@ -12,7 +12,7 @@ import { CoastReadout } from "./coast-readout";
 import type { CoastState, CoastTrace } from "./coast-trace";
 import { CoastWeather } from "./coast-weather";
 import type { AxisScaleKind, FrequencyView } from "./frequency-scale";
-import { OverviewStrip } from "./overview-strip";
+import { OverviewStrip, STRIP_HEIGHT_PX } from "./overview-strip";
 import { prepareCoast, shownView } from "./prepare-coast";
 import { leadTrace, readAt, readoutRows, stepSample } from "./prepare-readout";
 import { useCoastPointer } from "./use-coast-pointer";
@@ -79,7 +79,8 @@ function SizedChart(props: CoastChartProps & { width: number }) {
   const { pointedHz, drag, listenToWheel, onKeyDown, surface } = useCoastPointer({
     ...{ plane, extent, buoys, highlighted, onView, onHighlight, onStep },
   });
-  const ready = state === "ready" && !prepared.empty;
+  // What is drawn can be read and zoomed while more of it is on its way.
+  const ready = state !== "error" && !prepared.empty;
   const readout = ready && pointedHz !== null ? readAt(traces, mask, pointedHz, view, scale) : null;
   // On a narrow screen it stands below, where its rows do not push the chart from under the finger.
   const narrow = width < 640;
@@ -109,7 +110,7 @@ function SizedChart(props: CoastChartProps & { width: number }) {
               width={width}
               height={height}
               className={`absolute inset-0 select-none ${ready ? "cursor-crosshair" : ""}`}
-              {...(ready ? surface : {})}
+              {...(state === "error" ? {} : surface)}
             >
               <rect width={width} height={height} fill="transparent" />
               {ready ? <Buoys buoys={buoys} highlighted={highlighted} /> : null}
@@ -162,7 +163,9 @@ function SizedChart(props: CoastChartProps & { width: number }) {
           left={plane.left}
           right={plane.right}
         />
-      ) : null}
+      ) : (
+        <div style={{ height: STRIP_HEIGHT_PX }} />
+      )}
       {narrow ? reading : null}
       {prepared.notes.map((note) => (
         <p key={note} className="mt-1 text-[0.8rem] text-ink-soft">

@@ -29,6 +29,16 @@ export function CoastWeather(props: {
 }) {
   const { state, nothing, plane } = props;
   if (state === "ready" && !nothing) return null;
+  if (state === "loading" && !nothing)
+    return (
+      <p
+        role="status"
+        className="pointer-events-none absolute border border-rule bg-sheet px-2 text-[0.8rem] text-ink-soft"
+        style={{ top: plane.top + 6, left: plane.left + 6 }}
+      >
+        Reading more of the trace
+      </p>
+    );
   const [title, text] =
     state === "loading"
       ? ["Reading the trace", "Its levels are on their way."]

@@ -12,6 +12,8 @@ import { prepareCoastline } from "./prepare-coastline";
 import { panBy, showsAll } from "./zoom";
 
 const HEIGHT_PX = 40;
+/** The strip with the two frequencies below it. */
+export const STRIP_HEIGHT_PX = HEIGHT_PX + 19;
 
 /** The whole span below the chart, with the part in view between two posts; drag it along. */
 export const OverviewStrip = memo(function OverviewStrip(props: {

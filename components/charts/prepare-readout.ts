@@ -67,7 +67,9 @@ function limitsAt(mask: Mask, hz: number, levelDb: number, trace: CoastTrace): R
         ? "upper bound"
         : basis === "cannot-decide"
           ? "other detector, cannot decide"
-          : null;
+          : detector === null
+            ? "detector not stated"
+            : null;
     return [
       {
         name: line.name,

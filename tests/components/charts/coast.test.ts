@@ -138,6 +138,8 @@ describe("the crosshair", () => {
   it("does not call a looser detector over, and says that it is a bound", () => {
     const [limit] = at(90e6, [trace({ detector: "peak", hold: "none" })])?.limits ?? [];
     expect(limit).toMatchObject({ over: false, caveat: "upper bound" });
+    const [unstated] = at(90e6, [trace({ detector: null, hold: "none" })])?.limits ?? [];
+    expect(unstated).toMatchObject({ over: false, caveat: "detector not stated" });
     const [unknown] = at(90e6, [trace()])?.limits ?? [];
     expect(unknown).toMatchObject({ over: false, margin: "\u22123.2 dB" });
   });

@@ -1,4 +1,5 @@
 import type { FoundTable, HeaderLine, TextParts } from "./find-tables";
+import { headerKeyOf } from "./header-keys";
 import { expandHops } from "./expand-hops";
 import { isNumeric } from "./parse-number";
 import { cellProblem, shapedCells } from "./read-rows";
@@ -43,6 +44,17 @@ function refuseWithoutTable({ footer }: TextParts): never {
   );
 }
 
+/** Settings that stand on the same lines as the data, in columns of their own. */
+function linesBeside(table: FoundTable): HeaderLine[] {
+  const places = table.columns.flatMap((column, i) => (column.isNumber ? [] : [i]));
+  if (places.length < 2) return [];
+  return table.probe.flatMap((cells, i) => {
+    const [name = "", ...values] = places.map((place) => cells[place] ?? "");
+    const text = [name, ...values].join(table.shape.delimiter);
+    return headerKeyOf(name) === null ? [] : [{ line: table.rows.firstLine + i, text }];
+  });
+}
+
 /** A row above the table that would belong to it but for one bad cell must not vanish. */
 function checkRowsAbove({ table, header }: ChosenTable): void {
   const { shape, rows } = table;
@@ -51,8 +63,13 @@ function checkRowsAbove({ table, header }: ChosenTable): void {
     const cells = text.trim() === "" ? null : shapedCells(text, shape);
     if (cells === null || line < rows.firstLine - 3) return;
     if (!isNumeric(cells[shape.frequencyColumn] ?? "")) return;
-    const problem = cellProblem(cells, shape, line);
-    if (problem) throw problem;
+    throw (
+      cellProblem(cells, shape, line) ??
+      new Refusal(
+        `Line ${line} seems to belong to the table below it, but differs from its rows: ${quote(text)}. Correct it or export the trace again.`,
+        line,
+      )
+    );
   }
 }
 
@@ -107,7 +124,7 @@ export function chooseTables(parts: TextParts): { chosen: ChosenTable[]; warning
       table.shape.delimiter === main.shape.delimiter &&
       2 * table.rows.rows >= main.rows.rows;
     if (table === main || isSibling) {
-      chosen.push({ table, header: lines, footer: [] });
+      chosen.push({ table, header: [...lines, ...linesBeside(table)], footer: [] });
       lines = [];
     } else {
       if (table.rows.rows >= 5)

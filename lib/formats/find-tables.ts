@@ -31,11 +31,12 @@ const PROBE_ROWS = 200;
 const MAX_HEADER_LINES = 20_000;
 const MAX_TABLES = 2_000;
 /** Text that may stand in a row of data: a label, a unit, a date or a time. */
-const ROW_TEXT = /^(?:[\p{L}\u00b5<(["']|\d{1,4}[-/.:]\d)/u;
+const ROW_TEXT = /^(?:[\p{L}\u00b5<(["']|\d{1,4}[-/.:]\d|[\d.,]+\s*[\p{L}%\u00b0])/u;
 
-type CellKind = "number" | "text" | "odd";
+type CellKind = "number" | "text" | "empty" | "odd";
 
 function kindOf(cell: string): CellKind {
+  if (cell === "") return "empty";
   if (isNumeric(cell) || isGap(cell)) return "number";
   return ROW_TEXT.test(cell) ? "text" : "odd";
 }
@@ -47,7 +48,9 @@ function sameShape(first: string[], second: string[]): boolean {
     kindOf(a[i] ?? ""),
     kindOf(b[i] ?? ""),
   ]);
-  return !kinds.some(([x, y]) => x !== y || x === "odd");
+  return kinds.every(
+    ([x, y]) => x !== "odd" && y !== "odd" && (x === y || x === "empty" || y === "empty"),
+  );
 }
 
 /** Rows of one shape that share at least two numbers, or are one number each. */

@@ -8,7 +8,6 @@ const GROUPED_DOT =
 const GROUPED_COMMA =
   /^[+-]?[1-9]\d{0,2}(?:([.'\u2019 \u00a0\u2009\u202f])\d{3})(?:\1\d{3})*(?:,\d*)?$/;
 const GAP = /^(?:|[-+]?nan(?:\(.*\))?|-+|\*+|n\/?a|null|none|invalid|[-+]?1\.#(?:qnan|ind)\d*)$/i;
-const INFINITE = /^[-+\u2212]?(?:inf(?:inity)?|\u221e|1\.#inf\d*)$/i;
 
 /** Number written with the given decimal mark; null when the text is none. */
 export function parseNumber(text: string, decimal: DecimalMark): number | null {
@@ -25,10 +24,6 @@ export function parseNumber(text: string, decimal: DecimalMark): number | null {
 /** Text that stands where a level is missing. */
 export function isGap(text: string): boolean {
   return GAP.test(text.trim().replaceAll("\u2212", "-"));
-}
-
-export function isInfinite(text: string): boolean {
-  return INFINITE.test(text.trim());
 }
 
 /** A number under either decimal mark. */

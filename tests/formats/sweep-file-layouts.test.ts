@@ -223,3 +223,13 @@ it("leaves out phases that stand beside levels without a name, unless they are a
   expect(preview(text, answers).leftOut.map(({ column }) => column)).toEqual([1, 3]);
   expect(traces(text, { ...answers, traces: [{ column: 1, use: true }] })).toHaveLength(3);
 });
+
+it("reads settings that stand beside the data on the same lines", () => {
+  const text =
+    "RBW,120 kHz,,30,40\nDetector,Peak,,31,41\ny-Unit,dBuV,,32,42\nx-Unit,MHz,,33,41\n,,,34,40\n,,,35,39\n";
+  const [trace, ...others] = traces(text);
+  expect(others).toEqual([]);
+  expect(hz(trace!)).toEqual([30e6, 31e6, 32e6, 33e6, 34e6, 35e6]);
+  expect(trace).toMatchObject({ unit: "dBuV", detector: "peak" });
+  expect(preview(text).rbwHz).toBe(120e3);
+});

@@ -1,5 +1,7 @@
+import Link from "next/link";
 import type { ReactNode } from "react";
 import { Deferral } from "@/components/shell/deferral";
+import { QueryProvider } from "@/components/shell/query-provider";
 import { MainNavigation } from "@/components/shell/main-navigation";
 import { SignOutButton } from "@/components/shell/sign-out-button";
 import { isAllowed } from "@/lib/auth/context";
@@ -12,6 +14,9 @@ export default async function TeamLayout({ children }: { children: ReactNode }) 
   const items = [
     { href: "/", label: "Overview" },
     { href: "/programs", label: "Programs" },
+    { href: "/reports", label: "Reports" },
+    { href: "/masks", label: "Masks" },
+    { href: "/benches", label: "Benches" },
     ...(isAllowed(ctx, "people.read") ? [{ href: "/team", label: "Team" }] : []),
   ];
   return (
@@ -26,12 +31,15 @@ export default async function TeamLayout({ children }: { children: ReactNode }) 
         <span className="font-title text-2xl text-deep">Neap</span>
         <MainNavigation items={items} />
         <span className="ml-auto text-sm text-ink-soft">
-          {member.name} ({member.role}) · {member.teamName}
+          <Link href="/account" className="text-deep underline">
+            {member.name}
+          </Link>{" "}
+          ({member.role}) · {member.teamName}
         </span>
         <SignOutButton />
       </header>
       <main id="content" className="grow py-8">
-        {children}
+        <QueryProvider>{children}</QueryProvider>
       </main>
       <Deferral />
       <div className="h-6" />

@@ -1,38 +1,43 @@
-import Link from "next/link";
-import type { ComponentProps } from "react";
+import type { ReactNode } from "react";
+import { ButtonLink } from "@/components/ui/button";
+import { EmptyState } from "@/components/ui/empty-state";
+import { PageHead } from "@/components/ui/page-head";
+import type { ProgramLine } from "./program-table";
 import { ProgramTable } from "./program-table";
 
 interface ProgramListProps {
   title: string;
-  lead: string;
-  programs: ComponentProps<typeof ProgramTable>["programs"];
+  lead: ReactNode;
+  programs: ProgramLine[];
+  today: string;
   mayCreate: boolean;
+  actions?: ReactNode;
 }
 
 /** The team's programs, or how to make the first one. */
-export function ProgramList({ title, lead, programs, mayCreate }: ProgramListProps) {
+export function ProgramList(props: ProgramListProps) {
+  const { title, lead, programs, today, mayCreate, actions } = props;
   return (
     <>
-      <div className="mb-6 flex flex-wrap items-baseline gap-4">
-        <div>
-          <h1 className="text-3xl">{title}</h1>
-          <p className="mt-1 text-ink-soft">{lead}</p>
-        </div>
-        {mayCreate ? (
-          <Link href="/programs/new" className="ml-auto text-deep underline">
-            New program
-          </Link>
-        ) : null}
-      </div>
+      <PageHead
+        title={title}
+        lead={lead}
+        actions={
+          <>
+            {actions}
+            {mayCreate ? <ButtonLink href="/programs/new">New program</ButtonLink> : null}
+          </>
+        }
+      />
       {programs.length > 0 ? (
-        <ProgramTable programs={programs} />
+        <ProgramTable programs={programs} today={today} />
       ) : (
-        <p className="border border-dashed border-rule p-8 text-ink-soft">
+        <EmptyState>
           No programs yet.{" "}
           {mayCreate
             ? "Make the first one: a product under development with its target margin."
             : "An engineer or a manager of your team makes them."}
-        </p>
+        </EmptyState>
       )}
     </>
   );

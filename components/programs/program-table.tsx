@@ -1,52 +1,112 @@
 import Link from "next/link";
+import { StandingMark } from "@/components/readings/standing-mark";
+import type { Standing } from "@/lib/core/reading/reading";
+import { formatMargin } from "@/lib/core/units/format";
+import { TrendThumb } from "./trend-thumb";
 
-interface ProgramLine {
+export interface ProgramLine {
   id: string;
   name: string;
   description: string;
   targetMarginDb: number;
   builds: number;
+  now: {
+    marginDb: number | null;
+    standing: Standing;
+    maskTitle: string;
+    buildName: string;
+    sweepId: string;
+  } | null;
+  trend: { buildName: string; marginDb: number; standing: Standing }[];
+  nextMilestone: { name: string; dueOn: string; requiredMarginDb: number | null } | null;
 }
 
-const signed = new Intl.NumberFormat("en", {
-  minimumFractionDigits: 1,
-  maximumFractionDigits: 1,
-  signDisplay: "exceptZero",
-});
+const day = (iso: string) => Date.parse(`${iso}T00:00:00Z`) / 86_400_000;
 
-/** A target as it is shown everywhere: signed, one decimal, with its unit. */
-export function formatTarget(targetDb: number): string {
-  return `${signed.format(targetDb).replace("-", "−")} dB`;
+/** "in 12 days"; the date itself stands in the title. */
+function untilText(dueOn: string, today: string): string {
+  const days = day(dueOn) - day(today);
+  if (days === 0) return "today";
+  return days === 1
+    ? "in 1 day"
+    : days < 21
+      ? `in ${days} days`
+      : `in ${Math.round(days / 7)} weeks`;
 }
 
-export function ProgramTable({ programs }: { programs: ProgramLine[] }) {
+/** What a program still lacks of its target, in words. */
+function againstTarget({ now, targetMarginDb }: ProgramLine): string {
+  if (!now || now.marginDb === null) return `target ${formatMargin(targetMarginDb)}`;
+  const lacking = targetMarginDb - now.marginDb;
+  return lacking > 0
+    ? `${lacking.toFixed(1)} dB short of ${formatMargin(targetMarginDb)}`
+    : `target ${formatMargin(targetMarginDb)} met`;
+}
+
+/** One program a row: where it stands, how that moved, what is due next. */
+export function ProgramTable({ programs, today }: { programs: ProgramLine[]; today: string }) {
   return (
-    <div className="overflow-x-auto border border-rule bg-sheet">
-      <table className="w-full text-left">
-        <thead className="text-sm text-ink-soft">
-          <tr className="border-b border-rule">
-            <th className="px-4 py-2 font-medium">Program</th>
-            <th className="px-4 py-2 text-right font-medium">Target margin</th>
-            <th className="px-4 py-2 text-right font-medium">Builds</th>
-          </tr>
-        </thead>
-        <tbody>
-          {programs.map((program) => (
-            <tr key={program.id} className="border-b border-rule last:border-0">
-              <td className="px-4 py-3">
-                <Link href={`/programs/${program.id}`} className="font-medium text-deep underline">
-                  {program.name}
-                </Link>
-                <span className="block text-sm text-ink-soft">{program.description}</span>
-              </td>
-              <td className="px-4 py-3 text-right font-mono whitespace-nowrap">
-                {formatTarget(program.targetMarginDb)}
-              </td>
-              <td className="px-4 py-3 text-right font-mono">{program.builds}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
-    </div>
+    <ul className="space-y-4">
+      {programs.map((program) => (
+        <li
+          key={program.id}
+          className="grid gap-x-8 gap-y-4 border border-rule bg-sheet p-5 md:grid-cols-[minmax(0,1.1fr)_minmax(0,1.2fr)_minmax(0,1fr)]"
+        >
+          <div>
+            <h2 className="text-xl">
+              <Link href={`/programs/${program.id}`} className="text-deep underline">
+                {program.name}
+              </Link>
+            </h2>
+            <p className="text-sm text-ink-soft">{program.description}</p>
+            {program.nextMilestone ? (
+              <p className="mt-3 text-sm" title={program.nextMilestone.dueOn}>
+                {program.nextMilestone.name} {untilText(program.nextMilestone.dueOn, today)}
+                {program.nextMilestone.requiredMarginDb === null ? null : (
+                  <>
+                    , asks{" "}
+                    <span className="font-mono">
+                      {formatMargin(program.nextMilestone.requiredMarginDb)}
+                    </span>
+                  </>
+                )}
+              </p>
+            ) : (
+              <p className="mt-3 text-sm text-ink-soft">No milestone ahead</p>
+            )}
+          </div>
+          <div>
+            {program.now ? (
+              <>
+                <p className="flex flex-wrap items-baseline gap-x-3">
+                  <Link
+                    href={`/sweeps/${program.now.sweepId}`}
+                    className="font-mono text-3xl tracking-tight whitespace-nowrap no-underline hover:underline"
+                  >
+                    {formatMargin(program.now.marginDb)}
+                  </Link>
+                  <StandingMark standing={program.now.standing} />
+                </p>
+                <p className="mt-1 text-sm text-ink-soft">
+                  {program.now.buildName} under {program.now.maskTitle}
+                </p>
+                <p className="text-sm">{againstTarget(program)}</p>
+              </>
+            ) : (
+              <>
+                <p className="text-xl text-ink-soft">no reading yet</p>
+                <p className="mt-1 text-sm text-ink-soft">
+                  {program.builds === 0
+                    ? "It has no build yet."
+                    : "No sweep is on the line of record."}
+                </p>
+                <p className="text-sm">{againstTarget(program)}</p>
+              </>
+            )}
+          </div>
+          <TrendThumb points={program.trend} targetDb={program.targetMarginDb} />
+        </li>
+      ))}
+    </ul>
   );
 }

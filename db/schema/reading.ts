@@ -31,7 +31,7 @@ export const readings = pgTable(
     maskRevisionId: uuid("mask_revision_id").notNull(),
     engineVersion: integer("engine_version").notNull(),
     standing: text("standing", { enum: STANDINGS }).notNull(),
-    /** Of the line that gives the standing. */
+    /** Of the line that the reading is known by; null when the sweep does not reach the mask. */
     marginDb: doublePrecision("margin_db"),
     marginAtHz: doublePrecision("margin_at_hz"),
     lineName: text("line_name"),

@@ -2,6 +2,7 @@ import { sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { applySignalPath } from "@/lib/core/bench/apply-signal-path";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
+import { decidingPoint } from "@/lib/core/reading/deciding-point";
 import type { Standing } from "@/lib/core/reading/reading";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
@@ -49,7 +50,7 @@ export interface ImportedSweep {
   sweepId: string;
   name: string;
   /** One for each mask of the program that the sweep can be held against. */
-  readings: { maskTitle: string; standing: Standing; marginDb: number | null }[];
+  readings: { maskTitle: string; standing: Standing; marginDb: number }[];
 }
 
 /**
@@ -104,13 +105,13 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
       };
       for (const mask of await listProgramMasks(tx, teamId, programId)) {
         const reading = await storeReading(tx, sweep, mask);
-        if (reading.notComparable !== null) continue;
-        const worst =
-          reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];
+        // A mask that the sweep does not reach says nothing about it.
+        const deciding = decidingPoint(reading);
+        if (!deciding) continue;
         readings.push({
           maskTitle: mask.content.title,
           standing: reading.standing,
-          marginDb: worst?.worst?.marginDb ?? null,
+          marginDb: deciding.point.marginDb,
         });
       }
     }

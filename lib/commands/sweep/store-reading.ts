@@ -1,6 +1,7 @@
 import type { Transaction } from "@/db/client";
 import { readings, suspects } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
+import { decidingPoint } from "@/lib/core/reading/deciding-point";
 import type { Reading } from "@/lib/core/reading/reading";
 import { readSweep } from "@/lib/core/reading/read-sweep";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
@@ -35,7 +36,7 @@ export async function storeReading(
     context: { overdueTransducers },
   });
   const { suspects: found, ...content } = reading;
-  const worst = reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];
+  const deciding = decidingPoint(reading);
   const [row] = await tx
     .insert(readings)
     .values({
@@ -45,9 +46,9 @@ export async function storeReading(
       maskRevisionId: mask.revisionId,
       engineVersion: reading.engineVersion,
       standing: reading.standing,
-      marginDb: worst?.worst?.marginDb ?? null,
-      marginAtHz: worst?.worst?.frequencyHz ?? null,
-      lineName: worst?.name ?? null,
+      marginDb: deciding?.point.marginDb ?? null,
+      marginAtHz: deciding?.point.frequencyHz ?? null,
+      lineName: deciding?.line.name ?? null,
       coverage: reading.coverage.fraction,
       notComparable: reading.notComparable,
       content,

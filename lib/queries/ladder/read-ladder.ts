@@ -1,6 +1,7 @@
 import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import { inTeam } from "@/db/client";
-import { builds, ladders, ladderSteps, programs, sweeps } from "@/db/schema";
+import type { Transaction } from "@/db/client";
+import { builds, ladders, ladderSteps, maskRevisions, programs, sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
 import type { ComparedSweep } from "@/lib/core/delta/compared-sweep";
@@ -97,8 +98,26 @@ export async function readLadder(ctx: Context, ladderId: string) {
         againstStart: deltas[i]?.againstStart ?? [],
       };
     });
-    return { ...ladder, steps };
+    return { ...ladder, steps, mask: await drawnMask(tx, ctx.teamId, compared) };
   });
+}
+
+/** The mask that the overlay draws: the one under which most of the sweeps have a margin. */
+async function drawnMask(tx: Transaction, teamId: string, compared: ComparedSweep[]) {
+  const counts = new Map<string, number>();
+  for (const sweep of compared) {
+    for (const { maskRevisionId, lines } of sweep.readings) {
+      if (lines.some((line) => line.marginDb !== null))
+        counts.set(maskRevisionId, (counts.get(maskRevisionId) ?? 0) + 1);
+    }
+  }
+  const [most] = [...counts].sort((a, b) => b[1] - a[1]);
+  if (!most) return null;
+  const [row] = await tx
+    .select({ content: maskRevisions.content })
+    .from(maskRevisions)
+    .where(and(eq(maskRevisions.teamId, teamId), eq(maskRevisions.id, most[0])));
+  return row?.content ?? null;
 }
 
 export type LadderDetail = NonNullable<Awaited<ReturnType<typeof readLadder>>>;

@@ -1,8 +1,12 @@
-import { and, asc, count, eq, isNull } from "drizzle-orm";
+import { and, asc, eq, isNull } from "drizzle-orm";
 import { inTeam } from "@/db/client";
-import { builds, programs } from "@/db/schema";
+import { milestones, programs } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
+import type { Standing } from "@/lib/core/reading/reading";
+import { worstOf } from "../sweep/worst-of";
+import type { BuildStanding } from "./load-standings";
+import { loadProgramTrends, newestStanding } from "./load-standings";
 
 export interface ProgramRow {
   id: string;
@@ -10,24 +14,70 @@ export interface ProgramRow {
   description: string;
   targetMarginDb: number;
   builds: number;
+  /** Of the newest build that has sweeps on record; null without one. */
+  now: (BuildStanding & { buildId: string; buildName: string }) | null;
+  /** Worst margin of each build that has one, oldest first. */
+  trend: { buildName: string; marginDb: number; standing: Standing }[];
+  /** The next one due on the given day or later. */
+  nextMilestone: { name: string; dueOn: string; requiredMarginDb: number | null } | null;
 }
 
-/** Programs of the team that are not archived, by name. */
-export async function listPrograms(ctx: Context): Promise<ProgramRow[]> {
+/** How much room a program lacks against what it aims at: the riskiest has the least. */
+function room(program: ProgramRow): number {
+  const needed = Math.max(
+    program.targetMarginDb,
+    program.nextMilestone?.requiredMarginDb ?? Number.NEGATIVE_INFINITY,
+  );
+  // Not knowing where a program stands is a risk of its own: after those over, before the rest.
+  if (!program.now) return 0;
+  return (program.now.marginDb ?? 0) - needed;
+}
+
+/** Programs of the team that are not archived, the riskiest first. `today` is an ISO date. */
+export async function listPrograms(ctx: Context, today: string): Promise<ProgramRow[]> {
   requirePermission(ctx, "program.read");
-  return inTeam(ctx.db, ctx.teamId, (tx) =>
-    tx
+  const { teamId } = ctx;
+  const rows = await inTeam(ctx.db, teamId, async (tx) => {
+    const found = await tx
       .select({
         id: programs.id,
         name: programs.name,
         description: programs.description,
         targetMarginDb: programs.targetMarginDb,
-        builds: count(builds.id),
       })
       .from(programs)
-      .leftJoin(builds, and(eq(builds.teamId, programs.teamId), eq(builds.programId, programs.id)))
-      .where(and(eq(programs.teamId, ctx.teamId), isNull(programs.archivedAt)))
-      .groupBy(programs.teamId, programs.id)
-      .orderBy(asc(programs.name)),
-  );
+      .where(and(eq(programs.teamId, teamId), isNull(programs.archivedAt)))
+      .orderBy(asc(programs.name));
+    const due = await tx
+      .select()
+      .from(milestones)
+      .where(eq(milestones.teamId, teamId))
+      .orderBy(asc(milestones.dueOn), asc(milestones.name));
+    const trends = await loadProgramTrends(
+      tx,
+      teamId,
+      found.map((program) => program.id),
+    );
+    return found.map((program, i): ProgramRow => {
+      const trend = trends[i] ?? { programId: program.id, masks: [], builds: [] };
+      const newest = newestStanding(trend);
+      const next = due.find((m) => m.programId === program.id && m.dueOn >= today);
+      return {
+        ...program,
+        builds: trend.builds.length,
+        now: newest
+          ? { ...newest.worst, buildId: newest.build.id, buildName: newest.build.name }
+          : null,
+        trend: trend.builds.flatMap((build) => {
+          const worst = worstOf(build.standings);
+          if (!worst || worst.marginDb === null) return [];
+          return [{ buildName: build.name, marginDb: worst.marginDb, standing: worst.standing }];
+        }),
+        nextMilestone: next
+          ? { name: next.name, dueOn: next.dueOn, requiredMarginDb: next.requiredMarginDb }
+          : null,
+      };
+    });
+  });
+  return rows.sort((a, b) => room(a) - room(b) || a.name.localeCompare(b.name, "en"));
 }

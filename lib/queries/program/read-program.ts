@@ -1,22 +1,15 @@
 import { and, asc, eq } from "drizzle-orm";
 import { inTeam } from "@/db/client";
-import { builds, programs } from "@/db/schema";
+import { milestones, programs } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
+import { isId } from "../is-id";
+import { loadProgramTrends } from "./load-standings";
 
-export interface ProgramDetail {
-  id: string;
-  name: string;
-  description: string;
-  targetMarginDb: number;
-  archivedAt: Date | null;
-  builds: { id: string; name: string; sequence: number; builtOn: string | null; notes: string }[];
-}
-
-/** One program with its builds in their order; null when the team has none of this id. */
-export async function readProgram(ctx: Context, programId: string): Promise<ProgramDetail | null> {
+/** One program with its milestones and where its builds stand; null when there is none. */
+export async function readProgram(ctx: Context, programId: string) {
   requirePermission(ctx, "program.read");
-  if (!/^[0-9a-f-]{36}$/i.test(programId)) return null;
+  if (!isId(programId)) return null;
   return inTeam(ctx.db, ctx.teamId, async (tx) => {
     const [program] = await tx
       .select({
@@ -29,17 +22,20 @@ export async function readProgram(ctx: Context, programId: string): Promise<Prog
       .from(programs)
       .where(and(eq(programs.teamId, ctx.teamId), eq(programs.id, programId)));
     if (!program) return null;
-    const rows = await tx
+    const due = await tx
       .select({
-        id: builds.id,
-        name: builds.name,
-        sequence: builds.sequence,
-        builtOn: builds.builtOn,
-        notes: builds.notes,
+        id: milestones.id,
+        name: milestones.name,
+        dueOn: milestones.dueOn,
+        requiredMarginDb: milestones.requiredMarginDb,
       })
-      .from(builds)
-      .where(and(eq(builds.teamId, ctx.teamId), eq(builds.programId, programId)))
-      .orderBy(asc(builds.sequence));
-    return { ...program, builds: rows };
+      .from(milestones)
+      .where(and(eq(milestones.teamId, ctx.teamId), eq(milestones.programId, programId)))
+      .orderBy(asc(milestones.dueOn));
+    const [trend] = await loadProgramTrends(tx, ctx.teamId, [programId]);
+    if (!trend) throw new Error("A program was read without its trend.");
+    return { ...program, milestones: due, trend };
   });
 }
+
+export type ProgramDetail = NonNullable<Awaited<ReturnType<typeof readProgram>>>;

@@ -1,5 +1,5 @@
 import type { SQL } from "drizzle-orm";
-import { and, asc, eq, isNull, sql } from "drizzle-orm";
+import { and, asc, eq, isNotNull, isNull, sql } from "drizzle-orm";
 import { inTeam } from "@/db/client";
 import { benches, ladders, ladderSteps, readings, sweeps, traces } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
@@ -80,7 +80,7 @@ async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
       .where(
         and(
           eq(readings.teamId, ctx.teamId),
-          isNull(readings.notComparable),
+          isNotNull(readings.marginDb),
           isNewestRevision(),
           scope,
         ),

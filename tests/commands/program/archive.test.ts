@@ -106,7 +106,7 @@ describe("an archived program", () => {
     const ctx = await makeMember(database, "engineer");
     const ids = await makeProgram(ctx);
     await archiveProgram(ctx, ids);
-    expect(await listPrograms(ctx)).toEqual([]);
+    expect(await listPrograms(ctx, "2026-12-01")).toEqual([]);
     const edit = editBuild(ctx, { buildId: ids.buildId, name: "P9", builtOn: null, notes: "" });
     await expect(edit).rejects.toMatchObject({ code: "not-found" });
     await expect(archiveBuild(ctx, ids)).rejects.toMatchObject({ code: "not-found" });

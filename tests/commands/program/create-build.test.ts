@@ -35,8 +35,12 @@ describe("createBuild", () => {
       createBuild(ctx, build(programId, "P3")),
     ]);
     const program = await readProgram(ctx, programId);
-    expect(program?.builds.map((b) => b.sequence)).toEqual([1, 2, 3]);
-    expect(program?.builds.map((b) => b.name).sort()).toEqual(["P1", "P2", "P3"]);
+    const numbered = await database.owner.query(
+      "select sequence from builds where program_id = $1 order by sequence",
+      [programId],
+    );
+    expect(numbered.rows.map((row) => row.sequence)).toEqual([1, 2, 3]);
+    expect(program?.trend.builds.map((b) => b.name).sort()).toEqual(["P1", "P2", "P3"]);
     const actions = (await auditRows(database, ctx.teamId)).map((row) => row.action);
     expect(actions.filter((action) => action === "build.create")).toHaveLength(3);
   });
@@ -48,7 +52,7 @@ describe("createBuild", () => {
     await expect(createBuild(liaison, build(programId, "P1"))).rejects.toMatchObject({
       code: "denied",
     });
-    expect((await readProgram(liaison, programId))?.builds).toEqual([]);
+    expect((await readProgram(liaison, programId))?.trend.builds).toEqual([]);
   });
 
   test("does not find another team's program", async () => {
@@ -59,7 +63,7 @@ describe("createBuild", () => {
       code: "not-found",
     });
     expect(await readProgram(theirs, programId)).toBeNull();
-    expect((await readProgram(ours, programId))?.builds).toEqual([]);
+    expect((await readProgram(ours, programId))?.trend.builds).toEqual([]);
   });
 
   test("leaves nothing behind when the audit row cannot be written", async () => {
@@ -68,7 +72,7 @@ describe("createBuild", () => {
     await withoutAudit(database, async () => {
       await expect(createBuild(ctx, build(programId, "P1"))).rejects.toThrow();
     });
-    expect((await readProgram(ctx, programId))?.builds).toEqual([]);
+    expect((await readProgram(ctx, programId))?.trend.builds).toEqual([]);
   });
 
   test("refuses a name that is taken and a date that does not exist", async () => {
@@ -84,6 +88,6 @@ describe("createBuild", () => {
       code: "invalid",
       fieldErrors: { builtOn: expect.stringContaining("year-month-day") },
     });
-    expect((await readProgram(ctx, programId))?.builds).toHaveLength(1);
+    expect((await readProgram(ctx, programId))?.trend.builds).toHaveLength(1);
   });
 });

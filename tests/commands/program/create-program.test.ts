@@ -17,9 +17,16 @@ describe("createProgram", () => {
   test("stores the program and one audit row naming who did it", async () => {
     const ctx = await makeMember(database, "manager");
     const { programId } = await createProgram(ctx, INPUT);
-    const [row, ...rest] = await listPrograms(ctx);
+    const [row, ...rest] = await listPrograms(ctx, "2026-12-01");
     expect(rest).toEqual([]);
-    expect(row).toEqual({ id: programId, builds: 0, ...INPUT });
+    expect(row).toEqual({
+      id: programId,
+      builds: 0,
+      now: null,
+      trend: [],
+      nextMilestone: null,
+      ...INPUT,
+    });
     expect(await auditRows(database, ctx.teamId)).toEqual([
       { actor_id: ctx.userId, action: "program.create", subject_id: programId },
     ]);
@@ -28,7 +35,7 @@ describe("createProgram", () => {
   test("refuses a liaison and stores nothing", async () => {
     const ctx = await makeMember(database, "liaison");
     await expect(createProgram(ctx, INPUT)).rejects.toMatchObject({ code: "denied" });
-    expect(await listPrograms(ctx)).toEqual([]);
+    expect(await listPrograms(ctx, "2026-12-01")).toEqual([]);
     expect(await auditRows(database, ctx.teamId)).toEqual([]);
   });
 
@@ -36,9 +43,9 @@ describe("createProgram", () => {
     const ours = await makeMember(database, "engineer");
     const theirs = await makeMember(database, "engineer");
     await createProgram(ours, INPUT);
-    expect(await listPrograms(theirs)).toEqual([]);
+    expect(await listPrograms(theirs, "2026-12-01")).toEqual([]);
     await createProgram(theirs, INPUT);
-    expect(await listPrograms(theirs)).toHaveLength(1);
+    expect(await listPrograms(theirs, "2026-12-01")).toHaveLength(1);
   });
 
   test("leaves nothing behind when the audit row cannot be written", async () => {
@@ -46,7 +53,7 @@ describe("createProgram", () => {
     await withoutAudit(database, async () => {
       await expect(createProgram(ctx, INPUT)).rejects.toThrow();
     });
-    expect(await listPrograms(ctx)).toEqual([]);
+    expect(await listPrograms(ctx, "2026-12-01")).toEqual([]);
   });
 
   test("says at the field what is wrong", async () => {
@@ -68,6 +75,6 @@ describe("createProgram", () => {
       code: "conflict",
       fieldErrors: { name: "Choose another name." },
     });
-    expect(await listPrograms(ctx)).toHaveLength(1);
+    expect(await listPrograms(ctx, "2026-12-01")).toHaveLength(1);
   });
 });

@@ -1,9 +1,20 @@
 import type { Metadata } from "next";
+import Link from "next/link";
 import { notFound } from "next/navigation";
+import { TrendChart } from "@/components/charts/trend-chart";
 import { BuildForm } from "@/components/programs/build-form";
-import { formatTarget } from "@/components/programs/program-table";
+import { BuildList } from "@/components/programs/build-list";
+import { BigMargin } from "@/components/readings/big-margin";
+import { ButtonLink } from "@/components/ui/button";
+import { EmptyState } from "@/components/ui/empty-state";
+import { PageHead } from "@/components/ui/page-head";
+import { Section } from "@/components/ui/section";
+import { today } from "@/lib/adapters/clock";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
+import { formatFrequency, formatMargin } from "@/lib/core/units/format";
+import { newestStanding } from "@/lib/queries/program/load-standings";
+import type { ProgramDetail } from "@/lib/queries/program/read-program";
 import { readProgram } from "@/lib/queries/program/read-program";
 import { addBuild } from "../actions";
 
@@ -14,47 +25,135 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
   const ctx = await currentContext();
   const program = await readProgram(ctx, programId);
   if (!program) notFound();
+  const { trend } = program;
+  const newest = newestStanding(trend);
+  const mayWrite = isAllowed(ctx, "program.write") && program.archivedAt === null;
   return (
     <>
-      <h1 className="text-3xl">{program.name}</h1>
-      <p className="mt-1 text-ink-soft">{program.description}</p>
-      <p className="mt-4">
-        Target margin{" "}
-        <span className="font-mono text-2xl">{formatTarget(program.targetMarginDb)}</span>
-      </p>
-      <h2 className="mt-10 mb-3 text-xl">Builds</h2>
-      {program.builds.length > 0 ? (
-        <div className="overflow-x-auto border border-rule bg-sheet">
-          <table className="w-full text-left">
-            <thead className="text-sm text-ink-soft">
-              <tr className="border-b border-rule">
-                <th className="px-4 py-2 font-medium">Build</th>
-                <th className="px-4 py-2 font-medium">Built on</th>
-                <th className="px-4 py-2 font-medium">Notes</th>
-              </tr>
-            </thead>
-            <tbody>
-              {program.builds.map((build) => (
-                <tr key={build.id} className="border-b border-rule last:border-0">
-                  <td className="px-4 py-3 font-medium whitespace-nowrap">{build.name}</td>
-                  <td className="px-4 py-3 font-mono whitespace-nowrap">
-                    {build.builtOn ?? "not stated"}
-                  </td>
-                  <td className="px-4 py-3 text-ink-soft">{build.notes}</td>
-                </tr>
-              ))}
-            </tbody>
-          </table>
-        </div>
+      <PageHead
+        title={program.name}
+        trail={[{ href: "/programs", label: "Programs" }]}
+        lead={program.description}
+        actions={
+          <>
+            <ButtonLink href={`/reports?program=${program.id}`}>Reports</ButtonLink>
+            {isAllowed(ctx, "program.write") ? (
+              <ButtonLink href={`/programs/${program.id}/edit`}>Edit</ButtonLink>
+            ) : null}
+          </>
+        }
+      />
+      {program.archivedAt ? (
+        <p className="mb-4 border-l-4 border-shoal bg-shoal-bed px-3 py-2">
+          This program is archived.
+        </p>
+      ) : null}
+      {newest ? (
+        <BigMargin marginDb={newest.worst.marginDb} standing={newest.worst.standing}>
+          {newest.build.name}, {newest.worst.lineName} line of {newest.worst.maskTitle}
+          {newest.worst.marginAtHz === null
+            ? ""
+            : ` at ${formatFrequency(newest.worst.marginAtHz)}`}
+          . {againstTarget(newest.worst.marginDb, program.targetMarginDb)}
+        </BigMargin>
       ) : (
-        <p className="border border-dashed border-rule p-8 text-ink-soft">No builds yet.</p>
+        <p className="text-lg">
+          No sweep is on the line of record yet; the target is{" "}
+          <span className="font-mono">{formatMargin(program.targetMarginDb)}</span>.
+        </p>
       )}
-      {isAllowed(ctx, "program.write") ? (
-        <section className="mt-10">
-          <h2 className="mb-3 text-xl">Add a build</h2>
+      <Section
+        title="Margin over builds"
+        lead="Worst margin of each build over its sweeps on the line of record."
+      >
+        {trend.masks.length === 0 ? (
+          <EmptyState>
+            The program names no mask yet.{" "}
+            {mayWrite ? (
+              <Link href={`/programs/${program.id}/edit`} className="text-deep underline">
+                Choose what it must fit under
+              </Link>
+            ) : (
+              "An engineer or a manager of your team chooses them."
+            )}
+          </EmptyState>
+        ) : (
+          <TrendChart
+            series={seriesOf(program)}
+            targetDb={program.targetMarginDb}
+            milestones={program.milestones}
+            today={today()}
+          />
+        )}
+      </Section>
+      <Section title="Builds">
+        {trend.builds.length > 0 ? (
+          <BuildList programId={program.id} masks={trend.masks} builds={trend.builds} />
+        ) : (
+          <EmptyState>No builds yet.</EmptyState>
+        )}
+      </Section>
+      <MilestoneList program={program} />
+      {mayWrite ? (
+        <Section title="Add a build">
           <BuildForm programId={program.id} action={addBuild} />
-        </section>
+        </Section>
       ) : null}
     </>
+  );
+}
+
+function againstTarget(marginDb: number | null, targetDb: number): string {
+  if (marginDb === null) return `The target is ${formatMargin(targetDb)}.`;
+  const lacking = targetDb - marginDb;
+  return lacking > 0
+    ? `${lacking.toFixed(1)} dB short of the target of ${formatMargin(targetDb)}.`
+    : `The target of ${formatMargin(targetDb)} is met on the bench.`;
+}
+
+function seriesOf({ id: programId, trend }: ProgramDetail) {
+  return trend.masks.map((mask) => ({
+    maskTitle: mask.title,
+    points: trend.builds.flatMap((build) => {
+      const found = build.standings.find((standing) => standing.maskId === mask.id);
+      if (!found) return [];
+      return [
+        {
+          buildName: build.name,
+          builtOn: build.builtOn,
+          marginDb: found.marginDb,
+          standing: found.standing,
+          href: `/programs/${programId}/builds/${build.id}`,
+        },
+      ];
+    }),
+  }));
+}
+
+function MilestoneList({ program }: { program: ProgramDetail }) {
+  if (program.milestones.length === 0) return null;
+  return (
+    <Section title="Milestones">
+      <ul className="max-w-3xl border border-rule bg-sheet">
+        {program.milestones.map((milestone) => (
+          <li
+            key={milestone.id}
+            className="flex flex-wrap gap-x-6 border-b border-rule px-4 py-2.5 last:border-0"
+          >
+            <span className="font-mono">{milestone.dueOn}</span>
+            <span className="font-medium">{milestone.name}</span>
+            <span className="ml-auto">
+              {milestone.requiredMarginDb === null ? (
+                <span className="text-ink-soft">no margin asked</span>
+              ) : (
+                <>
+                  asks <span className="font-mono">{formatMargin(milestone.requiredMarginDb)}</span>
+                </>
+              )}
+            </span>
+          </li>
+        ))}
+      </ul>
+    </Section>
   );
 }

@@ -1,0 +1,59 @@
+"use server";
+
+import { revalidatePath } from "next/cache";
+import { defineAction } from "@/lib/adapters/define-action";
+import { addStep } from "@/lib/commands/ladder/add-step";
+import { archiveLadder } from "@/lib/commands/ladder/archive-ladder";
+import { createLadder } from "@/lib/commands/ladder/create-ladder";
+import { editLadder } from "@/lib/commands/ladder/edit-ladder";
+import { editStep } from "@/lib/commands/ladder/edit-step";
+import { removeStep } from "@/lib/commands/ladder/remove-step";
+import { restoreLadder } from "@/lib/commands/ladder/restore-ladder";
+import { recordStep } from "@/lib/commands/sweep/record-step";
+
+const runCreate = defineAction(createLadder);
+const runEdit = defineAction(editLadder);
+const runArchive = defineAction(archiveLadder);
+const runRestore = defineAction(restoreLadder);
+const runAddStep = defineAction(addStep);
+const runEditStep = defineAction(editStep);
+const runRemoveStep = defineAction(removeStep);
+const runRecordStep = defineAction(recordStep);
+
+async function refreshed<R extends { ok: boolean }>(running: Promise<R>): Promise<R> {
+  const result = await running;
+  if (result.ok) revalidatePath("/", "layout");
+  return result;
+}
+
+export async function startLadder(input: unknown) {
+  return refreshed(runCreate(input));
+}
+
+export async function changeLadder(input: unknown) {
+  return refreshed(runEdit(input));
+}
+
+export async function putLadderAside(ladderId: string) {
+  return refreshed(runArchive({ ladderId }));
+}
+
+export async function fetchLadderBack(ladderId: string) {
+  return refreshed(runRestore({ ladderId }));
+}
+
+export async function appendStep(input: unknown) {
+  return refreshed(runAddStep(input));
+}
+
+export async function changeStep(input: unknown) {
+  return refreshed(runEditStep(input));
+}
+
+export async function takeStepAway(stepId: string) {
+  return refreshed(runRemoveStep({ stepId }));
+}
+
+export async function putStepOnRecord(stepId: string) {
+  return refreshed(runRecordStep({ stepId }));
+}

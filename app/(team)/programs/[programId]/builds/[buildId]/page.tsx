@@ -1,0 +1,170 @@
+import type { Metadata } from "next";
+import Link from "next/link";
+import { notFound } from "next/navigation";
+import { SweepList } from "@/components/builds/sweep-list";
+import { LadderForm } from "@/components/ladders/ladder-form";
+import { BigMargin } from "@/components/readings/big-margin";
+import { ButtonLink } from "@/components/ui/button";
+import { EmptyState } from "@/components/ui/empty-state";
+import { PageHead } from "@/components/ui/page-head";
+import { Section } from "@/components/ui/section";
+import { isAllowed } from "@/lib/auth/context";
+import { currentContext } from "@/lib/auth/session";
+import { formatFrequency } from "@/lib/core/units/format";
+import type { BuildDetail } from "@/lib/queries/program/read-build";
+import { readBuild } from "@/lib/queries/program/read-build";
+import type { SweepRow } from "@/lib/queries/sweep/list-sweeps";
+import { listBuildSweeps } from "@/lib/queries/sweep/list-sweeps";
+import { worstOf } from "@/lib/queries/sweep/worst-of";
+import { startLadder } from "../../../../ladders/actions";
+
+export const metadata: Metadata = { title: "Build" };
+
+interface BuildPageProps {
+  params: Promise<{ programId: string; buildId: string }>;
+}
+
+export default async function BuildPage(props: BuildPageProps) {
+  const { programId, buildId } = await props.params;
+  const ctx = await currentContext();
+  const build = await readBuild(ctx, buildId);
+  if (!build || build.programId !== programId) notFound();
+  const sweeps = await listBuildSweeps(ctx, buildId);
+  const archived = build.archivedAt !== null || build.programArchivedAt !== null;
+  const mayImport = isAllowed(ctx, "sweep.write") && !archived;
+  return (
+    <>
+      <PageHead
+        title={`${build.programName} ${build.name}`}
+        trail={[
+          { href: "/programs", label: "Programs" },
+          { href: `/programs/${build.programId}`, label: build.programName },
+        ]}
+        lead={[build.builtOn ? `Built on ${build.builtOn}` : null, build.notes || null]
+          .filter(Boolean)
+          .join(" · ")}
+        actions={
+          <>
+            {isAllowed(ctx, "program.write") ? (
+              <ButtonLink href={`/programs/${programId}/builds/${buildId}/edit`}>Edit</ButtonLink>
+            ) : null}
+            {isAllowed(ctx, "report.write") && !archived ? (
+              <ButtonLink href={`/reports/new?build=${buildId}`}>New report</ButtonLink>
+            ) : null}
+            {mayImport ? (
+              <ButtonLink look="primary" href={`/sweeps/import?build=${buildId}`}>
+                Import sweeps
+              </ButtonLink>
+            ) : null}
+          </>
+        }
+      />
+      {archived ? (
+        <p className="mb-4 border-l-4 border-shoal bg-shoal-bed px-3 py-2">
+          This build is archived.
+        </p>
+      ) : null}
+      <OnRecord sweeps={sweeps} />
+      <Section title="Ladders" lead="What did each step buy?">
+        <LadderList build={build} />
+        {mayImport ? (
+          <details className="mt-4" open={build.ladders.length === 0}>
+            <summary className="mb-3 cursor-pointer text-deep underline">Start a ladder</summary>
+            <LadderForm buildId={build.id} action={startLadder} />
+          </details>
+        ) : null}
+      </Section>
+      <Section title="Sweeps">
+        {sweeps.length > 0 ? (
+          <SweepList sweeps={sweeps} />
+        ) : (
+          <EmptyState>
+            No sweeps yet.{" "}
+            {mayImport ? (
+              <Link href={`/sweeps/import?build=${buildId}`} className="text-deep underline">
+                Import the analyzer&rsquo;s files
+              </Link>
+            ) : (
+              "An engineer of your team imports them."
+            )}
+          </EmptyState>
+        )}
+      </Section>
+      <ClockList build={build} />
+    </>
+  );
+}
+
+function OnRecord({ sweeps }: { sweeps: SweepRow[] }) {
+  const onRecord = sweeps.filter((sweep) => sweep.onRecord && sweep.standing !== null);
+  const worst = worstOf(
+    onRecord.flatMap((sweep) => (sweep.standing ? [{ ...sweep, standing: sweep.standing }] : [])),
+  );
+  if (!worst) {
+    return (
+      <p className="text-lg">
+        No sweep of this build is on the line of record, so it has no place in the trend yet.
+      </p>
+    );
+  }
+  return (
+    <BigMargin marginDb={worst.marginDb} standing={worst.standing}>
+      Worst of {onRecord.length === 1 ? "one sweep" : `${onRecord.length} sweeps`} on the line of
+      record:{" "}
+      <Link href={`/sweeps/${worst.id}`} className="text-deep underline">
+        {worst.name}
+      </Link>
+      .
+    </BigMargin>
+  );
+}
+
+function LadderList({ build }: { build: BuildDetail }) {
+  if (build.ladders.length === 0) {
+    return (
+      <EmptyState>
+        No ladder yet. A ladder holds each mitigation step against the one before.
+      </EmptyState>
+    );
+  }
+  return (
+    <ul className="border border-rule bg-sheet">
+      {build.ladders.map((ladder) => (
+        <li
+          key={ladder.id}
+          className="flex flex-wrap items-baseline gap-x-6 border-b border-rule px-4 py-3 last:border-0"
+        >
+          <Link href={`/ladders/${ladder.id}`} className="font-medium text-deep underline">
+            {ladder.name}
+          </Link>
+          <span className="text-ink-soft">
+            {ladder.steps === 1 ? "1 step" : `${ladder.steps} steps`}
+          </span>
+          <span className="basis-full text-sm text-ink-soft">{ladder.notes}</span>
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+function ClockList({ build }: { build: BuildDetail }) {
+  if (build.clocks.length === 0) return null;
+  return (
+    <Section title="Clocks" lead="Known oscillators, bit rates and converters of this build.">
+      <ul className="max-w-2xl border border-rule bg-sheet">
+        {build.clocks.map((clock) => (
+          <li
+            key={clock.id}
+            className="flex flex-wrap gap-x-6 border-b border-rule px-4 py-2.5 last:border-0"
+          >
+            <span className="font-medium">{clock.name}</span>
+            <span className="ml-auto font-mono">{formatFrequency(clock.frequencyHz)}</span>
+            <span className="w-28 text-right text-ink-soft">
+              {clock.tolerancePpm === null ? "tolerance unknown" : `± ${clock.tolerancePpm} ppm`}
+            </span>
+          </li>
+        ))}
+      </ul>
+    </Section>
+  );
+}

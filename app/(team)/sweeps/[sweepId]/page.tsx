@@ -1,0 +1,254 @@
+import type { Metadata } from "next";
+import Link from "next/link";
+import { notFound } from "next/navigation";
+import { BigMargin } from "@/components/readings/big-margin";
+import { DoubtList } from "@/components/readings/doubt-list";
+import { LineTable } from "@/components/readings/line-table";
+import { RemeasureList } from "@/components/readings/remeasure-list";
+import { MaskTabs } from "@/components/sweeps/mask-tabs";
+import { SweepChart } from "@/components/sweeps/sweep-chart";
+import { LinkFacts, MeasurementFacts } from "@/components/sweeps/sweep-facts";
+import { SweepOrigin } from "@/components/sweeps/sweep-origin";
+import { TraceTable } from "@/components/sweeps/trace-table";
+import { ActionButton } from "@/components/ui/action-button";
+import { ButtonLink } from "@/components/ui/button";
+import { ConfirmButton } from "@/components/ui/confirm-button";
+import { PageHead } from "@/components/ui/page-head";
+import { Section } from "@/components/ui/section";
+import { isAllowed } from "@/lib/auth/context";
+import { currentContext } from "@/lib/auth/session";
+import { decidingPoint } from "@/lib/core/reading/deciding-point";
+import { formatFrequency } from "@/lib/core/units/format";
+import type { SweepDetail } from "@/lib/queries/sweep/read-sweep";
+import { readSweepDetail } from "@/lib/queries/sweep/read-sweep";
+import { worstOf } from "@/lib/queries/sweep/worst-of";
+import { chooseOnRecord, fetchBack, putAside } from "./actions";
+
+export const metadata: Metadata = { title: "Sweep" };
+
+interface SweepPageProps {
+  params: Promise<{ sweepId: string }>;
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
+}
+
+export default async function SweepPage(props: SweepPageProps) {
+  const { sweepId } = await props.params;
+  const { mask: chosenMask } = await props.searchParams;
+  const ctx = await currentContext();
+  const sweep = await readSweepDetail(ctx, sweepId);
+  if (!sweep) notFound();
+  const mayWrite = isAllowed(ctx, "sweep.write");
+  const summaries = sweep.readings.map(({ maskId, mask, reading }) => ({
+    maskId,
+    title: mask.title,
+    standing: reading.standing,
+    marginDb: decidingPoint(reading)?.point.marginDb ?? null,
+    notComparable: reading.notComparable !== null,
+  }));
+  // A mask that the sweep does not reach says nothing about it.
+  const worst = worstOf(summaries.filter((summary) => summary.marginDb !== null));
+  const chosen =
+    sweep.readings.find((r) => r.maskId === chosenMask) ??
+    sweep.readings.find((r) => r.maskId === worst?.maskId) ??
+    sweep.readings[0] ??
+    null;
+  const comparable = chosen && chosen.reading.notComparable === null ? chosen : null;
+  return (
+    <>
+      <PageHead
+        title={sweep.name}
+        trail={trailOf(sweep)}
+        lead={leadOf(sweep)}
+        actions={
+          <>
+            <ButtonLink href={`/api/v1/sweeps/${sweep.id}/file`} prefetch={false}>
+              Original file
+            </ButtonLink>
+            {mayWrite ? <SweepActions sweep={sweep} /> : null}
+          </>
+        }
+      />
+      {sweep.archivedAt ? (
+        <p className="mb-4 border-l-4 border-shoal bg-shoal-bed px-3 py-2">
+          This sweep is archived: it shows in no list, delta or trend.
+        </p>
+      ) : null}
+      {sweep.purpose !== "product" ? (
+        <p className="mb-4 text-lg">
+          {sweep.purpose === "ambient"
+            ? "An ambient sweep: the product was off. It is not held against a mask."
+            : "A floor sweep: the instrument alone. It is not held against a mask."}
+        </p>
+      ) : null}
+      {sweep.purpose === "product" && sweep.readings.length === 0 ? (
+        <p className="mb-4 text-lg">
+          The program names no mask yet, so there is no margin.{" "}
+          <Link href={`/programs/${sweep.programId}/edit`} className="text-deep underline">
+            Choose its masks
+          </Link>
+          .
+        </p>
+      ) : null}
+      {comparable ? (
+        <div className="mb-5">
+          <BigMargin
+            marginDb={summaries.find((s) => s.maskId === comparable.maskId)?.marginDb ?? null}
+            standing={comparable.reading.standing}
+          >
+            {headline(comparable)}
+          </BigMargin>
+        </div>
+      ) : null}
+      {summaries.length > 0 ? (
+        <MaskTabs sweepId={sweep.id} items={summaries} chosen={chosen?.maskId ?? ""} />
+      ) : null}
+      {chosen && !comparable ? (
+        <p className="mb-4 border-l-4 border-shoal bg-shoal-bed px-3 py-2">
+          Not comparable with {chosen.mask.title}. {chosen.reading.notComparable}
+        </p>
+      ) : null}
+      <SweepChart
+        key={chosen?.maskId ?? "none"}
+        name={sweep.name}
+        traces={shownTraces(sweep)}
+        extent={extentOf(sweep)}
+        stepHz={sweep.traces[0]?.stepHz ?? null}
+        mask={comparable?.mask ?? null}
+        suspects={comparable?.reading.suspects ?? []}
+        guardDb={sweep.guardDb}
+      />
+      {comparable ? (
+        <>
+          <Section
+            title={`Held against ${comparable.mask.title}`}
+            lead={
+              <>
+                <Link href={`/masks/${comparable.maskId}`} className="text-deep underline">
+                  Revision {comparable.maskRevision}
+                </Link>
+                {comparable.mask.provenance === "from memory"
+                  ? ", from memory: confirm it against your own copy."
+                  : "."}{" "}
+                Guard {sweep.guardDb.toFixed(1)} dB.
+              </>
+            }
+          >
+            <LineTable reading={comparable.reading} />
+          </Section>
+          {comparable.reading.remeasure.length > 0 ? (
+            <Section
+              title="Measure again"
+              lead="An upper bound lies over the mask here. Only the line's own detector can decide."
+            >
+              <RemeasureList
+                points={comparable.reading.remeasure}
+                unit={comparable.reading.unit}
+                exportName={`${sweep.name} measure again`}
+              />
+            </Section>
+          ) : null}
+          <Section title="Doubts">
+            <DoubtList doubts={comparable.reading.doubts} />
+          </Section>
+        </>
+      ) : null}
+      <Section title="Measurement settings">
+        <MeasurementFacts settings={sweep.settings} />
+      </Section>
+      {sweep.purpose === "product" ? (
+        <Section title="Link settings">
+          <LinkFacts link={sweep.link} />
+        </Section>
+      ) : null}
+      <Section title="Traces">
+        <TraceTable traces={sweep.traces} />
+      </Section>
+      <SweepOrigin sweep={sweep} />
+    </>
+  );
+}
+
+function SweepActions({ sweep }: { sweep: SweepDetail }) {
+  if (sweep.archivedAt)
+    return <ActionButton action={fetchBack.bind(null, sweep.id)}>Restore</ActionButton>;
+  return (
+    <>
+      {sweep.purpose === "product" ? (
+        <ActionButton action={chooseOnRecord.bind(null, sweep.id, !sweep.onRecord)}>
+          {sweep.onRecord ? "Take off the line of record" : "Put on the line of record"}
+        </ActionButton>
+      ) : null}
+      <ConfirmButton
+        label="Archive"
+        title="Archive this sweep?"
+        confirmLabel="Archive"
+        action={putAside.bind(null, sweep.id)}
+      >
+        It leaves every list, delta and trend. Its file and its readings stay, and it can be
+        restored from its own page.
+      </ConfirmButton>
+    </>
+  );
+}
+
+function trailOf(sweep: SweepDetail) {
+  const build = `/programs/${sweep.programId}/builds/${sweep.buildId}`;
+  return [
+    { href: `/programs/${sweep.programId}`, label: sweep.programName },
+    { href: build, label: sweep.buildName },
+    ...(sweep.ladderId
+      ? [
+          {
+            href: `/ladders/${sweep.ladderId}`,
+            label: `${sweep.ladderName}, step ${sweep.stepPosition}`,
+          },
+        ]
+      : []),
+  ];
+}
+
+function leadOf(sweep: SweepDetail): string {
+  const when = sweep.measuredOn ? `measured on ${sweep.measuredOn}` : "date not stated";
+  const record = sweep.onRecord ? "on the line of record" : "not on the line of record";
+  return [sweep.benchName, when, ...(sweep.purpose === "product" ? [record] : [])].join(" · ");
+}
+
+/** Where the worst margin of a reading lies, in words. */
+function headline({ reading, mask }: SweepDetail["readings"][number]): string {
+  const deciding = decidingPoint(reading);
+  if (!deciding) return `No part of ${mask.title} was swept with a detector that can decide.`;
+  const { line, point } = deciding;
+  const where = `${line.name} line of ${mask.title} at ${formatFrequency(point.frequencyHz)}`;
+  const worst = reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];
+  return worst?.explanation ? `${where}. ${worst.explanation}` : `${where}.`;
+}
+
+function shownTraces(sweep: SweepDetail) {
+  const own = sweep.traces.map((trace) => ({
+    sweepId: sweep.id,
+    position: trace.position,
+    name: trace.name,
+    role: trace.position === 0 ? ("main" as const) : ("outline" as const),
+    detector: trace.detector,
+    hold: trace.hold,
+  }));
+  const ambient = sweep.ambient
+    .filter((other) => other.id !== sweep.id)
+    .slice(0, 1)
+    .map((other) => ({
+      sweepId: other.id,
+      position: 0,
+      name: `Ambient: ${other.name}`,
+      role: "ambient" as const,
+      detector: null,
+      hold: "none" as const,
+    }));
+  return [...own, ...ambient];
+}
+
+function extentOf(sweep: SweepDetail) {
+  return {
+    fromHz: Math.min(...sweep.traces.map((trace) => trace.firstHz)),
+    toHz: Math.max(...sweep.traces.map((trace) => trace.lastHz)),
+  };
+}

@@ -1,0 +1,89 @@
+"use client";
+
+import { useState } from "react";
+import { CoastChart } from "@/components/charts/coast-chart";
+import { useTraceViews } from "@/components/sweeps/use-trace-views";
+import { useUrlView } from "@/components/sweeps/use-url-view";
+import { SelectField } from "@/components/ui/select-field";
+import type { Mask } from "@/lib/core/mask/mask";
+import type { Detector, Hold } from "@/lib/core/sweep/settings";
+
+export interface OverlaySweep {
+  id: string;
+  label: string;
+  trace: {
+    position: number;
+    detector: Detector | null;
+    hold: Hold;
+    firstHz: number;
+    lastHz: number;
+  };
+}
+
+interface OverlayProps {
+  sweeps: OverlaySweep[];
+  before: string;
+  after: string;
+  mask: Mask | null;
+}
+
+/** Two sweeps of the ladder over each other: the later one as water, the earlier as an outline. */
+export function Overlay({ sweeps, mask, ...initial }: OverlayProps) {
+  const [before, setBefore] = useState(initial.before);
+  const [after, setAfter] = useState(initial.after);
+  const find = (id: string) => sweeps.find((sweep) => sweep.id === id);
+  const shown = [
+    { sweep: find(after), role: "main" as const },
+    { sweep: find(before), role: "outline" as const },
+  ].flatMap(({ sweep, role }) => (sweep ? [{ sweep, role }] : []));
+  const extent = {
+    fromHz: Math.min(...shown.map(({ sweep }) => sweep.trace.firstHz)),
+    toHz: Math.max(...shown.map(({ sweep }) => sweep.trace.lastHz)),
+  };
+  const { view, setView, setScale } = useUrlView(extent);
+  const { traces, state } = useTraceViews(
+    shown.map(({ sweep, role }) => ({
+      sweepId: sweep.id,
+      position: sweep.trace.position,
+      name: sweep.label,
+      role,
+      detector: sweep.trace.detector,
+      hold: sweep.trace.hold,
+    })),
+    view,
+    extent,
+  );
+  const options = sweeps.map(({ id, label }) => ({ value: id, label }));
+  return (
+    <>
+      <div className="grid max-w-3xl gap-x-5 print:hidden sm:grid-cols-2">
+        <SelectField
+          label="Before, as an outline"
+          options={options}
+          value={before}
+          onChange={(event) => setBefore(event.target.value)}
+        />
+        <SelectField
+          label="After, as water"
+          options={options}
+          value={after}
+          onChange={(event) => setAfter(event.target.value)}
+        />
+      </div>
+      <CoastChart
+        traces={traces}
+        mask={mask}
+        suspects={[]}
+        view={view}
+        extent={extent}
+        scale={view.scale}
+        onView={setView}
+        onScale={setScale}
+        highlighted={null}
+        onHighlight={() => undefined}
+        state={state}
+        label="Before and after"
+      />
+    </>
+  );
+}

@@ -1,0 +1,81 @@
+"use client";
+
+import { useState } from "react";
+import { CoastChart } from "@/components/charts/coast-chart";
+import type { Mask } from "@/lib/core/mask/mask";
+import type { Suspect } from "@/lib/core/reading/reading";
+import { SuspectTable } from "./suspect-table";
+import type { ShownTrace } from "./use-trace-views";
+import { useTraceViews } from "./use-trace-views";
+import { useUrlView } from "./use-url-view";
+
+interface SweepChartProps {
+  name: string;
+  traces: ShownTrace[];
+  extent: { fromHz: number; toHz: number };
+  stepHz: number | null;
+  mask: Mask | null;
+  suspects: Suspect[];
+  guardDb: number;
+}
+
+/** The coast chart of a sweep with its suspects below; pointing at either marks both. */
+export function SweepChart(props: SweepChartProps) {
+  const { name, extent, stepHz, mask, suspects, guardDb } = props;
+  const [highlighted, setHighlighted] = useState<number | null>(null);
+  const [hidden, setHidden] = useState<string[]>([]);
+  const { view, setView, setScale } = useUrlView(extent);
+  const idOf = (trace: ShownTrace) => `${trace.sweepId} ${trace.position}`;
+  const shown = props.traces.filter((trace) => !hidden.includes(idOf(trace)));
+  const { traces, state } = useTraceViews(shown, view, extent);
+  return (
+    <>
+      {props.traces.length > 1 ? (
+        <fieldset className="mb-3 flex flex-wrap gap-x-5 gap-y-1 print:hidden">
+          <legend className="sr-only">Traces shown</legend>
+          {props.traces.map((trace) => (
+            <label key={idOf(trace)} className="flex items-center gap-1.5">
+              <input
+                type="checkbox"
+                checked={!hidden.includes(idOf(trace))}
+                onChange={(event) =>
+                  setHidden((now) =>
+                    event.target.checked
+                      ? now.filter((id) => id !== idOf(trace))
+                      : [...now, idOf(trace)],
+                  )
+                }
+              />
+              {trace.name}
+            </label>
+          ))}
+        </fieldset>
+      ) : null}
+      <CoastChart
+        traces={traces}
+        mask={mask}
+        suspects={suspects}
+        view={view}
+        extent={extent}
+        scale={view.scale}
+        onView={setView}
+        onScale={setScale}
+        highlighted={highlighted}
+        onHighlight={setHighlighted}
+        state={state}
+        label={mask ? `${name} against ${mask.title}` : name}
+        guardDb={guardDb}
+      />
+      {mask ? (
+        <SuspectTable
+          suspects={suspects}
+          stepHz={stepHz}
+          unit={mask.unit}
+          exportName={`${name} suspects`}
+          highlighted={highlighted}
+          onHighlight={setHighlighted}
+        />
+      ) : null}
+    </>
+  );
+}

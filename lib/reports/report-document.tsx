@@ -1,5 +1,4 @@
 import { Document } from "@react-pdf/renderer";
-import { SectionTitle } from "./parts/blocks";
 import { PageFrame } from "./parts/page-frame";
 import type { ReportSnapshot, ReportState } from "./report-snapshot";
 import type { SummaryFit } from "./summary-fit";
@@ -49,12 +48,16 @@ export function ReportDocument({ snapshot, state, fit }: ReportDocumentProps) {
         <ItemAndPeople snapshot={snapshot} state={state} />
         <DecisionRule snapshot={snapshot} />
         <Masks snapshot={snapshot} />
-        <SectionTitle aheadPt={150}>Sweeps and readings</SectionTitle>
-        {snapshot.sweeps.map((sweep) => (
-          <SweepBlock key={sweep.sweepId} sweep={sweep} issuedAt={snapshot.issuedAt} />
-        ))}
+      </PageFrame>
+      {/* A run of pages for each sweep: laying out a run costs the square of its length. */}
+      {snapshot.sweeps.map((sweep) => (
+        <PageFrame key={sweep.sweepId} snapshot={snapshot} state={state}>
+          <SweepBlock sweep={sweep} issuedAt={snapshot.issuedAt} />
+        </PageFrame>
+      ))}
+      <PageFrame snapshot={snapshot} state={state}>
         <Ladder ladder={snapshot.ladder} />
-        <Records snapshot={snapshot} state={state} />
+        <Records snapshot={snapshot} />
       </PageFrame>
     </Document>
   );

@@ -81,8 +81,8 @@ function Suspects({ held: { reading }, sweep }: HeldProps) {
             { title: "Limit", share: 1.35, kind: "number", align: "right" },
             { title: "Margin", share: 1.05, kind: "number", align: "right" },
             { title: "Prominence", share: 1.15, kind: "number", align: "right" },
-            { title: "Line", share: 2.3, kind: "small", longest: 24 },
-            { title: "Basis", share: 1.15, kind: "small" },
+            { title: "Line", share: 2.75, kind: "small", longest: 24 },
+            { title: "Basis", share: 1.2, kind: "small" },
           ]}
           rows={reading.suspects.map((suspect) => [
             String(suspect.number),
@@ -134,9 +134,7 @@ export function ReadingBlock({ held, sweep }: HeldProps) {
   const gaps = reading.lines.map(gapText).filter((text) => text !== null);
   return (
     <>
-      <SubTitle
-        aheadPt={80}
-      >{`${sweep.name} against ${mask.title}, revision ${maskRevision}`}</SubTitle>
+      <SubTitle aheadPt={80}>{`Against ${mask.title}, revision ${maskRevision}`}</SubTitle>
       {reading.notComparable === null ? null : <Warning>{reading.notComparable}</Warning>}
       {reading.lines.length > 0 ? <Lines held={held} sweep={sweep} /> : null}
       <View style={{ marginTop: 4 }}>

@@ -49,7 +49,7 @@ export function ItemAndPeople({ snapshot, state }: RecordProps) {
 }
 
 /** Original files, what the report relates to, and its end. */
-export function Records({ snapshot, state }: RecordProps) {
+export function Records({ snapshot }: Pick<RecordProps, "snapshot">) {
   return (
     <>
       <SectionTitle>Original files and content</SectionTitle>
@@ -63,7 +63,7 @@ export function Records({ snapshot, state }: RecordProps) {
             <Words style={TYPE.body} longest={36}>
               {sweep.name}
             </Words>
-            <Words style={{ ...TYPE.number, fontSize: 7 }} longest={44}>
+            <Words style={{ ...TYPE.number, fontSize: 7 }} longest={50}>
               {sweep.fileName}
             </Words>
           </View>,
@@ -78,7 +78,6 @@ export function Records({ snapshot, state }: RecordProps) {
           changes with any value. Approval and withdrawal are printed beside it and are not part of
           it.
         </Paragraph>
-        <Text style={{ ...TYPE.number, fontSize: 7.2 }}>{state.sha256}</Text>
       </View>
       <View
         wrap={false}

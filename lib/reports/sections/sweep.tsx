@@ -2,7 +2,7 @@ import { View } from "@react-pdf/renderer";
 import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { formatFrequency, formatLevel } from "@/lib/core/units/format";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
-import { Facts, Label, Paragraph, SubTitle, Warning } from "../parts/blocks";
+import { Facts, Label, Paragraph, SectionTitle, Warning } from "../parts/blocks";
 import { Table } from "../parts/table";
 import { HOLD_LABELS, NOT_STATED, TRANSDUCER_LABELS } from "../report-labels";
 import type { SnapshotSweep } from "../report-snapshot";
@@ -94,7 +94,7 @@ function Traces({ sweep }: { sweep: SnapshotSweep }) {
 export function SweepBlock({ sweep, issuedAt }: { sweep: SnapshotSweep; issuedAt: string }) {
   return (
     <>
-      <SubTitle aheadPt={110}>{sweep.name}</SubTitle>
+      <SectionTitle>{`Sweep · ${sweep.name}`}</SectionTitle>
       <Facts facts={sweepFacts(sweep)} />
       <Label>Settings</Label>
       <Facts facts={settingFacts(sweep)} />

@@ -10,7 +10,7 @@ import {
   statedUnitHz,
   tableEnds,
 } from "./frequency-axis";
-import { frequencyHzOf } from "./header-values";
+import { frequencyHzOf, quantityOf } from "./header-values";
 import { orderRows } from "./order-rows";
 import type { HeaderFacts } from "./read-header";
 import { quote, Refusal } from "./refusal";
@@ -106,6 +106,14 @@ export function readTableAxis(
   const endsHz: [number, number] = [ends[0] * (unitHz ?? 1), ends[1] * (unitHz ?? 1)];
   const fitted = unitHz === null ? null : headerUnitHz(facts, table.shape.decimal, endsHz);
   const isInHz = headerEdges(facts, table.shape.decimal) === null && stated === 1;
+  const bare = ["rbw", "vbw"] as const;
+  const isBare = bare.some((key) =>
+    facts.get(key)?.some((entry) => quantityOf(entry, table.shape.decimal)?.unit === null),
+  );
+  const notes =
+    fitted === null && isInHz && isBare
+      ? ["The bandwidths carry no unit; they were read in Hz, as the frequencies are."]
+      : [];
   return {
     axis,
     rows: order.rows,
@@ -113,6 +121,6 @@ export function readTableAxis(
     // frequency column that is in Hz.
     headerUnitHz: fitted ?? (isInHz ? 1 : null),
     questions: unitHz === null ? [{ ...UNIT_QUESTION, guess: String(guessUnitHz(ends)) }] : [],
-    warnings: [...order.warnings, ...table.notes],
+    warnings: [...order.warnings, ...table.notes, ...notes],
   };
 }

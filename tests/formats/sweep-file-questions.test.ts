@@ -170,3 +170,14 @@ it("previews exactly what is stored", () => {
     maxAtHz: 32e6,
   });
 });
+
+it("reads bare bandwidths in Hz only beside frequencies in Hz, and says so", () => {
+  const inHz = preview("RBW,120000\nFrequency (Hz),dBuV\n30e6,40\n31e6,41\n");
+  expect(inHz.rbwHz).toBe(120e3);
+  expect(inHz.warnings.join()).toContain("carry no unit; they were read in Hz");
+});
+
+it("reads bare bandwidths in the unit in which a bare start and stop meet the table", () => {
+  const text = "START,30.0\nSTOP,32.0\nRBW,0.12\nMHz,dBuV\n30,40\n31,41\n32,40\n";
+  expect(preview(text).rbwHz).toBe(120e3);
+});

@@ -11,7 +11,7 @@ import type { ReportSnapshot, SnapshotReading, SnapshotSweep } from "./report-sn
 
 const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
 
-export function standingRank(standing: Standing): number {
+function standingRank(standing: Standing): number {
   return WORST_FIRST.indexOf(standing);
 }
 

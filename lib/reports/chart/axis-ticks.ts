@@ -1,4 +1,4 @@
-export interface Tick {
+interface Tick {
   value: number;
   label: string;
 }

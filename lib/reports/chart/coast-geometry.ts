@@ -114,7 +114,7 @@ export function spotsOf(frame: Frame, drawn: DrawnTrace): { x: number; y: number
   return runsOf(frame, drawn).flat();
 }
 
-export function linePolylines(frame: Frame, line: MaskLine): PolylinePoint[][] {
+function linePolylines(frame: Frame, line: MaskLine): PolylinePoint[][] {
   return maskPolyline(line, frame.fromHz, frame.toHz);
 }
 
@@ -146,7 +146,7 @@ export function hatchPath({ left, right, top, bottom }: Frame, stepPt = 5): stri
   return strokes.join(" ");
 }
 
-export interface Buoy {
+interface Buoy {
   number: number;
   x: number;
   y: number;

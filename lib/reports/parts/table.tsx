@@ -13,7 +13,7 @@ export interface Column {
   longest?: number;
 }
 
-export interface TableProps {
+interface TableProps {
   columns: readonly Column[];
   /** Cells in the order of the columns; texts are set in the column's own type. */
   rows: readonly (readonly ReactNode[])[];

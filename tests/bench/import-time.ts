@@ -1,0 +1,77 @@
+import Papa from "papaparse";
+import type { Client } from "pg";
+import { inventFile } from "./invented-sweep";
+import { measureInTurns, middleOf, milliseconds, minAndMedian, quotients } from "./measure";
+import type { Place } from "./place";
+import type { Figure } from "./report";
+
+const POINTS = 100_000;
+const ROUNDS = 11;
+const LIMIT = 3;
+
+interface BlockRow {
+  kind: string;
+  level: number;
+  position: number;
+  crc32: number;
+  bytes: Buffer;
+}
+
+/** The blocks of one sweep as the import stored them. */
+async function storedBlocks(owner: Client, sweepId: string): Promise<BlockRow[]> {
+  const { rows } = await owner.query<BlockRow>(
+    `select b.kind, b.level, b.position, b.crc32, b.bytes
+       from trace_blocks b join traces t on t.id = b.trace_id where t.sweep_id = $1`,
+    [sweepId],
+  );
+  return rows;
+}
+
+/** One transaction with one row after another into a table without keys to others or policies. */
+async function writeBare(owner: Client, rows: BlockRow[], round: number): Promise<void> {
+  await owner.query("begin");
+  for (const { kind, level, position, crc32, bytes } of rows) {
+    await owner.query("insert into bare_blocks values ($1, $2, $3, $4, $5, $6)", [
+      round,
+      kind,
+      level,
+      position,
+      crc32,
+      bytes,
+    ]);
+  }
+  await owner.query("commit");
+}
+
+/** Import of a file up to stored readings against three masks, beside parsing and writing alone. */
+export async function measureImport({ database, importFile }: Place): Promise<Figure[]> {
+  const { owner } = database;
+  await owner.query(`create table bare_blocks (round integer, kind text, level integer,
+    position integer, crc32 double precision, bytes bytea,
+    primary key (round, kind, level, position))`);
+  const files = Array.from({ length: 2 + ROUNDS }, (_, round) => inventFile(POINTS, 100 + round));
+  const first = await importFile(inventFile(POINTS, 99));
+  const rows = await storedBlocks(owner, first.sweepId);
+  const fileOf = (round: number) => files[round] ?? new Uint8Array(0);
+  const times = await measureInTurns(
+    {
+      whole: (round) => importFile(fileOf(round)),
+      parse: (round) => {
+        const { data } = Papa.parse(Buffer.from(fileOf(round)).toString("utf8"));
+        if (data.length < POINTS) throw new Error("Papa Parse did not read every row.");
+      },
+      write: (round) => writeBare(owner, rows, round),
+    },
+    ROUNDS,
+  );
+  const bare = times.parse.map((ms, i) => ms + (times.write[i] ?? Number.NaN));
+  const ratios = quotients(times.whole, bare);
+  return [
+    {
+      name: `Import of ${POINTS} points, 3 masks ÷ (bare parse + bare write)`,
+      measured: minAndMedian(ratios),
+      limit: { text: `median ≤ ${LIMIT}`, isHeld: middleOf(ratios) <= LIMIT },
+      beside: `${milliseconds(times.whole)}; parse ${milliseconds(times.parse)}, write ${milliseconds(times.write)}`,
+    },
+  ];
+}

@@ -1,6 +1,6 @@
 "use client";
 
-import { useState } from "react";
+import { useMemo, useState } from "react";
 import { CoastChart } from "@/components/charts/coast-chart";
 import { useTraceViews } from "@/components/sweeps/use-trace-views";
 import { useUrlView } from "@/components/sweeps/use-url-view";
@@ -27,32 +27,30 @@ interface OverlayProps {
   mask: Mask | null;
 }
 
+const NONE: never[] = [];
+
 /** Two sweeps of the ladder over each other: the later one as water, the earlier as an outline. */
 export function Overlay({ sweeps, mask, ...initial }: OverlayProps) {
   const [before, setBefore] = useState(initial.before);
   const [after, setAfter] = useState(initial.after);
-  const find = (id: string) => sweeps.find((sweep) => sweep.id === id);
-  const shown = [
-    { sweep: find(after), role: "main" as const },
-    { sweep: find(before), role: "outline" as const },
-  ].flatMap(({ sweep, role }) => (sweep ? [{ sweep, role }] : []));
-  const extent = {
-    fromHz: Math.min(...shown.map(({ sweep }) => sweep.trace.firstHz)),
-    toHz: Math.max(...shown.map(({ sweep }) => sweep.trace.lastHz)),
-  };
-  const { view, setView, setScale } = useUrlView(extent);
-  const { traces, state } = useTraceViews(
-    shown.map(({ sweep, role }) => ({
-      sweepId: sweep.id,
-      position: sweep.trace.position,
-      name: sweep.label,
-      role,
-      detector: sweep.trace.detector,
-      hold: sweep.trace.hold,
-    })),
-    view,
-    extent,
+  const shown = useMemo(() => {
+    const find = (id: string) => sweeps.find((sweep) => sweep.id === id);
+    return [
+      { sweep: find(after), role: "main" as const },
+      { sweep: find(before), role: "outline" as const },
+    ].flatMap(({ sweep, role }) =>
+      sweep ? [{ ...sweep.trace, sweepId: sweep.id, name: sweep.label, role }] : [],
+    );
+  }, [sweeps, before, after]);
+  const extent = useMemo(
+    () => ({
+      fromHz: Math.min(...shown.map((trace) => trace.firstHz)),
+      toHz: Math.max(...shown.map((trace) => trace.lastHz)),
+    }),
+    [shown],
   );
+  const { view, setView, setScale } = useUrlView(extent);
+  const { traces, state } = useTraceViews(shown, view, extent);
   const options = sweeps.map(({ id, label }) => ({ value: id, label }));
   return (
     <>
@@ -73,7 +71,7 @@ export function Overlay({ sweeps, mask, ...initial }: OverlayProps) {
       <CoastChart
         traces={traces}
         mask={mask}
-        suspects={[]}
+        suspects={NONE}
         view={view}
         extent={extent}
         scale={view.scale}

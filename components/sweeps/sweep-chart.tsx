@@ -1,6 +1,6 @@
 "use client";
 
-import { useState } from "react";
+import { useMemo, useState } from "react";
 import { CoastChart } from "@/components/charts/coast-chart";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { Suspect } from "@/lib/core/reading/reading";
@@ -19,14 +19,16 @@ interface SweepChartProps {
   guardDb: number;
 }
 
+const idOf = (trace: ShownTrace) => `${trace.sweepId} ${trace.position}`;
+
 /** The coast chart of a sweep with its suspects below; pointing at either marks both. */
 export function SweepChart(props: SweepChartProps) {
   const { name, extent, stepHz, mask, suspects, guardDb } = props;
   const [highlighted, setHighlighted] = useState<number | null>(null);
   const [hidden, setHidden] = useState<string[]>([]);
   const { view, setView, setScale } = useUrlView(extent);
-  const idOf = (trace: ShownTrace) => `${trace.sweepId} ${trace.position}`;
-  const shown = props.traces.filter((trace) => !hidden.includes(idOf(trace)));
+  const all = props.traces;
+  const shown = useMemo(() => all.filter((t) => !hidden.includes(idOf(t))), [all, hidden]);
   const { traces, state } = useTraceViews(shown, view, extent);
   return (
     <>

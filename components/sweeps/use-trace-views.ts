@@ -1,6 +1,7 @@
 "use client";
 
 import { keepPreviousData, useQueries } from "@tanstack/react-query";
+import { useMemo } from "react";
 import type { CoastState, CoastTrace } from "@/components/charts/coast-trace";
 import type { Detector, Hold } from "@/lib/core/sweep/settings";
 import type { TraceView } from "@/lib/core/sweep/trace-view";
@@ -34,30 +35,37 @@ function queriesOf(traces: ShownTrace[], view: UrlView) {
   }));
 }
 
+/** Data and state of some queries; the same object as long as nothing in it changes. */
+function combine(queries: { data: TraceView | undefined; isError: boolean }[]) {
+  const state: CoastState = queries.some((query) => query.isError)
+    ? "error"
+    : queries.some((query) => !query.data)
+      ? "loading"
+      : "ready";
+  return { state, views: queries.map((query) => query.data ?? null) };
+}
+
 /** Traces for the coast chart: the part in view, and the whole of each for the strip below. */
 export function useTraceViews(
   traces: ShownTrace[],
   view: UrlView,
   extent: { fromHz: number; toHz: number },
 ): { traces: CoastTrace[]; state: CoastState } {
-  const inView = useQueries({ queries: queriesOf(traces, view) });
-  const whole = useQueries({ queries: queriesOf(traces, { ...extent, scale: view.scale }) });
-  const all = [...inView, ...whole];
-  const state = all.some((query) => query.isError)
-    ? "error"
-    : all.some((query) => !query.data)
-      ? "loading"
-      : "ready";
-  return {
-    state,
-    traces: traces.map(({ sweepId, position, name, role, detector, hold }, i) => ({
-      id: `${sweepId} ${position}`,
-      name,
-      role,
-      detector,
-      hold,
-      view: inView[i]?.data ?? null,
-      overview: whole[i]?.data ?? null,
-    })),
-  };
+  const whole = { ...extent, scale: view.scale };
+  const queries = [...queriesOf(traces, view), ...queriesOf(traces, whole)];
+  const { state, views } = useQueries({ queries, combine });
+  const drawn = useMemo(
+    () =>
+      traces.map(({ sweepId, position, name, role, detector, hold }, i): CoastTrace => ({
+        id: `${sweepId} ${position}`,
+        name,
+        role,
+        detector,
+        hold,
+        view: views[i] ?? null,
+        overview: views[traces.length + i] ?? null,
+      })),
+    [traces, views],
+  );
+  return { state, traces: drawn };
 }

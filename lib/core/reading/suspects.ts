@@ -1,6 +1,6 @@
 import { limitAt } from "../mask/limit-at";
-import type { Mask } from "../mask/mask";
-import { frequencyAt, pointCount } from "../sweep/axis";
+import type { Mask, MaskLine } from "../mask/mask";
+import { frequencyAt, indexAtOrAfter, pointCount } from "../sweep/axis";
 import type { Trace } from "../sweep/trace";
 import { basisOf } from "./basis";
 import type { Suspect } from "./reading";
@@ -61,9 +61,20 @@ function parabolicHz(trace: Trace, i: number): number {
   return Number.isFinite(shift) ? at + Math.max(-h1, Math.min(h2, shift)) : at;
 }
 
+/** Whether a trace of the line's own detector has a level at a frequency in Hz. */
+function isDecided(traces: readonly Trace[], line: MaskLine, hz: number): boolean {
+  return traces.some((trace) => {
+    if (trace.kind === "spots" || basisOf(trace, line.detector) !== "like-for-like") return false;
+    const i = indexAtOrAfter(trace.axis, hz);
+    const near = (k: number) => !Number.isNaN(trace.levelsDb[k] ?? Number.NaN);
+    return frequencyAt(trace.axis, i) === hz ? near(i) : i > 0 && near(i - 1) && near(i);
+  });
+}
+
 /**
  * Suspects of traces in the mask's unit, lowest margin first: maxima of the wanted prominence,
  * one RBW or more from a stronger one, at most `marginDb` under the line with the least margin.
+ * Where the line's own detector was swept, an upper bound of another one is no suspect.
  */
 export function findSuspects(
   traces: readonly Trace[],
@@ -85,6 +96,7 @@ export function findSuspects(
       let found: (Suspect & { marginDb: number }) | null = null;
       for (const { line, basis } of lines) {
         const limitDb = limitAt(line, sampleHz);
+        if (basis === "upper-bound" && isDecided(traces, line, sampleHz)) continue;
         if (limitDb === null || (found && found.marginDb <= limitDb - levelDb)) continue;
         found = {
           number: 0,

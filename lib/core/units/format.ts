@@ -31,17 +31,21 @@ export function formatLevel(levelDb: number | null, unit: LevelUnit): string {
   return `${levelDb < 0 && Number(text) !== 0 ? MINUS : ""}${text} ${LEVEL_UNIT_LABELS[unit]}`;
 }
 
+const FREQUENCY_SCALES = [
+  [1e9, "GHz"],
+  [1e6, "MHz"],
+  [1e3, "kHz"],
+  [1, "Hz"],
+] as const;
+
 /** Frequency with four figures, or as many as the step in Hz resolves: "1.500 GHz", "88.32 MHz". */
 export function formatFrequency(frequencyHz: number, stepHz?: number): string {
-  const size = Math.abs(frequencyHz);
+  // What rounds up to a thousand of a unit is written in the next one: 999.96 MHz is 1.000 GHz.
+  const size = Math.max(Math.abs(frequencyHz), Math.abs(Number(frequencyHz.toPrecision(4))));
+  const rounds = stepHz === undefined || !(stepHz > 0) || stepHz >= size / 1000;
   const [scale, label] =
-    size >= 1e9
-      ? [1e9, "GHz"]
-      : size >= 1e6
-        ? [1e6, "MHz"]
-        : size >= 1e3
-          ? [1e3, "kHz"]
-          : [1, "Hz"];
+    FREQUENCY_SCALES.find(([factor]) => (rounds ? size : Math.abs(frequencyHz)) >= factor) ??
+    ([1, "Hz"] as const);
   const value = frequencyHz / scale;
   const whole = Math.max(1, Math.floor(Math.log10(Math.max(1, Math.abs(value)))) + 1);
   const byStep =

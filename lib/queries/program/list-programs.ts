@@ -22,15 +22,22 @@ export interface ProgramRow {
   nextMilestone: { name: string; dueOn: string; requiredMarginDb: number | null } | null;
 }
 
-/** How much room a program lacks against what it aims at: the riskiest has the least. */
+/** How much room a program has against what it aims at; below zero it is short. */
 function room(program: ProgramRow): number {
   const needed = Math.max(
     program.targetMarginDb,
     program.nextMilestone?.requiredMarginDb ?? Number.NEGATIVE_INFINITY,
   );
-  // Not knowing where a program stands is a risk of its own: after those over, before the rest.
-  if (!program.now) return 0;
-  return (program.now.marginDb ?? 0) - needed;
+  return (program.now?.marginDb ?? 0) - needed;
+}
+
+/**
+ * First those with a level over their mask, whatever they aim at. Not knowing where a program
+ * stands is a risk of its own: it comes next. The rest go by the room they have.
+ */
+function group(program: ProgramRow): number {
+  if (!program.now || program.now.marginDb === null) return 1;
+  return program.now.marginDb < 0 ? 0 : 2;
 }
 
 /** Programs of the team that are not archived, the riskiest first. `today` is an ISO date. */
@@ -79,5 +86,7 @@ export async function listPrograms(ctx: Context, today: string): Promise<Program
       };
     });
   });
-  return rows.sort((a, b) => room(a) - room(b) || a.name.localeCompare(b.name, "en"));
+  return rows.sort(
+    (a, b) => group(a) - group(b) || room(a) - room(b) || a.name.localeCompare(b.name, "en"),
+  );
 }

@@ -6,6 +6,7 @@ import type { Context } from "@/lib/auth/context";
 import type { Standing } from "@/lib/core/reading/reading";
 import type { Detector, Polarization, SweepPurpose } from "@/lib/core/sweep/settings";
 import { requirePermission } from "@/lib/commands/run";
+import { isId } from "../is-id";
 import { isNewestRevision } from "./newest-revision";
 import { worstOf } from "./worst-of";
 
@@ -98,6 +99,7 @@ async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
 }
 
 /** Sweeps of a build that are not archived, by step and date. */
-export function listBuildSweeps(ctx: Context, buildId: string): Promise<SweepRow[]> {
+export async function listBuildSweeps(ctx: Context, buildId: string): Promise<SweepRow[]> {
+  if (!isId(buildId)) return [];
   return selectSweeps(ctx, eq(sweeps.buildId, buildId));
 }

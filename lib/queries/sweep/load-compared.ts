@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray, isNull } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { benches, maskRevisions, readings, signalPathRevisions, sweeps, traces } from "@/db/schema";
 import type { ComparedSweep } from "@/lib/core/delta/compared-sweep";
@@ -58,7 +58,8 @@ export async function loadComparedSweeps(
         isNull(readings.notComparable),
         isNewestRevision(),
       ),
-    );
+    )
+    .orderBy(sql`${maskRevisions.content} ->> 'key'`, asc(readings.maskId));
   return rows.map((row) => {
     const own = traceRows.filter((trace) => trace.sweepId === row.id);
     return {

@@ -1,3 +1,4 @@
+import type { SQL } from "drizzle-orm";
 import { and, asc, desc, eq, isNull } from "drizzle-orm";
 import { inTeam } from "@/db/client";
 import { benches, builds, ladders, ladderSteps, programs, sweeps } from "@/db/schema";
@@ -57,7 +58,7 @@ export async function readImportPlace(ctx: Context, buildId: string, stepId: str
       .from(benches)
       .where(and(eq(benches.teamId, teamId), isNull(benches.archivedAt)))
       .orderBy(asc(benches.name));
-    const lastOf = (own: ReturnType<typeof and>) =>
+    const lastOf = (own?: SQL) =>
       tx
         .select({
           name: sweeps.name,
@@ -68,11 +69,20 @@ export async function readImportPlace(ctx: Context, buildId: string, stepId: str
           link: sweeps.link,
         })
         .from(sweeps)
-        .where(and(eq(sweeps.teamId, teamId), eq(sweeps.purpose, "product"), own))
+        .where(
+          and(
+            eq(sweeps.teamId, teamId),
+            eq(sweeps.buildId, buildId),
+            eq(sweeps.purpose, "product"),
+            // Put aside, maybe because of its tags: nothing to start from.
+            isNull(sweeps.archivedAt),
+            own,
+          ),
+        )
         .orderBy(desc(sweeps.createdAt))
         .limit(1);
     const [ofStep] = stepId === null ? [] : await lastOf(eq(sweeps.stepId, stepId));
-    const [ofBuild] = ofStep ? [] : await lastOf(eq(sweeps.buildId, buildId));
+    const [ofBuild] = ofStep ? [] : await lastOf();
     const last = ofStep
       ? { ...ofStep, from: "step" as const }
       : ofBuild

@@ -2,7 +2,7 @@ import { and, eq } from "drizzle-orm";
 import { inTeam } from "@/db/client";
 import { storedFiles, sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
-import { fileKey } from "@/lib/commands/file/store-file";
+import { fileKey, sha256Of } from "@/lib/commands/file/store-file";
 import { requirePermission } from "@/lib/commands/run";
 import { isId } from "../is-id";
 
@@ -30,5 +30,7 @@ export async function readOriginalFile(
   if (!file) return null;
   const bytes = await ctx.files.get(fileKey(ctx.teamId, file.sha256));
   if (!bytes) throw new Error(`The original file ${file.sha256} is missing from storage.`);
+  if (sha256Of(bytes) !== file.sha256)
+    throw new Error(`The original file ${file.sha256} has changed in storage.`);
   return { fileName: file.fileName, mediaType: file.mediaType, bytes };
 }

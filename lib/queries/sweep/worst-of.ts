@@ -2,20 +2,19 @@ import type { Standing } from "@/lib/core/reading/reading";
 
 const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
 
-/** The reading that decides among several: the worst standing, and in it the lowest margin. */
+/**
+ * What several readings say together: the worst standing and, independently, the lowest margin,
+ * whose reading is returned. A sweep of a narrow band is undecided for want of coverage, and must
+ * not hide a lower margin elsewhere. Only what is over is known by its own margins: a bound that
+ * reads lower still decides nothing.
+ */
 export function worstOf<T extends { standing: Standing; marginDb: number | null }>(
   readings: readonly T[],
 ): T | null {
-  const rank = (r: T) => WORST_FIRST.indexOf(r.standing);
+  const standing = WORST_FIRST.find((s) => readings.some((reading) => reading.standing === s));
+  if (standing === undefined) return null;
   const margin = (r: T) => r.marginDb ?? Number.POSITIVE_INFINITY;
-  let worst: T | null = null;
-  for (const reading of readings) {
-    if (
-      !worst ||
-      rank(reading) < rank(worst) ||
-      (rank(reading) === rank(worst) && margin(reading) < margin(worst))
-    )
-      worst = reading;
-  }
-  return worst;
+  const heard = standing === "over" ? readings.filter((r) => r.standing === "over") : readings;
+  const lowest = heard.reduce((a, b) => (margin(b) < margin(a) ? b : a));
+  return { ...lowest, standing };
 }

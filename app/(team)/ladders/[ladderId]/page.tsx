@@ -12,7 +12,7 @@ import { Section } from "@/components/ui/section";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { formatMargin } from "@/lib/core/units/format";
-import type { LadderDetail } from "@/lib/queries/ladder/read-ladder";
+import type { LadderDetail } from "@/lib/queries/ladder/load-ladder-steps";
 import { readLadder } from "@/lib/queries/ladder/read-ladder";
 import {
   appendStep,

@@ -1,6 +1,6 @@
 import type { OverlaySweep } from "@/components/ladders/overlay";
 import type { Mask } from "@/lib/core/mask/mask";
-import type { LadderDetail, LadderStep } from "@/lib/queries/ladder/read-ladder";
+import type { LadderDetail, LadderStep } from "@/lib/queries/ladder/load-ladder-steps";
 
 /** Product sweeps of the ladder with the trace that is drawn: their first one. */
 export function overlaySweeps(steps: LadderStep[]): OverlaySweep[] {

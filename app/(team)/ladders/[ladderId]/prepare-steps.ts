@@ -1,5 +1,5 @@
 import { formatMargin } from "@/lib/core/units/format";
-import type { LadderStep } from "@/lib/queries/ladder/read-ladder";
+import type { LadderStep } from "@/lib/queries/ladder/load-ladder-steps";
 import { worstOf } from "@/lib/queries/sweep/worst-of";
 
 /** The worst line of a step over its product sweeps, and where; null without a margin. */

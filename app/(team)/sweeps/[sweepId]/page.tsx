@@ -19,7 +19,7 @@ import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
 import { formatFrequency } from "@/lib/core/units/format";
-import type { SweepDetail } from "@/lib/queries/sweep/read-sweep";
+import type { SweepDetail } from "@/lib/queries/sweep/load-sweep-detail";
 import { readSweepDetail } from "@/lib/queries/sweep/read-sweep";
 import { worstOf } from "@/lib/queries/sweep/worst-of";
 import { chooseOnRecord, fetchBack, putAside } from "./actions";

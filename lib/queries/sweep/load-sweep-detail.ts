@@ -1,0 +1,108 @@
+import { and, asc, eq, sql } from "drizzle-orm";
+import type { Transaction } from "@/db/client";
+import {
+  benches,
+  builds,
+  ladders,
+  ladderSteps,
+  programs,
+  signalPathRevisions,
+  storedFiles,
+  sweeps,
+  traces,
+  users,
+} from "@/db/schema";
+import { listReadings } from "./list-readings";
+
+const DETAIL = {
+  id: sweeps.id,
+  name: sweeps.name,
+  fileName: sweeps.fileName,
+  purpose: sweeps.purpose,
+  measuredOn: sweeps.measuredOn,
+  corrected: sweeps.corrected,
+  settings: sweeps.settings,
+  link: sweeps.link,
+  guardDb: sweeps.guardDb,
+  notes: sweeps.notes,
+  onRecord: sweeps.onRecord,
+  archivedAt: sweeps.archivedAt,
+  importedAt: sweeps.createdAt,
+  importedBy: users.name,
+  benchId: sweeps.benchId,
+  benchName: benches.name,
+  benchSite: benches.site,
+  benchInstrument: benches.instrument,
+  pathRevision: signalPathRevisions.revision,
+  path: signalPathRevisions.content,
+  buildId: builds.id,
+  buildName: builds.name,
+  programId: programs.id,
+  programName: programs.name,
+  ladderId: ladders.id,
+  ladderName: ladders.name,
+  stepId: sweeps.stepId,
+  stepName: ladderSteps.name,
+  stepPosition: ladderSteps.position,
+  sha256: storedFiles.sha256,
+  sizeBytes: storedFiles.sizeBytes,
+};
+
+/** A sweep with its traces and readings, inside a unit of work of its team; null without one. */
+export async function loadSweepDetail(tx: Transaction, teamId: string, sweepId: string) {
+  const [sweep] = await tx
+    .select(DETAIL)
+    .from(sweeps)
+    .innerJoin(users, eq(users.id, sweeps.importedBy))
+    .innerJoin(benches, and(eq(benches.teamId, sweeps.teamId), eq(benches.id, sweeps.benchId)))
+    .innerJoin(
+      signalPathRevisions,
+      and(
+        eq(signalPathRevisions.teamId, sweeps.teamId),
+        eq(signalPathRevisions.id, sweeps.signalPathRevisionId),
+      ),
+    )
+    .innerJoin(
+      storedFiles,
+      and(eq(storedFiles.teamId, sweeps.teamId), eq(storedFiles.id, sweeps.fileId)),
+    )
+    .innerJoin(builds, and(eq(builds.teamId, sweeps.teamId), eq(builds.id, sweeps.buildId)))
+    .innerJoin(programs, and(eq(programs.teamId, builds.teamId), eq(programs.id, builds.programId)))
+    .leftJoin(
+      ladderSteps,
+      and(eq(ladderSteps.teamId, sweeps.teamId), eq(ladderSteps.id, sweeps.stepId)),
+    )
+    .leftJoin(
+      ladders,
+      and(eq(ladders.teamId, ladderSteps.teamId), eq(ladders.id, ladderSteps.ladderId)),
+    )
+    .where(and(eq(sweeps.teamId, teamId), eq(sweeps.id, sweepId)));
+  if (!sweep) return null;
+  const traceRows = await tx
+    .select()
+    .from(traces)
+    .where(and(eq(traces.teamId, teamId), eq(traces.sweepId, sweepId)))
+    .orderBy(asc(traces.position));
+  const ambient = await tx
+    .select({ id: sweeps.id, name: sweeps.name })
+    .from(sweeps)
+    .where(
+      and(
+        eq(sweeps.teamId, teamId),
+        eq(sweeps.benchId, sweep.benchId),
+        eq(sweeps.purpose, "ambient"),
+        sql`${sweeps.archivedAt} is null`,
+        sweep.measuredOn === null ? sql`false` : eq(sweeps.measuredOn, sweep.measuredOn),
+      ),
+    )
+    .orderBy(asc(sweeps.name));
+  const readings = await listReadings(tx, teamId, {
+    sweepId,
+    programId: sweep.programId,
+    ambientTaken: ambient.length > 0,
+    port: sweep.settings.port,
+  });
+  return { ...sweep, traces: traceRows, ambient, readings };
+}
+
+export type SweepDetail = NonNullable<Awaited<ReturnType<typeof loadSweepDetail>>>;

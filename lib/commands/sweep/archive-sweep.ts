@@ -3,6 +3,7 @@ import { sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { lockSweep } from "./lock-sweep";
 import { sweepIdSchema } from "./schemas";
 
 /** Puts a sweep aside: it leaves lists, deltas and the line of record, and can be fetched back. */
@@ -10,12 +11,12 @@ export async function archiveSweep(ctx: Context, input: unknown): Promise<{ swee
   requirePermission(ctx, "sweep.write");
   const { sweepId } = parseInput(sweepIdSchema, input);
   return change(ctx, async (tx, audit) => {
-    const [row] = await tx
+    const sweep = await lockSweep(tx, ctx.teamId, sweepId);
+    if (sweep.archivedAt) throw new CommandError("conflict", "This sweep is archived already.");
+    await tx
       .update(sweeps)
       .set({ archivedAt: new Date(), onRecord: false })
-      .where(and(eq(sweeps.teamId, ctx.teamId), eq(sweeps.id, sweepId)))
-      .returning({ id: sweeps.id });
-    if (!row) throw new CommandError("not-found", "This sweep does not exist.");
+      .where(and(eq(sweeps.teamId, ctx.teamId), eq(sweeps.id, sweepId)));
     await audit({ action: "sweep.archive", subjectType: "sweep", subjectId: sweepId });
     return { sweepId };
   });

@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull } from "drizzle-orm";
+import { and, desc, eq, isNull, sql } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { builds, programs, storedFiles, sweeps } from "@/db/schema";
 
@@ -33,4 +33,9 @@ export function findSameFile(tx: Transaction, teamId: string, sha256: string): P
       ),
     )
     .orderBy(desc(sweeps.createdAt));
+}
+
+/** Lets one import of the same bytes at a time see whether they are here already. */
+export async function holdFile(tx: Transaction, teamId: string, sha256: string): Promise<void> {
+  await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${teamId + sha256}, 0))`);
 }

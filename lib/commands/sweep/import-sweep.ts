@@ -11,7 +11,7 @@ import { sha256Of, storeFile } from "../file/store-file";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
 import { findBench, findBuild } from "./find-place";
-import { findSameFile } from "./find-same-file";
+import { findSameFile, holdFile } from "./find-same-file";
 import { listProgramMasks } from "./list-program-masks";
 import { overdueOn } from "./overdue";
 import type { ImportSweepInput } from "./schemas";
@@ -65,7 +65,9 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
   return change(ctx, async (tx, audit) => {
     const { programId } = await findBuild(tx, teamId, values.buildId, values.stepId);
     const bench = await findBench(tx, teamId, values.benchId);
-    const [same] = await findSameFile(tx, teamId, sha256Of(values.bytes));
+    const fileHash = sha256Of(values.bytes);
+    await holdFile(tx, teamId, fileHash);
+    const [same] = await findSameFile(tx, teamId, fileHash);
     if (same && !values.again) {
       const where = `${same.name} on ${same.programName} ${same.buildName}`;
       throw new CommandError("conflict", `This file is here already, as ${where}.`, {

@@ -23,6 +23,9 @@ export interface SweepToRead {
   overdueTransducers: string[];
 }
 
+/** A statement takes at most 65,535 values, and a noisy sweep can have more suspects than that. */
+const SUSPECTS_AT_ONCE = 1000;
+
 /** Holds a sweep against one mask revision and keeps the reading with its suspects. */
 export async function storeReading(
   tx: Transaction,
@@ -55,14 +58,15 @@ export async function storeReading(
     })
     .returning({ id: readings.id });
   if (!row) throw new Error("The reading was not stored.");
-  if (found.length === 0) return reading;
-  await tx.insert(suspects).values(
-    found.map(({ traceIndex, ...suspect }) => ({
-      teamId,
-      readingId: row.id,
-      tracePosition: traceIndex,
-      ...suspect,
-    })),
-  );
+  for (let from = 0; from < found.length; from += SUSPECTS_AT_ONCE) {
+    await tx.insert(suspects).values(
+      found.slice(from, from + SUSPECTS_AT_ONCE).map(({ traceIndex, ...suspect }) => ({
+        teamId,
+        readingId: row.id,
+        tracePosition: traceIndex,
+        ...suspect,
+      })),
+    );
+  }
   return reading;
 }

@@ -1,12 +1,14 @@
 import { z } from "zod";
+import { isStorableText, NOT_STORABLE } from "../mask/storable-text";
 
-const name = z
-  .string()
+const storable = z.string().refine(isStorableText, NOT_STORABLE);
+
+const name = storable
   .trim()
   .min(1, "Give it a name.")
   .max(80, "Keep the name under 80 characters.");
-const notes = z.string().trim().max(4000, "Keep the notes under 4,000 characters.");
-const description = z.string().trim().max(1000, "Keep the description under 1,000 characters.");
+const notes = storable.trim().max(4000, "Keep the notes under 4,000 characters.");
+const description = storable.trim().max(1000, "Keep the description under 1,000 characters.");
 
 export const createLadderSchema = z.object({
   buildId: z.uuid("Choose a build."),

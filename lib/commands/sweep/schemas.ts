@@ -16,6 +16,9 @@ import {
   TRACE_KINDS,
 } from "@/lib/core/sweep/settings";
 import { LEVEL_UNITS, LINEAR_UNITS } from "@/lib/core/units/level-units";
+import { isStorableText, NOT_STORABLE } from "../mask/storable-text";
+
+const storable = z.string().refine(isStorableText, NOT_STORABLE);
 
 const numberOrNull = (what: string) => z.number(`State ${what} as a number, or leave it empty.`);
 const positive = (what: string) =>
@@ -54,7 +57,7 @@ export const linkSettingsSchema = z.object({
     .positive("Pattern length is at least one bit.")
     .nullable(),
   scrambler: z.enum(SCRAMBLERS).nullable(),
-  scramblerPolynomial: z.string().trim().max(120, "Keep it under 120 characters.").nullable(),
+  scramblerPolynomial: storable.trim().max(120, "Keep it under 120 characters.").nullable(),
   scramblerRestartBits: z
     .int("The restart period is a whole number of bits.")
     .positive("The restart period is at least one bit.")
@@ -63,7 +66,7 @@ export const linkSettingsSchema = z.object({
   spread: spreadSchema.nullable(),
   spreadOff: z.boolean().nullable(),
   edgeTimeS: positive("the edge time").nullable(),
-  cable: z.string().trim().max(200, "Keep it under 200 characters.").nullable(),
+  cable: storable.trim().max(200, "Keep it under 200 characters.").nullable(),
 });
 
 const fileUnit = z.enum([...LEVEL_UNITS, ...LINEAR_UNITS]);
@@ -80,7 +83,7 @@ export const answersSchema = z.object({
     .array(
       z.object({
         column: z.int().min(0),
-        name: z.string().trim().max(80).optional(),
+        name: storable.trim().max(80).optional(),
         unit: fileUnit.optional(),
         detector: z.enum(DETECTORS).optional(),
         hold: z.enum(HOLDS).optional(),
@@ -101,7 +104,7 @@ export const fileSchema = z
     "The file is larger than 60 MB. Export fewer traces or a narrower span.",
   );
 
-const fileName = z.string().trim().min(1, "The file has no name.").max(255);
+const fileName = storable.trim().min(1, "The file has no name.").max(255);
 
 export const previewFileSchema = z.object({
   fileName,
@@ -116,17 +119,19 @@ export const importSweepSchema = z.object({
   fileName,
   bytes: fileSchema,
   answers: answersSchema,
-  name: z
-    .string()
+  name: storable
     .trim()
     .min(1, "Give the sweep a name.")
     .max(120, "Keep the name under 120 characters."),
   purpose: z.enum(SWEEP_PURPOSES, "Choose what the sweep shows."),
-  measuredOn: z.iso.date("Write the date as year-month-day, for example 2026-03-31.").nullable(),
+  measuredOn: z.iso
+    .date("Write the date as year-month-day, for example 2026-03-31.")
+    .refine((day) => day >= "1950", "No sweep of this product is older than 1950.")
+    .nullable(),
   corrected: z.boolean(),
   settings: measurementSettingsSchema,
   link: linkSettingsSchema,
-  notes: z.string().trim().max(4000, "Keep the notes under 4,000 characters."),
+  notes: storable.trim().max(4000, "Keep the notes under 4,000 characters."),
   onRecord: z.boolean(),
   /** Import the same bytes once more on purpose. */
   again: z.boolean(),

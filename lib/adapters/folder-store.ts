@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import { mkdir, readFile, rename, stat, writeFile } from "node:fs/promises";
+import { mkdir, readFile, rename, rm, stat, writeFile } from "node:fs/promises";
 import { dirname, join, resolve } from "node:path";
 import type { FileStore } from "@/lib/auth/context";
 
@@ -24,8 +24,14 @@ export function folderStore(
       if (await exists(path)) return;
       await mkdir(dirname(path), { recursive: true });
       const draft = `${path}.${randomUUID()}`;
-      await writeFile(draft, bytes);
-      await rename(draft, path);
+      try {
+        // Flushed before it gets its name: after a power cut a short file would be kept for good.
+        await writeFile(draft, bytes, { flush: true });
+        await rename(draft, path);
+      } catch (error) {
+        await rm(draft, { force: true });
+        throw error;
+      }
     },
     get: async (key) => {
       try {

@@ -32,9 +32,14 @@ export function defineRoute<P>(
 /** Headers that hand a file over under its own name (RFC 6266), never to be run in the page. */
 export function attachment(fileName: string, mediaType: string): Record<string, string> {
   const plain = fileName.replace(/[^\x20-\x7e]|["\\]/g, "_");
+  // encodeURIComponent leaves these, and RFC 8187 has the apostrophe as a mark of its own.
+  const coded = encodeURIComponent(fileName).replace(
+    /['()*]/g,
+    (mark) => `%${mark.charCodeAt(0).toString(16).toUpperCase()}`,
+  );
   return {
     "content-type": mediaType,
-    "content-disposition": `attachment; filename="${plain}"; filename*=UTF-8''${encodeURIComponent(fileName)}`,
+    "content-disposition": `attachment; filename="${plain}"; filename*=UTF-8''${coded}`,
     "x-content-type-options": "nosniff",
     "cache-control": "private, no-store",
   };

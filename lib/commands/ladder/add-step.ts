@@ -1,8 +1,8 @@
-import { and, eq, isNull, max } from "drizzle-orm";
-import { ladders, ladderSteps } from "@/db/schema";
+import { and, eq, max } from "drizzle-orm";
+import { ladderSteps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
-import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { lockOpenLadder } from "./lock-ladder";
 import { addStepSchema } from "./schemas";
 
 /** Adds a step after the last one of its ladder. */
@@ -12,18 +12,7 @@ export async function addStep(ctx: Context, input: unknown): Promise<{ stepId: s
   const { teamId } = ctx;
   return change(ctx, async (tx, audit) => {
     // The lock keeps two steps added at once from taking the same place.
-    const [ladder] = await tx
-      .select({ id: ladders.id })
-      .from(ladders)
-      .where(
-        and(
-          eq(ladders.teamId, teamId),
-          eq(ladders.id, values.ladderId),
-          isNull(ladders.archivedAt),
-        ),
-      )
-      .for("update");
-    if (!ladder) throw new CommandError("not-found", "This ladder does not exist or is archived.");
+    const ladder = await lockOpenLadder(tx, teamId, values.ladderId);
     const [last] = await tx
       .select({ position: max(ladderSteps.position) })
       .from(ladderSteps)

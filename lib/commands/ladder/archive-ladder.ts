@@ -3,18 +3,19 @@ import { ladders } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { lockLadder } from "./lock-ladder";
 import { ladderIdSchema } from "./schemas";
 
 export async function archiveLadder(ctx: Context, input: unknown): Promise<{ ladderId: string }> {
   requirePermission(ctx, "sweep.write");
   const { ladderId } = parseInput(ladderIdSchema, input);
   return change(ctx, async (tx, audit) => {
-    const [row] = await tx
+    const ladder = await lockLadder(tx, ctx.teamId, ladderId);
+    if (ladder.archivedAt) throw new CommandError("conflict", "This ladder is archived already.");
+    await tx
       .update(ladders)
       .set({ archivedAt: new Date() })
-      .where(and(eq(ladders.teamId, ctx.teamId), eq(ladders.id, ladderId)))
-      .returning({ id: ladders.id });
-    if (!row) throw new CommandError("not-found", "This ladder does not exist.");
+      .where(and(eq(ladders.teamId, ctx.teamId), eq(ladders.id, ladderId)));
     await audit({ action: "ladder.archive", subjectType: "ladder", subjectId: ladderId });
     return { ladderId };
   });

@@ -3,6 +3,7 @@ import { ladders } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, isDuplicate, parseInput, requirePermission } from "../run";
+import { lockOpenLadder } from "./lock-ladder";
 import { editLadderSchema } from "./schemas";
 
 export async function editLadder(ctx: Context, input: unknown): Promise<{ ladderId: string }> {
@@ -10,12 +11,11 @@ export async function editLadder(ctx: Context, input: unknown): Promise<{ ladder
   const { ladderId, ...values } = parseInput(editLadderSchema, input);
   try {
     return await change(ctx, async (tx, audit) => {
-      const [row] = await tx
+      await lockOpenLadder(tx, ctx.teamId, ladderId);
+      await tx
         .update(ladders)
         .set(values)
-        .where(and(eq(ladders.teamId, ctx.teamId), eq(ladders.id, ladderId)))
-        .returning({ id: ladders.id });
-      if (!row) throw new CommandError("not-found", "This ladder does not exist.");
+        .where(and(eq(ladders.teamId, ctx.teamId), eq(ladders.id, ladderId)));
       await audit({
         action: "ladder.edit",
         subjectType: "ladder",

@@ -3,6 +3,7 @@ import { ladderSteps, sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { lockStep } from "./lock-ladder";
 import { stepIdSchema } from "./schemas";
 
 /** Takes away the last step of a ladder while it has no sweeps; sweeps are never lost. */
@@ -11,9 +12,7 @@ export async function removeStep(ctx: Context, input: unknown): Promise<{ stepId
   const { stepId } = parseInput(stepIdSchema, input);
   const { teamId } = ctx;
   return change(ctx, async (tx, audit) => {
-    const own = and(eq(ladderSteps.teamId, teamId), eq(ladderSteps.id, stepId));
-    const [step] = await tx.select().from(ladderSteps).where(own).for("update");
-    if (!step) throw new CommandError("not-found", "This step does not exist.");
+    const step = await lockStep(tx, teamId, stepId);
     const [held] = await tx
       .select({ sweeps: count() })
       .from(sweeps)
@@ -35,7 +34,9 @@ export async function removeStep(ctx: Context, input: unknown): Promise<{ stepId
     if (later || step.position === 0) {
       throw new CommandError("conflict", "Only the last step of a ladder can be taken away.");
     }
-    await tx.delete(ladderSteps).where(own);
+    await tx
+      .delete(ladderSteps)
+      .where(and(eq(ladderSteps.teamId, teamId), eq(ladderSteps.id, stepId)));
     await audit({
       action: "step.remove",
       subjectType: "step",

@@ -1,6 +1,7 @@
 import { and, eq, inArray, isNull } from "drizzle-orm";
 import { ladderSteps, sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
+import { lockStep } from "../ladder/lock-ladder";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
 import { recordStepSchema } from "./schemas";
@@ -14,11 +15,7 @@ export async function recordStep(ctx: Context, input: unknown): Promise<{ sweeps
   const { stepId } = parseInput(recordStepSchema, input);
   const { teamId } = ctx;
   return change(ctx, async (tx, audit) => {
-    const [step] = await tx
-      .select({ ladderId: ladderSteps.ladderId })
-      .from(ladderSteps)
-      .where(and(eq(ladderSteps.teamId, teamId), eq(ladderSteps.id, stepId)));
-    if (!step) throw new CommandError("not-found", "This step does not exist.");
+    const step = await lockStep(tx, teamId, stepId);
     const siblings = tx
       .select({ id: ladderSteps.id })
       .from(ladderSteps)

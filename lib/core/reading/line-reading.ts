@@ -1,9 +1,17 @@
-import { limitAt, lineRanges } from "../mask/limit-at";
+import { lineRanges } from "../mask/limit-at";
 import type { MaskLine } from "../mask/mask";
-import { frequencyAt, indexAtOrAfter, medianStepHz, pointCount } from "../sweep/axis";
+import { frequencyAt, medianStepHz, pointCount } from "../sweep/axis";
 import type { Trace } from "../sweep/trace";
 import { basisOf, tightness } from "./basis";
 import { coverageOf, coveredRanges, inRanges, mergeRanges } from "./coverage";
+import {
+  holdAgainst,
+  joinPoints,
+  lowestPoint,
+  mergeHighest,
+  overMaxima,
+  type MarginPoints,
+} from "./margin-points";
 import type {
   Basis,
   FrequencyRange,
@@ -20,37 +28,12 @@ interface Usable {
   rank: number;
 }
 
-interface Deciding extends MarginPoint {
-  basis: Basis;
-}
-
-/** Every sample of a trace under or over the line, in ascending frequency. */
-function marginPoints(used: Usable, line: MaskLine): Deciding[] {
-  const { axis, levelsDb } = used.trace;
-  const count = Math.min(pointCount(axis), levelsDb.length);
-  const points: Deciding[] = [];
-  for (const range of lineRanges(line)) {
-    for (let i = indexAtOrAfter(axis, range.startHz); i < count; i += 1) {
-      const frequencyHz = frequencyAt(axis, i);
-      if (frequencyHz > range.stopHz) break;
-      const levelDb = levelsDb[i] ?? Number.NaN;
-      const limitDb = limitAt(line, frequencyHz);
-      if (limitDb === null || !Number.isFinite(levelDb)) continue;
-      points.push({
-        frequencyHz,
-        levelDb,
-        limitDb,
-        marginDb: limitDb - levelDb,
-        traceIndex: used.traceIndex,
-        basis: used.basis,
-      });
-    }
-  }
-  return points;
-}
-
 /** Where tighter traces speak, so that a looser bound is not heard. */
-function tighterRanges(used: Usable, all: readonly Usable[], rbwHz: number): FrequencyRange[] {
+function tighterRanges(
+  used: Pick<Usable, "trace" | "rank">,
+  all: readonly Usable[],
+  rbwHz: number,
+): FrequencyRange[] {
   const step = medianStepHz(used.trace.axis);
   const reach = Math.max(rbwHz, Number.isFinite(step) ? step : 0);
   return mergeRanges(
@@ -66,44 +49,13 @@ function tighterRanges(used: Usable, all: readonly Usable[], rbwHz: number): Fre
   );
 }
 
-/**
- * The highest of bounds that are equally tight at the same frequency: two peak traces may be two
- * polarizations or heights, and the line has to hold in the worse of them.
- */
-function highestBounds(bounds: readonly Deciding[]): Deciding[] {
-  const byFrequency = new Map<number, Deciding>();
-  for (const point of bounds) {
-    const known = byFrequency.get(point.frequencyHz);
-    if (!known || point.levelDb > known.levelDb) byFrequency.set(point.frequencyHz, point);
-  }
-  return [...byFrequency.values()].sort((a, b) => a.frequencyHz - b.frequencyHz);
-}
-
-/** One point per local maximum over the limit, equal neighbours counted once. */
-function overMaxima(bounds: readonly Deciding[]): Deciding[] {
-  return bounds.filter((point, i) => {
-    if (point.marginDb >= 0) return false;
-    const before = bounds[i - 1];
-    const after = bounds[i + 1];
-    const risesBefore = !before || before.marginDb > point.marginDb;
-    return risesBefore && (!after || after.marginDb >= point.marginDb);
-  });
-}
-
-function worstOf(points: readonly Deciding[]): Deciding | null {
-  let worst: Deciding | null = null;
-  for (const point of points) if (!worst || point.marginDb < worst.marginDb) worst = point;
-  return worst;
-}
-
 function standingOf(
-  points: readonly Deciding[],
-  worst: Deciding | null,
+  worstOwn: MarginPoint | null,
+  worst: MarginPoint | null,
   fraction: number,
   guardDb: number,
 ): { standing: Standing; explanation: string | null } {
-  if (points.some((p) => p.basis === "like-for-like" && p.marginDb < 0))
-    return { standing: "over", explanation: null };
+  if (worstOwn && worstOwn.marginDb < 0) return { standing: "over", explanation: null };
   if (!worst)
     return {
       standing: "undecided",
@@ -142,44 +94,48 @@ export function readLine(
       return { trace, traceIndex, basis, rank: tightness(trace.detector) };
     })
     .filter((used) => used.basis !== "cannot-decide");
-  const own: Deciding[] = [];
-  const boundsByRank = new Map<number, Deciding[]>();
-  for (const used of usable) {
-    const points = marginPoints(used, line);
-    if (used.basis === "like-for-like") {
-      for (const point of points) own.push(point);
+  const own: MarginPoints[] = [];
+  const boundsByRank = new Map<number, MarginPoints>();
+  for (const { trace, traceIndex, basis, rank } of usable) {
+    if (basis === "like-for-like") {
+      own.push(holdAgainst(trace, traceIndex, line, () => true));
       continue;
     }
-    const silent = tighterRanges(used, usable, rbwHz);
-    const kept = boundsByRank.get(used.rank) ?? [];
-    for (const point of points) if (!inRanges(silent, point.frequencyHz)) kept.push(point);
-    boundsByRank.set(used.rank, kept);
+    const silent = tighterRanges({ trace, rank }, usable, rbwHz);
+    const isHeard = (hz: number) => !inRanges(silent, hz);
+    const points = holdAgainst(trace, traceIndex, line, isHeard);
+    const known = boundsByRank.get(rank);
+    // The highest of bounds that are equally tight: two peak traces may be two polarizations or
+    // heights, and the line has to hold in the worse of them.
+    boundsByRank.set(rank, known ? mergeHighest(known, points) : points);
   }
-  const bounds = [...boundsByRank.values()].flatMap(highestBounds);
-  const points = own.concat(bounds);
-  const worst = worstOf(points);
+  const bounds = joinPoints([...boundsByRank.values()]);
+  const worstOwn = lowestPoint(joinPoints(own));
+  const worstBound = lowestPoint(bounds);
+  const isBound = worstBound !== null && !(worstOwn && worstOwn.marginDb <= worstBound.marginDb);
+  const worst = isBound ? worstBound : worstOwn;
+  const basis: Basis = isBound ? "upper-bound" : "like-for-like";
   const coverage = coverageOf(
     lineRanges(line),
     usable.map((used) => used.trace),
   );
-  const { standing, explanation } = standingOf(points, worst, coverage.fraction, guardDb);
-  const remeasure = overMaxima(bounds).map((point) => ({
-    frequencyHz: point.frequencyHz,
+  const { standing, explanation } = standingOf(worstOwn, worst, coverage.fraction, guardDb);
+  const remeasure = overMaxima(bounds).map((i) => ({
+    frequencyHz: bounds.frequenciesHz[i] ?? Number.NaN,
     detector: line.detector,
     rbwHz: line.rbwHz,
     lineName: line.name,
-    boundDb: point.levelDb,
-    limitDb: point.limitDb,
+    boundDb: bounds.levelsDb[i] ?? Number.NaN,
+    limitDb: bounds.limitsDb[i] ?? Number.NaN,
   }));
-  const { basis, ...point } = worst ?? { basis: "cannot-decide" as const };
   return {
     reading: {
       lineIndex,
       name: line.name,
       detector: line.detector,
-      basis,
+      basis: worst ? basis : "cannot-decide",
       standing,
-      worst: worst ? (point as MarginPoint) : null,
+      worst,
       coverage,
       explanation,
     },

@@ -15,6 +15,19 @@ function localStepHz(axis: FrequencyAxis, i: number): number {
   return median(steps);
 }
 
+/** Whether the spacing after point i is no gap: at most twice the median of those around it. */
+function isJoined(axis: FrequencyAxis, i: number): boolean {
+  if (axis.kind === "regular") return true;
+  const gap = frequencyAt(axis, i + 1) - frequencyAt(axis, i);
+  const from = Math.max(0, i - NEIGHBOURS);
+  const to = Math.min(pointCount(axis) - 2, i + NEIGHBOURS);
+  let wide = 0;
+  for (let k = from; k <= to; k += 1)
+    if (2 * (frequencyAt(axis, k + 1) - frequencyAt(axis, k)) >= gap) wide += 1;
+  // With more than half of them wide enough so is their median, without sorting them.
+  return 2 * wide > to - from + 1 || gap <= 2 * localStepHz(axis, i);
+}
+
 /** Ranges merged and in ascending order. */
 export function mergeRanges(ranges: readonly FrequencyRange[]): FrequencyRange[] {
   const merged: FrequencyRange[] = [];
@@ -54,12 +67,7 @@ export function coveredRanges(trace: Trace): FrequencyRange[] {
     const hz = frequencyAt(axis, i);
     if (!covered(i)) continue;
     if (startHz === null) startHz = i === 0 ? hz - localStepHz(axis, 0) / 2 : hz;
-    const gap = frequencyAt(axis, i + 1) - hz;
-    const joined =
-      i + 1 < count &&
-      covered(i + 1) &&
-      (axis.kind === "regular" || gap <= 2 * localStepHz(axis, i));
-    if (joined) continue;
+    if (i + 1 < count && covered(i + 1) && isJoined(axis, i)) continue;
     const stopHz = i === count - 1 ? hz + localStepHz(axis, Math.max(0, i - 1)) / 2 : hz;
     if (stopHz > startHz) ranges.push({ startHz, stopHz });
     startHz = null;

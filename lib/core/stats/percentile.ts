@@ -1,6 +1,12 @@
 /** Percentile (0…100) of the finite values, linear between ranks; NaN when there are none. */
 export function percentile(values: ArrayLike<number>, percent: number): number {
-  const sorted = Float64Array.from(values).filter(Number.isFinite).sort();
+  const finite = new Float64Array(values.length);
+  let count = 0;
+  for (let i = 0; i < values.length; i += 1) {
+    const value = values[i] ?? Number.NaN;
+    if (Number.isFinite(value)) finite[count++] = value;
+  }
+  const sorted = finite.subarray(0, count).sort();
   if (sorted.length === 0) return Number.NaN;
   const rank = ((sorted.length - 1) * percent) / 100;
   const low = Math.floor(rank);

@@ -16,7 +16,8 @@ export interface PyramidLevel {
 
 /** The trace itself as the level below the first: one sample per entry. */
 export function bottomLevel(levelsDb: Float32Array, firstIndex = 0): PyramidLevel {
-  const maxAt = Uint32Array.from(levelsDb, (_, i) => firstIndex + i);
+  const maxAt = new Uint32Array(levelsDb.length);
+  for (let i = 0; i < maxAt.length; i += 1) maxAt[i] = firstIndex + i;
   return { samplesPerEntry: 1, minDb: levelsDb, maxDb: levelsDb, maxAt };
 }
 

@@ -1,10 +1,12 @@
 import { sql } from "drizzle-orm";
 import { drizzle } from "drizzle-orm/node-postgres";
-import type { NodePgDatabase } from "drizzle-orm/node-postgres";
+import type { NodePgQueryResultHKT } from "drizzle-orm/node-postgres";
+import type { PgDatabase } from "drizzle-orm/pg-core";
 import { Pool } from "pg";
 import * as schema from "./schema";
 
-export type Database = NodePgDatabase<typeof schema>;
+/** A connection or a transaction: inside a transaction a unit of work is a savepoint of it. */
+export type Database = PgDatabase<NodePgQueryResultHKT, typeof schema>;
 export type Transaction = Parameters<Parameters<Database["transaction"]>[0]>[0];
 
 /** Opens a pool; the caller ends it. */

@@ -2,6 +2,7 @@ import { fileURLToPath } from "node:url";
 import { drizzle } from "drizzle-orm/node-postgres";
 import { migrate } from "drizzle-orm/node-postgres/migrator";
 import { Client } from "pg";
+import { updateShippedMasks } from "./update-shipped-masks";
 
 /** Creates the app's role when missing, sets its password, and applies what is new in `drizzle/`. */
 async function migrateDatabase(ownerUrl: string, appPassword: string): Promise<void> {
@@ -28,4 +29,5 @@ if (!ownerUrl || !appPassword) {
   process.exitCode = 1;
 } else {
   await migrateDatabase(ownerUrl, appPassword);
+  await updateShippedMasks(ownerUrl);
 }

@@ -4,14 +4,38 @@ interface DemoBuild {
   name: string;
   builtOn: string;
   notes: string;
+  clocks: { name: string; frequencyHz: number; tolerancePpm: number | null }[];
+}
+
+interface DemoProgram {
+  name: string;
+  description: string;
+  targetMarginDb: number;
+  /** Keys of shipped masks. */
+  masks: string[];
+  milestones: { name: string; dueOn: string; requiredMarginDb: number | null }[];
+  builds: DemoBuild[];
 }
 
 export interface DemoTeam {
   name: string;
   domain: string;
   people: { name: string; role: Role }[];
-  programs: { name: string; description: string; targetMarginDb: number; builds: DemoBuild[] }[];
+  programs: DemoProgram[];
 }
+
+const RADIATED = ["cispr-32-radiated-class-b-3m", "cispr-32-above-1ghz-class-b-3m"];
+
+const gannetClocks = [
+  { name: "Link bit rate", frequencyHz: 3.2e9, tolerancePpm: 50 },
+  { name: "Reference oscillator", frequencyHz: 25e6, tolerancePpm: 50 },
+  { name: "Supply converter", frequencyHz: 2.1e6, tolerancePpm: 100_000 },
+];
+const ploverClocks = [
+  { name: "Link bit rate", frequencyHz: 6e9, tolerancePpm: 50 },
+  { name: "Reference oscillator", frequencyHz: 25e6, tolerancePpm: 50 },
+];
+const ternClocks = [{ name: "Reference oscillator", frequencyHz: 25e6, tolerancePpm: 100 }];
 
 /** The invented teams of the demo. The second one is there to see that teams see nothing of each other. */
 export const DEMO_TEAMS: DemoTeam[] = [
@@ -29,26 +53,70 @@ export const DEMO_TEAMS: DemoTeam[] = [
         name: "Gannet",
         description: "Docking camera head on a 3.2 Gb/s coax link",
         targetMarginDb: 6,
+        masks: RADIATED,
+        milestones: [
+          { name: "Design freeze", dueOn: "2026-11-02", requiredMarginDb: 3 },
+          { name: "Chamber days at the lab", dueOn: "2027-01-18", requiredMarginDb: 6 },
+        ],
         builds: [
-          { name: "G1", builtOn: "2026-05-11", notes: "First boards, link at rest pattern" },
-          { name: "G2", builtOn: "2026-07-20", notes: "Scrambler on in the link firmware" },
-          { name: "G3", builtOn: "2026-09-28", notes: "New connector shell and cable clamp" },
+          {
+            name: "G1",
+            builtOn: "2026-05-11",
+            notes: "First boards, link at rest pattern",
+            clocks: gannetClocks,
+          },
+          {
+            name: "G2",
+            builtOn: "2026-07-20",
+            notes: "Scrambler on in the link firmware",
+            clocks: gannetClocks,
+          },
+          {
+            name: "G3",
+            builtOn: "2026-09-28",
+            notes: "New connector shell and cable clamp",
+            clocks: gannetClocks,
+          },
         ],
       },
       {
         name: "Plover",
         description: "Wheelhouse display on a 6 Gb/s twisted-pair link",
         targetMarginDb: 4,
+        masks: RADIATED,
+        milestones: [
+          { name: "Pilot build", dueOn: "2026-12-14", requiredMarginDb: 3 },
+          { name: "Chamber days at the lab", dueOn: "2027-03-08", requiredMarginDb: 4 },
+        ],
         builds: [
-          { name: "P1", builtOn: "2026-06-08", notes: "Evaluation boards in a sheet-metal box" },
-          { name: "P2", builtOn: "2026-10-12", notes: "Die-cast housing, spread clock option" },
+          {
+            name: "P1",
+            builtOn: "2026-06-08",
+            notes: "Evaluation boards in a sheet-metal box",
+            clocks: ploverClocks,
+          },
+          {
+            name: "P2",
+            builtOn: "2026-10-12",
+            notes: "Die-cast housing, spread clock option",
+            clocks: ploverClocks,
+          },
         ],
       },
       {
         name: "Tern",
         description: "Sonar repeater with a link along the mast",
         targetMarginDb: 3,
-        builds: [{ name: "T1", builtOn: "2026-08-17", notes: "Bench sample without housing" }],
+        masks: [...RADIATED, "iec-60945-radiated-3m"],
+        milestones: [{ name: "Second sample", dueOn: "2027-02-01", requiredMarginDb: null }],
+        builds: [
+          {
+            name: "T1",
+            builtOn: "2026-08-17",
+            notes: "Bench sample without housing",
+            clocks: ternClocks,
+          },
+        ],
       },
     ],
   },
@@ -61,7 +129,9 @@ export const DEMO_TEAMS: DemoTeam[] = [
         name: "Sluice",
         description: "Gate level recorder",
         targetMarginDb: 5,
-        builds: [{ name: "S1", builtOn: "2026-09-01", notes: "" }],
+        masks: [],
+        milestones: [],
+        builds: [{ name: "S1", builtOn: "2026-09-01", notes: "", clocks: [] }],
       },
     ],
   },

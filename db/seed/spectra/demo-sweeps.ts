@@ -106,10 +106,13 @@ function sweepOf(
   };
 }
 
-/** Below 1 GHz quasi-peak takes long: only the first and the last step were swept with it. */
-function detectorsOf(bench: DemoBench, endOfLadder: boolean): SeedDetector[] {
+/**
+ * Plover's first build was swept with the peak detector alone, as a quick look is: what lies over
+ * the mask there is an upper bound and stays undecided.
+ */
+function detectorsOf(bench: DemoBench, buildName: BuildName): SeedDetector[] {
   if (bench.key === "above-1-ghz") return ["peak", "average"];
-  return endOfLadder ? ["peak", "quasi-peak"] : ["peak"];
+  return buildName === "P1" ? ["peak"] : ["peak", "quasi-peak"];
 }
 
 function ladderOf(story: StoryLadder): DemoLadder {
@@ -117,13 +120,16 @@ function ladderOf(story: StoryLadder): DemoLadder {
   const off = { product: null, link: null, treatments: [] };
   const firstDay = story.steps[0]?.measuredOn ?? "";
   const background = DEMO_BENCHES.map((bench) =>
-    sweepOf(story, bench, "ambient", firstDay, detectorsOf(bench, false), { ...off, ambient }),
+    sweepOf(story, bench, "ambient", firstDay, detectorsOf(bench, story.buildName), {
+      ...off,
+      ambient,
+    }),
   );
   // The floor belongs to the benches, not to a build: taken once, with the first build.
   if (story.buildName === "G1")
     for (const bench of DEMO_BENCHES)
       background.push(
-        sweepOf(story, bench, "input terminated", firstDay, detectorsOf(bench, false), {
+        sweepOf(story, bench, "input terminated", firstDay, detectorsOf(bench, story.buildName), {
           ...off,
           ambient: null,
         }),
@@ -139,7 +145,7 @@ function ladderOf(story: StoryLadder): DemoLadder {
         bench,
         `step ${i} ${step.name}`,
         step.measuredOn,
-        detectorsOf(bench, i === 0 || i === story.steps.length - 1),
+        detectorsOf(bench, story.buildName),
         { product, link: step.link, treatments: step.treatments, ambient },
       ),
     ),

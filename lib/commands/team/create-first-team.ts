@@ -1,6 +1,8 @@
 import { sql } from "drizzle-orm";
-import { appDatabase } from "@/db/client";
+import { appDatabase, inTeam, type Database } from "@/db/client";
 import { hashPassword } from "@/lib/auth/password";
+import { readShippedMasks } from "@/lib/formats/shipped-masks";
+import { addShippedMasks } from "../mask/add-shipped-masks";
 import { CommandError } from "../result";
 import { parseInput } from "../run";
 import { createFirstTeamSchema } from "./schemas";
@@ -11,7 +13,7 @@ import { createFirstTeamSchema } from "./schemas";
  */
 export async function createFirstTeam(
   input: unknown,
-  db = appDatabase(),
+  db: Database = appDatabase(),
 ): Promise<{ teamId: string }> {
   const values = parseInput(createFirstTeamSchema, input);
   const hash = await hashPassword(values.password);
@@ -20,5 +22,7 @@ export async function createFirstTeam(
   );
   const teamId = made.rows[0]?.id;
   if (!teamId) throw new CommandError("conflict", "This Neap has a team already: sign in.");
+  const shipped = await readShippedMasks();
+  await inTeam(db, teamId, (tx) => addShippedMasks(tx, teamId, shipped));
   return { teamId };
 }

@@ -37,6 +37,8 @@ export async function readingRows(database: TestDatabase, teamId: string): Promi
 }
 
 async function waiting(database: TestDatabase): Promise<number> {
+  // Inside a transaction the activity is otherwise shown as it was at the first look.
+  await database.owner.query("select pg_stat_clear_snapshot()");
   const found = await database.owner.query(
     `select count(*)::int as n from pg_stat_activity
      where datname = current_database() and wait_event_type = 'Lock'`,

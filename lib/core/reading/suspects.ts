@@ -8,20 +8,25 @@ import type { Suspect } from "./reading";
 /** Lowest level between each point and the next higher one on its left; NaN parts the trace. */
 function leftBases(levels: Float32Array): Float32Array {
   const bases = new Float32Array(levels.length);
-  let stack: { level: number; base: number }[] = [];
-  levels.forEach((level, i) => {
+  // The points that no later one has overtopped yet, by falling level.
+  const stack = new Uint32Array(levels.length);
+  let size = 0;
+  for (let i = 0; i < levels.length; i += 1) {
+    const level = levels[i] ?? Number.NaN;
     if (Number.isNaN(level)) {
-      stack = [];
-      return;
+      size = 0;
+      continue;
     }
     let base = level;
-    for (let top = stack.at(-1); top && top.level <= level; top = stack.at(-1)) {
-      base = Math.min(base, top.base);
-      stack.pop();
+    for (; size > 0; size -= 1) {
+      const top = stack[size - 1] ?? 0;
+      if ((levels[top] ?? Number.NaN) > level) break;
+      base = Math.min(base, bases[top] ?? base);
     }
     bases[i] = base;
-    stack.push({ level, base });
-  });
+    stack[size] = i;
+    size += 1;
+  }
   return bases;
 }
 

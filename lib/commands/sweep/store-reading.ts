@@ -1,11 +1,12 @@
 import type { Transaction } from "@/db/client";
-import { readings, suspects } from "@/db/schema";
+import { readings } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
 import type { Reading } from "@/lib/core/reading/reading";
 import { readSweep } from "@/lib/core/reading/read-sweep";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import type { Trace } from "@/lib/core/sweep/trace";
+import { storeSuspects } from "./store-suspects";
 
 export interface MaskToHold {
   maskId: string;
@@ -22,9 +23,6 @@ export interface SweepToRead {
   impedanceOhm: number;
   overdueTransducers: string[];
 }
-
-/** A statement takes at most 65,535 values, and a noisy sweep can have more suspects than that. */
-const SUSPECTS_AT_ONCE = 1000;
 
 /** Holds a sweep against one mask revision and keeps the reading with its suspects. */
 export async function storeReading(
@@ -58,15 +56,6 @@ export async function storeReading(
     })
     .returning({ id: readings.id });
   if (!row) throw new Error("The reading was not stored.");
-  for (let from = 0; from < found.length; from += SUSPECTS_AT_ONCE) {
-    await tx.insert(suspects).values(
-      found.slice(from, from + SUSPECTS_AT_ONCE).map(({ traceIndex, ...suspect }) => ({
-        teamId,
-        readingId: row.id,
-        tracePosition: traceIndex,
-        ...suspect,
-      })),
-    );
-  }
+  await storeSuspects(tx, { teamId, readingId: row.id }, found);
   return reading;
 }

@@ -43,8 +43,26 @@ async function writeBare(owner: Client, rows: BlockRow[], round: number): Promis
   await owner.query("commit");
 }
 
+/** The same for the roughest floor that noise can have, of which every other sample is a maximum. */
+async function measureRoughImport({ database, importFile }: Place): Promise<Figure> {
+  const files = [0, 1, 2, 3, 4].map((round) => inventFile(POINTS, 900 + round, 1));
+  const { whole } = await measureInTurns(
+    { whole: (round) => importFile(files[round] ?? new Uint8Array(0)) },
+    3,
+  );
+  const { rows } = await database.owner.query<{ most: string }>(
+    "select count(*) as most from suspects group by reading_id order by 1 desc limit 1",
+  );
+  return {
+    name: `Import of ${POINTS} points with the roughest floor`,
+    measured: milliseconds(whole),
+    beside: `up to ${rows[0]?.most ?? 0} suspects in a reading`,
+  };
+}
+
 /** Import of a file up to stored readings against three masks, beside parsing and writing alone. */
-export async function measureImport({ database, importFile }: Place): Promise<Figure[]> {
+export async function measureImport(place: Place): Promise<Figure[]> {
+  const { database, importFile } = place;
   const { owner } = database;
   await owner.query(`create table bare_blocks (round integer, kind text, level integer,
     position integer, crc32 double precision, bytes bytea,
@@ -73,5 +91,6 @@ export async function measureImport({ database, importFile }: Place): Promise<Fi
       limit: { text: `median ≤ ${LIMIT}`, isHeld: middleOf(ratios) <= LIMIT },
       beside: `${milliseconds(times.whole)}; parse ${milliseconds(times.parse)}, write ${milliseconds(times.write)}`,
     },
+    await measureRoughImport(place),
   ];
 }

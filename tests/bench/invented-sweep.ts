@@ -4,20 +4,28 @@ import { makeTrace, randomFrom } from "../support/traces";
 const START_HZ = 30e6;
 const STOP_HZ = 1e9;
 
-/** Peak levels in dBµV: a floor with its noise, and a comb of lines that stand on it. */
-export function inventLevels(count: number, seed: number): Float64Array {
+/** Noise samples that the peak detector sees for each point; fewer make a rougher floor. */
+const FAST_SWEEP = 10;
+
+/**
+ * Peak levels in dBµV: a comb of lines on a floor of Gaussian noise, whose power is exponential.
+ * Every point is drawn on its own as the highest of `samples`, so the floor is rougher than one
+ * whose neighbours share a filter: more maxima have to be looked at.
+ */
+export function inventLevels(count: number, seed: number, samples = FAST_SWEEP): Float64Array {
   const random = randomFrom(seed);
   const spacing = Math.max(40, Math.round(count / 240));
   return Float64Array.from({ length: count }, (_, i) => {
-    const noise = 8 - 3 * Math.log(1e-9 - Math.log(1 - random()));
+    const power = -Math.log(1 - Math.min(1 - 1e-12, (random() + 1e-9) ** (1 / samples)));
+    const noise = 2 + 10 * Math.log10(power);
     const away = Math.abs((i % spacing) - spacing / 2);
     return Math.max(noise, 30 + 12 * Math.sin(i / count) - 6 * away ** 2);
   });
 }
 
 /** Two columns as an analyzer writes them; every file of another seed has other bytes. */
-export function inventFile(count: number, seed: number): Uint8Array {
-  const levels = inventLevels(count, seed);
+export function inventFile(count: number, seed: number, samples?: number): Uint8Array {
+  const levels = inventLevels(count, seed, samples);
   const stepHz = (STOP_HZ - START_HZ) / (count - 1);
   const rows = Array.from(levels, (level, i) => {
     return `${(START_HZ + i * stepHz).toFixed(2)},${level.toFixed(3)}`;

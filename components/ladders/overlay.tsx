@@ -5,6 +5,7 @@ import { CoastChart } from "@/components/charts/coast-chart";
 import { useTraceViews } from "@/components/sweeps/use-trace-views";
 import { useUrlView } from "@/components/sweeps/use-url-view";
 import { SelectField } from "@/components/ui/select-field";
+import { lineRanges } from "@/lib/core/mask/limit-at";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { Detector, Hold } from "@/lib/core/sweep/settings";
 
@@ -24,13 +25,14 @@ interface OverlayProps {
   sweeps: OverlaySweep[];
   before: string;
   after: string;
-  mask: Mask | null;
+  /** The one that overlaps most with what is shown is drawn. */
+  masks: Mask[];
 }
 
 const NONE: never[] = [];
 
 /** Two sweeps of the ladder over each other: the later one as water, the earlier as an outline. */
-export function Overlay({ sweeps, mask, ...initial }: OverlayProps) {
+export function Overlay({ sweeps, masks, ...initial }: OverlayProps) {
   const [before, setBefore] = useState(initial.before);
   const [after, setAfter] = useState(initial.after);
   const shown = useMemo(() => {
@@ -49,6 +51,7 @@ export function Overlay({ sweeps, mask, ...initial }: OverlayProps) {
     }),
     [shown],
   );
+  const mask = useMemo(() => widestMask(masks, extent), [masks, extent]);
   const { view, setView, setScale } = useUrlView(extent);
   const { traces, state } = useTraceViews(shown, view, extent);
   const options = sweeps.map(({ id, label }) => ({ value: id, label }));
@@ -84,4 +87,18 @@ export function Overlay({ sweeps, mask, ...initial }: OverlayProps) {
       />
     </>
   );
+}
+
+/** The mask that shares most of the span, on a log axis; null without any. */
+function widestMask(masks: Mask[], extent: { fromHz: number; toHz: number }): Mask | null {
+  const shared = (mask: Mask) =>
+    mask.lines.flatMap(lineRanges).reduce((sum, { startHz, stopHz }) => {
+      const [from, to] = [Math.max(startHz, extent.fromHz), Math.min(stopHz, extent.toHz)];
+      return sum + (to > from ? Math.log(to / from) : 0);
+    }, 0);
+  const [best] = masks
+    .map((mask) => ({ mask, width: shared(mask) }))
+    .filter(({ width }) => width > 0)
+    .sort((a, b) => b.width - a.width);
+  return best?.mask ?? null;
 }

@@ -21,7 +21,12 @@ export interface RungStep {
   link: LinkSettings | null;
   onRecord: boolean;
   sweeps: { id: string; name: string; purpose: string }[];
-  worst: { marginDb: number | null; standing: Standing; where: string } | null;
+  worst: {
+    marginDb: number | null;
+    standing: Standing;
+    lineName: string | null;
+    maskTitle: string;
+  } | null;
   againstPrevious: SweepDelta[];
   againstStart: SweepDelta[];
 }
@@ -77,7 +82,9 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
               </span>
               <StandingMark standing={step.worst.standing} />
             </p>
-            <p className="text-sm text-ink-soft">{step.worst.where}</p>
+            <p className="text-sm text-ink-soft">
+              {step.worst.lineName} line of {step.worst.maskTitle}
+            </p>
           </div>
         ) : null}
       </div>

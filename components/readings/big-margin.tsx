@@ -13,14 +13,16 @@ interface BigMarginProps {
 /** The one large number of a page, with its standing. */
 export function BigMargin({ marginDb, standing, children }: BigMarginProps) {
   return (
-    <div className="flex flex-wrap items-baseline gap-x-5 gap-y-1">
-      <span className="font-mono text-5xl tracking-tight whitespace-nowrap">
-        {formatMargin(marginDb)}
-      </span>
-      <span className="text-lg">
-        <StandingMark standing={standing} />
-      </span>
-      {children ? <p className="basis-full text-ink-soft">{children}</p> : null}
+    <div>
+      <div className="flex flex-wrap items-baseline gap-x-5 gap-y-1">
+        <span className="font-mono text-5xl tracking-tight whitespace-nowrap">
+          {formatMargin(marginDb)}
+        </span>
+        <span className="text-lg">
+          <StandingMark standing={standing} />
+        </span>
+      </div>
+      {children ? <p className="mt-1.5 text-ink-soft">{children}</p> : null}
     </div>
   );
 }

@@ -19,6 +19,9 @@ interface SweepChartProps {
   guardDb: number;
 }
 
+/** So many of the worst suspects in view carry a buoy; zooming in shows the next ones. */
+const MOST_BUOYS = 15;
+
 const idOf = (trace: ShownTrace) => `${trace.sweepId} ${trace.position}`;
 
 /** The coast chart of a sweep with its suspects below; pointing at either marks both. */
@@ -30,6 +33,13 @@ export function SweepChart(props: SweepChartProps) {
   const all = props.traces;
   const shown = useMemo(() => all.filter((t) => !hidden.includes(idOf(t))), [all, hidden]);
   const { traces, state } = useTraceViews(shown, view, extent);
+  const marked = useMemo(
+    () =>
+      suspects
+        .filter((s) => s.frequencyHz >= view.fromHz && s.frequencyHz <= view.toHz)
+        .slice(0, MOST_BUOYS),
+    [suspects, view],
+  );
   return (
     <>
       {props.traces.length > 1 ? (
@@ -56,7 +66,7 @@ export function SweepChart(props: SweepChartProps) {
       <CoastChart
         traces={traces}
         mask={mask}
-        suspects={suspects}
+        suspects={marked}
         view={view}
         extent={extent}
         scale={view.scale}

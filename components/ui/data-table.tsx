@@ -113,7 +113,7 @@ export function DataTable<T extends object>(props: DataTableProps<T>) {
                     <button
                       type="button"
                       onClick={header.column.getToggleSortingHandler()}
-                      className="cursor-pointer py-1 tracking-[inherit] whitespace-nowrap uppercase hover:text-ink"
+                      className="cursor-pointer py-1 tracking-[inherit] whitespace-nowrap hover:text-ink"
                     >
                       {columns[i]?.header}
                       <SortMark sorted={sorted} />

@@ -1,4 +1,5 @@
 import type { Transaction } from "@/db/client";
+import { reachesMask } from "@/lib/core/reading/combine-readings";
 import { loadSweepDetail } from "@/lib/queries/sweep/load-sweep-detail";
 import { viewStoredTrace } from "@/lib/queries/sweep/read-trace-view";
 import type { SnapshotSweep } from "./report-snapshot";
@@ -63,10 +64,9 @@ export async function gatherSweep(
       })),
     },
     traces,
-    readings: sweep.readings.map(({ maskRevision, mask, reading }) => ({
-      maskRevision,
-      mask,
-      reading,
-    })),
+    // A mask that the sweep only touches at its edge is another sweep's to decide.
+    readings: sweep.readings
+      .filter(({ reading }) => reading.notComparable !== null || reachesMask(reading))
+      .map(({ maskRevision, mask, reading }) => ({ maskRevision, mask, reading })),
   };
 }

@@ -6,21 +6,17 @@ import type {
   MarginPoint,
   Standing,
 } from "@/lib/core/reading/reading";
+import type { CombinedLine } from "@/lib/core/reading/combine-readings";
+import { combineReadings } from "@/lib/core/reading/combine-readings";
 import type { LevelUnit } from "@/lib/core/units/level-units";
 import type { ReportSnapshot, SnapshotReading, SnapshotSweep } from "./report-snapshot";
-
-const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
-
-function standingRank(standing: Standing): number {
-  return WORST_FIRST.indexOf(standing);
-}
 
 export interface LineSummary {
   maskTitle: string;
   maskRevision: number;
   lineName: string;
   unit: LevelUnit;
-  /** The worst standing among the sweeps, and the sweep it comes from. */
+  /** Of the sweeps together, and the sweep that it comes from. */
   standing: Standing;
   standingSweep: string;
   explanation: string | null;
@@ -33,62 +29,86 @@ export function productSweeps(snapshot: ReportSnapshot): SnapshotSweep[] {
   return snapshot.sweeps.filter((sweep) => sweep.purpose === "product");
 }
 
-function rowsOf(sweep: SnapshotSweep, { mask, maskRevision, reading }: SnapshotReading) {
-  const at = {
-    maskTitle: mask.title,
-    maskRevision,
-    unit: reading.unit,
-    standingSweep: sweep.name,
-    sweepCount: 1,
-  };
-  const key = `${mask.key} ${mask.title} ${maskRevision}`;
-  if (reading.lines.length === 0) {
-    const explanation = reading.notComparable ?? "This mask has no lines.";
-    const standing: Standing = "undecided";
-    const row = { ...at, lineName: "whole mask", standing, explanation, worst: null };
-    return [{ key: `${key} -`, row }];
-  }
-  return reading.lines.map(({ lineIndex, name, standing, explanation, worst: point, basis }) => {
-    const stepHz = (point && sweep.traces[point.traceIndex]?.stepHz) ?? undefined;
-    const worst = point ? { point, basis, sweep: sweep.name, stepHz } : null;
-    const row: LineSummary = { ...at, lineName: name, standing, explanation, worst };
-    return { key: `${key} ${lineIndex}`, row };
-  });
-}
-
 /** Over first, then what has no margin at all, then the lowest margin. */
 function urgency(standing: Standing, marginDb: number | null): number {
   const within = marginDb ?? -1e6;
   return standing === "over" ? within - 1e9 : within;
 }
 
-/** One row per mask line over all product sweeps, the most urgent first. */
-export function summarizeLines(snapshot: ReportSnapshot): LineSummary[] {
-  const byLine = new Map<string, LineSummary>();
-  for (const sweep of productSweeps(snapshot))
-    for (const { key, row } of sweep.readings.flatMap((reading) => rowsOf(sweep, reading))) {
-      const known = byLine.get(key);
-      if (!known) {
-        byLine.set(key, row);
-        continue;
-      }
-      known.sweepCount += 1;
-      const ranked = standingRank(row.standing) - standingRank(known.standing);
-      const lower = marginOf(row) < marginOf(known);
-      if (ranked < 0 || (ranked === 0 && lower)) {
-        known.standing = row.standing;
-        known.standingSweep = row.standingSweep;
-        known.explanation = row.explanation;
-      }
-      if (lower) known.worst = row.worst;
-    }
-  const rank = ({ standing, worst }: LineSummary) =>
-    urgency(standing, worst?.point.marginDb ?? null);
-  return [...byLine.values()].sort((a, b) => rank(a) - rank(b));
+interface HeldSweep {
+  sweep: SnapshotSweep;
+  held: SnapshotReading;
 }
 
-function marginOf(row: LineSummary): number {
-  return row.worst?.point.marginDb ?? Number.POSITIVE_INFINITY;
+/** Readings of the product sweeps by mask revision, in the order of the sweeps. */
+function byMask(snapshot: ReportSnapshot): HeldSweep[][] {
+  const groups = new Map<string, HeldSweep[]>();
+  for (const sweep of productSweeps(snapshot))
+    for (const held of sweep.readings) {
+      const { mask, maskRevision, reading } = held;
+      const kind = reading.lines.length === 0 ? `whole ${sweep.sweepId}` : "lines";
+      const key = `${mask.key} ${mask.title} ${maskRevision} ${kind}`;
+      groups.set(key, [...(groups.get(key) ?? []), { sweep, held }]);
+    }
+  return [...groups.values()];
+}
+
+/** Why the combined standing of a line needs a word, in the words of the sweep that gave it. */
+function explain(line: CombinedLine, source: LineReading | undefined): string | null {
+  if (line.standing !== "undecided") return null;
+  if (line.worst && line.worst.marginDb >= 0 && line.coverage < 1) {
+    const percent = Math.min(99, Math.floor(line.coverage * 100));
+    return `Within the mask on ${percent} % of it; the rest was not swept.`;
+  }
+  return source?.explanation ?? null;
+}
+
+function rowsOf(group: HeldSweep[]): LineSummary[] {
+  const [first] = group;
+  if (!first) return [];
+  const { mask, maskRevision, reading } = first.held;
+  const at = { maskTitle: mask.title, maskRevision, unit: reading.unit, sweepCount: group.length };
+  if (reading.lines.length === 0) {
+    const explanation = reading.notComparable ?? "This mask has no lines.";
+    const standingSweep = first.sweep.name;
+    return [
+      {
+        ...at,
+        lineName: "whole mask",
+        standing: "undecided",
+        standingSweep,
+        explanation,
+        worst: null,
+      },
+    ];
+  }
+  const readings = group.map(({ held }) => held.reading);
+  return combineReadings(mask, readings).lines.map((line, i): LineSummary => {
+    const from = line.source === null ? undefined : group[line.source];
+    const own = from?.held.reading.lines[i] ?? reading.lines[i];
+    const over = group.find(({ held }) => held.reading.lines[i]?.standing === "over");
+    const decider = (line.standing === "over" ? over : from) ?? first;
+    const point = line.worst;
+    const stepHz = (point && from?.sweep.traces[point.traceIndex]?.stepHz) ?? undefined;
+    return {
+      ...at,
+      lineName: line.name,
+      standing: line.standing,
+      standingSweep: decider.sweep.name,
+      explanation: explain(line, own),
+      worst:
+        point && from && own ? { point, basis: own.basis, sweep: from.sweep.name, stepHz } : null,
+    };
+  });
+}
+
+/** One row per mask line over all product sweeps, the most urgent first. */
+export function summarizeLines(snapshot: ReportSnapshot): LineSummary[] {
+  const rank = ({ standing, worst }: LineSummary) =>
+    urgency(standing, worst?.point.marginDb ?? null);
+  return byMask(snapshot)
+    .flatMap(rowsOf)
+    .sort((a, b) => rank(a) - rank(b));
 }
 
 export interface Deciding {

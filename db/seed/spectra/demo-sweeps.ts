@@ -119,11 +119,15 @@ function ladderOf(story: StoryLadder): DemoLadder {
   const { product, ambient } = story;
   const off = { product: null, link: null, treatments: [] };
   const firstDay = story.steps[0]?.measuredOn ?? "";
-  const background = DEMO_BENCHES.map((bench) =>
-    sweepOf(story, bench, "ambient", firstDay, detectorsOf(bench, story.buildName), {
-      ...off,
-      ambient,
-    }),
+  const lastDay = story.steps.at(-1)?.measuredOn ?? firstDay;
+  // The surroundings change from day to day: taken when the ladder was begun and when it ended.
+  const background = DEMO_BENCHES.flatMap((bench) =>
+    [firstDay, lastDay].map((day) =>
+      sweepOf(story, bench, `ambient ${day}`, day, detectorsOf(bench, story.buildName), {
+        ...off,
+        ambient,
+      }),
+    ),
   );
   // The floor belongs to the benches, not to a build: taken once, with the first build.
   if (story.buildName === "G1")

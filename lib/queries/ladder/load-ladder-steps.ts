@@ -1,8 +1,11 @@
 import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { builds, ladders, ladderSteps, maskRevisions, programs, sweeps } from "@/db/schema";
+import { builds, ladders, ladderSteps, programs, sweeps } from "@/db/schema";
 import type { ComparedSweep } from "@/lib/core/delta/compared-sweep";
+import type { Mask } from "@/lib/core/mask/mask";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
+import type { HeldReading, MaskStanding } from "../sweep/load-readings";
+import { loadReadings, worstStanding } from "../sweep/load-readings";
 import { loadComparedSweeps } from "../sweep/load-compared";
 import type { StepDeltas } from "./step-deltas";
 import { stepDeltas } from "./step-deltas";
@@ -12,6 +15,8 @@ export interface LadderStep extends StepDeltas {
   position: number;
   name: string;
   description: string;
+  /** The mask under which the step's product sweeps together stand worst. */
+  worst: MaskStanding | null;
   /** Of the step's newest product sweep; null without one. */
   link: LinkSettings | null;
   onRecord: boolean;
@@ -64,6 +69,14 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
     teamId,
     placed.map((sweep) => sweep.id),
   );
+  const held = await loadReadings(
+    tx,
+    teamId,
+    inArray(
+      sweeps.id,
+      placed.map((sweep) => sweep.id),
+    ),
+  );
   const sweepsOf = (stepId: string) => {
     const own = new Set(placed.filter((s) => s.stepId === stepId).map((s) => s.id));
     return compared.filter((sweep) => own.has(sweep.id));
@@ -79,30 +92,18 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
       description,
       link: own.at(-1)?.link ?? null,
       onRecord: own.some((sweep) => sweep.onRecord),
+      worst: worstStanding(held.filter((row) => own.some((s) => s.id === row.sweepId))),
       sweeps: bySteps[i] ?? [],
       againstPrevious: deltas[i]?.againstPrevious ?? [],
       againstStart: deltas[i]?.againstStart ?? [],
     };
   });
-  return { ...ladder, steps, mask: await drawnMask(tx, teamId, compared) };
+  return { ...ladder, steps, masks: masksOf(held) };
 }
 
-/** The mask that the overlay draws: the one under which most of the sweeps have a margin. */
-async function drawnMask(tx: Transaction, teamId: string, compared: ComparedSweep[]) {
-  const counts = new Map<string, number>();
-  for (const sweep of compared) {
-    for (const { maskRevisionId, lines } of sweep.readings) {
-      if (lines.some((line) => line.marginDb !== null))
-        counts.set(maskRevisionId, (counts.get(maskRevisionId) ?? 0) + 1);
-    }
-  }
-  const [most] = [...counts].sort((a, b) => b[1] - a[1]);
-  if (!most) return null;
-  const [row] = await tx
-    .select({ content: maskRevisions.content })
-    .from(maskRevisions)
-    .where(and(eq(maskRevisions.teamId, teamId), eq(maskRevisions.id, most[0])));
-  return row?.content ?? null;
+/** The masks that some sweep of the ladder reaches, each once. */
+function masksOf(held: HeldReading[]): Mask[] {
+  return [...new Map(held.map((row) => [row.maskRevisionId, row.mask])).values()];
 }
 
 export type LadderDetail = NonNullable<Awaited<ReturnType<typeof loadLadderSteps>>>;

@@ -5,7 +5,7 @@ import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
 import type { Standing } from "@/lib/core/reading/reading";
 import { worstOf } from "../sweep/worst-of";
-import type { BuildStanding } from "./load-standings";
+import type { MaskStanding } from "../sweep/load-readings";
 import { loadProgramTrends, newestStanding } from "./load-standings";
 
 export interface ProgramRow {
@@ -15,7 +15,7 @@ export interface ProgramRow {
   targetMarginDb: number;
   builds: number;
   /** Of the newest build that has sweeps on record; null without one. */
-  now: (BuildStanding & { buildId: string; buildName: string }) | null;
+  now: (MaskStanding & { buildId: string; buildName: string }) | null;
   /** Worst margin of each build that has one, oldest first. */
   trend: { buildName: string; marginDb: number; standing: Standing }[];
   /** The next one due on the given day or later. */
@@ -77,7 +77,7 @@ export async function listPrograms(ctx: Context, today: string): Promise<Program
           : null,
         trend: trend.builds.flatMap((build) => {
           const worst = worstOf(build.standings);
-          if (!worst || worst.marginDb === null) return [];
+          if (!worst) return [];
           return [{ buildName: build.name, marginDb: worst.marginDb, standing: worst.standing }];
         }),
         nextMilestone: next

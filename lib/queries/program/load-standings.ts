@@ -1,28 +1,16 @@
-import { and, asc, desc, eq, inArray, isNotNull, isNull } from "drizzle-orm";
+import { and, asc, desc, eq, inArray, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { builds, maskRevisions, masks, programMasks, readings, sweeps } from "@/db/schema";
-import type { Standing } from "@/lib/core/reading/reading";
-import { isNewestRevision } from "../sweep/newest-revision";
+import { builds, maskRevisions, masks, programMasks, sweeps } from "@/db/schema";
+import type { MaskStanding } from "../sweep/load-readings";
+import { loadReadings, standingsOf } from "../sweep/load-readings";
 import { worstOf } from "../sweep/worst-of";
-
-/** The worst reading of a build under one mask, over its sweeps on the line of record. */
-export interface BuildStanding {
-  maskId: string;
-  maskTitle: string;
-  standing: Standing;
-  marginDb: number | null;
-  marginAtHz: number | null;
-  lineName: string | null;
-  sweepId: string;
-  coverage: number;
-}
 
 export interface BuildTrend {
   id: string;
   name: string;
   builtOn: string | null;
   /** One for each mask that a sweep on record reaches. */
-  standings: BuildStanding[];
+  standings: MaskStanding[];
 }
 
 export interface ProgramTrend {
@@ -69,30 +57,11 @@ export async function loadProgramTrends(
     )
     .where(and(eq(programMasks.teamId, teamId), inArray(programMasks.programId, programIds)))
     .orderBy(asc(masks.key), asc(programMasks.programId), desc(maskRevisions.revision));
-  const readingRows = await tx
-    .select({
-      buildId: sweeps.buildId,
-      sweepId: sweeps.id,
-      maskId: readings.maskId,
-      standing: readings.standing,
-      marginDb: readings.marginDb,
-      marginAtHz: readings.marginAtHz,
-      lineName: readings.lineName,
-      coverage: readings.coverage,
-    })
-    .from(readings)
-    .innerJoin(sweeps, and(eq(sweeps.teamId, readings.teamId), eq(sweeps.id, readings.sweepId)))
-    .innerJoin(builds, and(eq(builds.teamId, sweeps.teamId), eq(builds.id, sweeps.buildId)))
-    .where(
-      and(
-        eq(readings.teamId, teamId),
-        inArray(builds.programId, programIds),
-        eq(sweeps.onRecord, true),
-        isNull(sweeps.archivedAt),
-        isNotNull(readings.marginDb),
-        isNewestRevision(),
-      ),
-    );
+  const held = await loadReadings(
+    tx,
+    teamId,
+    and(inArray(builds.programId, programIds), eq(sweeps.onRecord, true)),
+  );
   return programIds.map((programId) => {
     const own = maskRows.filter((mask) => mask.programId === programId);
     return {
@@ -108,14 +77,7 @@ export async function loadProgramTrends(
           id,
           name,
           builtOn,
-          standings: own.flatMap((mask) => {
-            const worst = worstOf(
-              readingRows.filter((r) => r.buildId === id && r.maskId === mask.id),
-            );
-            if (!worst) return [];
-            const { buildId: _build, ...rest } = worst;
-            return [{ ...rest, maskTitle: mask.content.title }];
-          }),
+          standings: standingsOf(held.filter((row) => row.buildId === id)),
         })),
     };
   });
@@ -124,7 +86,7 @@ export async function loadProgramTrends(
 /** The newest build that stands anywhere, with its worst standing; null when none does. */
 export function newestStanding(
   trend: ProgramTrend,
-): { build: BuildTrend; worst: BuildStanding } | null {
+): { build: BuildTrend; worst: MaskStanding } | null {
   for (const build of [...trend.builds].reverse()) {
     const worst = worstOf(build.standings);
     if (worst) return { build, worst };

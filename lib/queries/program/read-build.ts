@@ -1,11 +1,12 @@
 import { and, asc, count, eq, isNull } from "drizzle-orm";
 import { inTeam } from "@/db/client";
-import { builds, clocks, ladders, ladderSteps, programs } from "@/db/schema";
+import { builds, clocks, ladders, ladderSteps, programs, sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
 import { isId } from "../is-id";
+import { loadReadings, worstStanding } from "../sweep/load-readings";
 
-/** A build with its clocks and ladders; null when the team has none of this id. */
+/** A build with its clocks, ladders and where it stands; null when the team has none of this id. */
 export async function readBuild(ctx: Context, buildId: string) {
   requirePermission(ctx, "program.read");
   if (!isId(buildId)) return null;
@@ -60,7 +61,9 @@ export async function readBuild(ctx: Context, buildId: string) {
       )
       .groupBy(ladders.teamId, ladders.id)
       .orderBy(asc(ladders.createdAt));
-    return { ...build, clocks: clockRows, ladders: ladderRows };
+    const onRecord = and(eq(sweeps.buildId, buildId), eq(sweeps.onRecord, true));
+    const held = await loadReadings(tx, ctx.teamId, onRecord);
+    return { ...build, clocks: clockRows, ladders: ladderRows, worst: worstStanding(held) };
   });
 }
 

@@ -1,14 +1,13 @@
 import type { SQL } from "drizzle-orm";
-import { and, asc, eq, isNotNull, isNull, sql } from "drizzle-orm";
+import { and, asc, eq, isNull, sql } from "drizzle-orm";
 import { inTeam } from "@/db/client";
-import { benches, ladders, ladderSteps, readings, sweeps, traces } from "@/db/schema";
+import { benches, ladders, ladderSteps, sweeps, traces } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import type { Standing } from "@/lib/core/reading/reading";
 import type { Detector, Polarization, SweepPurpose } from "@/lib/core/sweep/settings";
 import { requirePermission } from "@/lib/commands/run";
 import { isId } from "../is-id";
-import { isNewestRevision } from "./newest-revision";
-import { worstOf } from "./worst-of";
+import { loadReadings, worstStanding } from "./load-readings";
 
 export interface SweepRow {
   id: string;
@@ -70,24 +69,9 @@ async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
       .where(and(eq(sweeps.teamId, ctx.teamId), isNull(sweeps.archivedAt), scope))
       .groupBy(sweeps.teamId, sweeps.id, benches.name, ladders.id, ladderSteps.id)
       .orderBy(asc(ladderSteps.position), asc(sweeps.measuredOn), asc(sweeps.createdAt));
-    const held = await tx
-      .select({
-        sweepId: readings.sweepId,
-        standing: readings.standing,
-        marginDb: readings.marginDb,
-      })
-      .from(readings)
-      .innerJoin(sweeps, and(eq(sweeps.teamId, readings.teamId), eq(sweeps.id, readings.sweepId)))
-      .where(
-        and(
-          eq(readings.teamId, ctx.teamId),
-          isNotNull(readings.marginDb),
-          isNewestRevision(),
-          scope,
-        ),
-      );
+    const held = await loadReadings(tx, ctx.teamId, scope);
     return rows.map(({ settings, ...row }) => {
-      const worst = worstOf(held.filter((reading) => reading.sweepId === row.id));
+      const worst = worstStanding(held.filter((reading) => reading.sweepId === row.id));
       return {
         ...row,
         polarization: settings.polarization,

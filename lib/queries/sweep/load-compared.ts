@@ -1,8 +1,8 @@
-import { and, asc, eq, inArray, isNull, sql } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { benches, maskRevisions, readings, signalPathRevisions, sweeps, traces } from "@/db/schema";
+import { benches, signalPathRevisions, sweeps, traces } from "@/db/schema";
 import type { ComparedSweep } from "@/lib/core/delta/compared-sweep";
-import { isNewestRevision } from "./newest-revision";
+import { loadReadings } from "./load-readings";
 
 /** Sweeps as a delta compares them, by the time of their import, archived ones left out. */
 export async function loadComparedSweeps(
@@ -39,38 +39,18 @@ export async function loadComparedSweeps(
     .from(traces)
     .where(and(eq(traces.teamId, teamId), inArray(traces.sweepId, sweepIds)))
     .orderBy(asc(traces.position));
-  const readingRows = await tx
-    .select({
-      sweepId: readings.sweepId,
-      maskRevisionId: readings.maskRevisionId,
-      mask: maskRevisions.content,
-      content: readings.content,
-    })
-    .from(readings)
-    .innerJoin(
-      maskRevisions,
-      and(eq(maskRevisions.teamId, readings.teamId), eq(maskRevisions.id, readings.maskRevisionId)),
-    )
-    .where(
-      and(
-        eq(readings.teamId, teamId),
-        inArray(readings.sweepId, sweepIds),
-        isNull(readings.notComparable),
-        isNewestRevision(),
-      ),
-    )
-    .orderBy(sql`${maskRevisions.content} ->> 'key'`, asc(readings.maskId));
+  const held = await loadReadings(tx, teamId, inArray(sweeps.id, sweepIds));
   return rows.map((row) => {
     const own = traceRows.filter((trace) => trace.sweepId === row.id);
     return {
       ...row,
       traces: own,
-      readings: readingRows
-        .filter((reading) => reading.sweepId === row.id)
-        .map(({ maskRevisionId, mask, content }) => ({
+      readings: held
+        .filter(({ sweepId }) => sweepId === row.id)
+        .map(({ maskRevisionId, mask, reading }) => ({
           maskRevisionId,
           maskTitle: mask.title,
-          lines: content.lines.map((line) => ({
+          lines: reading.lines.map((line) => ({
             name: line.name,
             standing: line.standing,
             marginDb: line.worst?.marginDb ?? null,

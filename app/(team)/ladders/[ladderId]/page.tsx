@@ -23,7 +23,7 @@ import {
   takeStepAway,
 } from "../actions";
 import { chooseOverlay, overlaySweeps } from "./prepare-overlay";
-import { boughtPerLine, ladderAnswer, worstOfStep } from "./prepare-steps";
+import { boughtPerLine, ladderAnswer } from "./prepare-steps";
 
 export const metadata: Metadata = { title: "Ladder" };
 
@@ -82,7 +82,7 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
           {ladder.steps.map((step, i) => (
             <Rung
               key={step.id}
-              step={{ ...step, worst: worstOfStep(step) }}
+              step={step}
               buildId={ladder.buildId}
               isLast={i === ladder.steps.length - 1}
               mayWrite={mayWrite}
@@ -102,7 +102,7 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
             sweeps={overlaySweeps(ladder.steps)}
             before={overlay.before}
             after={overlay.after}
-            mask={overlay.mask}
+            masks={ladder.masks}
           />
         </Section>
       ) : null}

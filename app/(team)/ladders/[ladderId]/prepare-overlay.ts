@@ -1,5 +1,4 @@
 import type { OverlaySweep } from "@/components/ladders/overlay";
-import type { Mask } from "@/lib/core/mask/mask";
 import type { LadderDetail, LadderStep } from "@/lib/queries/ladder/load-ladder-steps";
 
 /** Product sweeps of the ladder with the trace that is drawn: their first one. */
@@ -22,13 +21,11 @@ export function overlaySweeps(steps: LadderStep[]): OverlaySweep[] {
   );
 }
 
-/** The last step that has a counterpart in step 0, and the mask that both are held against. */
-export function chooseOverlay(
-  ladder: LadderDetail,
-): { before: string; after: string; mask: Mask | null } | null {
+/** The last step that has a counterpart in step 0. */
+export function chooseOverlay(ladder: LadderDetail): { before: string; after: string } | null {
   for (const step of [...ladder.steps].reverse()) {
     const [delta] = step.againstStart;
-    if (delta) return { before: delta.beforeId, after: delta.afterId, mask: ladder.mask };
+    if (delta) return { before: delta.beforeId, after: delta.afterId };
   }
   return null;
 }

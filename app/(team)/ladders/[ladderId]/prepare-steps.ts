@@ -2,24 +2,6 @@ import { formatMargin } from "@/lib/core/units/format";
 import type { LadderStep } from "@/lib/queries/ladder/load-ladder-steps";
 import { worstOf } from "@/lib/queries/sweep/worst-of";
 
-/** The worst line of a step over its product sweeps, and where; null without a margin. */
-export function worstOfStep(step: LadderStep) {
-  const lines = step.sweeps
-    .filter((sweep) => sweep.purpose === "product")
-    .flatMap((sweep) =>
-      sweep.readings.flatMap((reading) =>
-        reading.lines
-          .filter((line) => line.marginDb !== null)
-          .map((line) => ({
-            marginDb: line.marginDb,
-            standing: line.standing,
-            where: `${line.name} line of ${reading.maskTitle}`,
-          })),
-      ),
-    );
-  return worstOf(lines);
-}
-
 /** What the whole ladder did to its worst margin, first step to last; null when it cannot be told. */
 export function ladderAnswer(steps: LadderStep[]): { changeDb: number; text: string } | null {
   const last = [...steps].reverse().find((step) => step.sweeps.length > 0);

@@ -51,10 +51,8 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
       {newest ? (
         <BigMargin marginDb={newest.worst.marginDb} standing={newest.worst.standing}>
           {newest.build.name}, {newest.worst.lineName} line of {newest.worst.maskTitle}
-          {newest.worst.marginAtHz === null
-            ? ""
-            : ` at ${formatFrequency(newest.worst.marginAtHz)}`}
-          . {againstTarget(newest.worst.marginDb, program.targetMarginDb)}
+          {` at ${formatFrequency(newest.worst.marginAtHz)}`}.{" "}
+          {againstTarget(newest.worst.marginDb, program.targetMarginDb)}
         </BigMargin>
       ) : (
         <p className="text-lg">

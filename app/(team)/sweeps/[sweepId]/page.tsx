@@ -17,6 +17,7 @@ import { PageHead } from "@/components/ui/page-head";
 import { Section } from "@/components/ui/section";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
+import { reachesMask } from "@/lib/core/reading/combine-readings";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
 import { formatFrequency } from "@/lib/core/units/format";
 import type { SweepDetail } from "@/lib/queries/sweep/load-sweep-detail";
@@ -42,7 +43,7 @@ export default async function SweepPage(props: SweepPageProps) {
     maskId,
     title: mask.title,
     standing: reading.standing,
-    marginDb: decidingPoint(reading)?.point.marginDb ?? null,
+    marginDb: reachesMask(reading) ? (decidingPoint(reading)?.point.marginDb ?? null) : null,
     notComparable: reading.notComparable !== null,
   }));
   // A mask that the sweep does not reach says nothing about it.
@@ -217,6 +218,7 @@ function leadOf(sweep: SweepDetail): string {
 function headline({ reading, mask }: SweepDetail["readings"][number]): string {
   const deciding = decidingPoint(reading);
   if (!deciding) return `No part of ${mask.title} was swept with a detector that can decide.`;
+  if (!reachesMask(reading)) return `The sweep only touches the edge of ${mask.title}.`;
   const { line, point } = deciding;
   const where = `${line.name} line of ${mask.title} at ${formatFrequency(point.frequencyHz)}`;
   const worst = reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];

@@ -15,7 +15,6 @@ import type { BuildDetail } from "@/lib/queries/program/read-build";
 import { readBuild } from "@/lib/queries/program/read-build";
 import type { SweepRow } from "@/lib/queries/sweep/list-sweeps";
 import { listBuildSweeps } from "@/lib/queries/sweep/list-sweeps";
-import { worstOf } from "@/lib/queries/sweep/worst-of";
 import { startLadder } from "../../../../ladders/actions";
 
 export const metadata: Metadata = { title: "Build" };
@@ -64,7 +63,7 @@ export default async function BuildPage(props: BuildPageProps) {
           This build is archived.
         </p>
       ) : null}
-      <OnRecord sweeps={sweeps} />
+      <OnRecord build={build} sweeps={sweeps} />
       <Section title="Ladders" lead="What did each step buy?">
         <LadderList build={build} />
         {mayImport ? (
@@ -95,24 +94,24 @@ export default async function BuildPage(props: BuildPageProps) {
   );
 }
 
-function OnRecord({ sweeps }: { sweeps: SweepRow[] }) {
-  const onRecord = sweeps.filter((sweep) => sweep.onRecord && sweep.standing !== null);
-  const worst = worstOf(
-    onRecord.flatMap((sweep) => (sweep.standing ? [{ ...sweep, standing: sweep.standing }] : [])),
-  );
+function OnRecord({ build, sweeps }: { build: BuildDetail; sweeps: SweepRow[] }) {
+  const { worst } = build;
+  const count = sweeps.filter((sweep) => sweep.onRecord).length;
   if (!worst) {
     return (
       <p className="text-lg">
-        No sweep of this build is on the line of record, so it has no place in the trend yet.
+        {count === 0
+          ? "No sweep of this build is on the line of record, so it has no place in the trend yet."
+          : "The sweeps on the line of record reach no mask of the program yet."}
       </p>
     );
   }
   return (
     <BigMargin marginDb={worst.marginDb} standing={worst.standing}>
-      Worst of {onRecord.length === 1 ? "one sweep" : `${onRecord.length} sweeps`} on the line of
-      record:{" "}
-      <Link href={`/sweeps/${worst.id}`} className="text-deep underline">
-        {worst.name}
+      {worst.lineName} line of {worst.maskTitle} at {formatFrequency(worst.marginAtHz)}, over{" "}
+      {count === 1 ? "one sweep" : `${count} sweeps`} on the line of record:{" "}
+      <Link href={`/sweeps/${worst.sweepId}?mask=${worst.maskId}`} className="text-deep underline">
+        see the worst one
       </Link>
       .
     </BigMargin>

@@ -1,0 +1,121 @@
+import { lineRanges } from "../mask/limit-at";
+import type { Mask, MaskLine } from "../mask/mask";
+import type { FrequencyRange, LineReading, MarginPoint, Reading, Standing } from "./reading";
+
+type Held = Pick<Reading, "lines" | "guardDb">;
+
+/** Where several sweeps together stand under one line of a mask. Hz and dB. */
+export interface CombinedLine {
+  name: string;
+  standing: Standing;
+  worst: MarginPoint | null;
+  /** Index of the reading that gave the worst margin. */
+  source: number | null;
+  /** Share of the line (log frequency, 0…1) that at least one of the sweeps covered. */
+  coverage: number;
+}
+
+export interface CombinedReading {
+  standing: Standing;
+  lines: CombinedLine[];
+  /** The line that the whole is known by; null when none has a margin. */
+  deciding: (CombinedLine & { worst: MarginPoint; source: number }) | null;
+  /** Lowest coverage over the lines. */
+  coverage: number;
+}
+
+const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
+
+/** What lies in every one of the lists; each is ascending and without overlaps. */
+export function commonRanges(lists: readonly FrequencyRange[][]): FrequencyRange[] {
+  const [first, ...rest] = lists;
+  return rest.reduce<FrequencyRange[]>(
+    (common, list) =>
+      common.flatMap((a) =>
+        list.flatMap((b) => {
+          const startHz = Math.max(a.startHz, b.startHz);
+          const stopHz = Math.min(a.stopHz, b.stopHz);
+          return stopHz > startHz ? [{ startHz, stopHz }] : [];
+        }),
+      ),
+    first ?? [],
+  );
+}
+
+const width = (ranges: readonly FrequencyRange[]) =>
+  ranges.reduce((sum, range) => sum + Math.log(range.stopHz / range.startHz), 0);
+
+function combineLine(line: MaskLine, held: readonly (LineReading | undefined)[]): CombinedLine {
+  const whole = lineRanges(line);
+  const gaps = commonRanges(held.map((reading) => reading?.coverage.gaps ?? whole));
+  const total = width(whole);
+  const coverage = gaps.length === 0 ? 1 : Math.max(0, 1 - width(gaps) / total);
+  let source: number | null = null;
+  let worst: MarginPoint | null = null;
+  held.forEach((reading, i) => {
+    if (reading?.worst && (!worst || reading.worst.marginDb < worst.marginDb)) {
+      worst = reading.worst;
+      source = i;
+    }
+  });
+  return { name: line.name, standing: "undecided", worst, source, coverage };
+}
+
+function standingOf(
+  line: CombinedLine,
+  held: readonly (LineReading | undefined)[],
+  guardDb: number,
+): Standing {
+  if (held.some((reading) => reading?.standing === "over")) return "over";
+  // Below zero and not over: an upper bound, which only the line's own detector can settle.
+  if (!line.worst || line.worst.marginDb < 0 || line.coverage < 1) return "undecided";
+  return line.worst.marginDb < guardDb ? "inside-guard" : "clear";
+}
+
+/**
+ * Readings of several sweeps against the same mask revision taken together, as for a build whose
+ * span is split over sweeps or that was swept in two polarizations: over when one of them is,
+ * undecided while a bound of one of them lies over the line or a part was covered by none, and
+ * otherwise by the lowest margin of all. A guard is that of the bench that gave the margin.
+ */
+export function combineReadings(mask: Mask, readings: readonly Held[]): CombinedReading {
+  const lines = mask.lines.map((line, i) => {
+    const held = readings.map((reading) => reading.lines[i]);
+    const combined = combineLine(line, held);
+    const guardDb = combined.source === null ? 0 : (readings[combined.source]?.guardDb ?? 0);
+    return { ...combined, standing: standingOf(combined, held, guardDb) };
+  });
+  let deciding: CombinedReading["deciding"] = null;
+  for (const line of lines) {
+    const { worst, source } = line;
+    if (!worst || source === null) continue;
+    const byStanding =
+      WORST_FIRST.indexOf(line.standing) - WORST_FIRST.indexOf(deciding?.standing ?? "clear");
+    const isWorse =
+      !deciding || byStanding < 0 || (byStanding === 0 && worst.marginDb < deciding.worst.marginDb);
+    if (isWorse) deciding = { ...line, worst, source };
+  }
+  const standing = WORST_FIRST.find((s) => lines.some((line) => line.standing === s));
+  return {
+    standing: standing ?? "undecided",
+    lines,
+    deciding,
+    coverage: Math.min(1, ...lines.map((line) => line.coverage)),
+  };
+}
+
+/** A sweep that covers less of a mask than this only touches its edge. */
+const TOUCH = 0.01;
+
+/**
+ * Whether a sweep says something about a mask: not when it merely touches its edge, as one that
+ * ends at 1 GHz touches a mask that begins there, unless it is over at that very point.
+ */
+export function reachesMask(reading: Pick<Reading, "lines">): boolean {
+  return reading.lines.some(
+    ({ worst, standing, coverage }) =>
+      worst !== null &&
+      // Spots decide though they cover nothing.
+      (coverage.fraction === 0 || coverage.fraction >= TOUCH || standing === "over"),
+  );
+}

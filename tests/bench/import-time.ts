@@ -43,21 +43,35 @@ async function writeBare(owner: Client, rows: BlockRow[], round: number): Promis
   await owner.query("commit");
 }
 
-/** The same for the roughest floor that noise can have, of which every other sample is a maximum. */
-async function measureRoughImport({ database, importFile }: Place): Promise<Figure> {
-  const files = [0, 1, 2, 3, 4].map((round) => inventFile(POINTS, 900 + round, 1));
-  const { whole } = await measureInTurns(
-    { whole: (round) => importFile(files[round] ?? new Uint8Array(0)) },
-    3,
+const ROUGH_ROUNDS = 5;
+
+/** The same with the roughest floor that noise can have, and with frequencies that are listed. */
+async function measureOtherImports({ database, importFile }: Place): Promise<Figure[]> {
+  const importEach = (options: Parameters<typeof inventFile>[2], seed: number) => {
+    const files = Array.from({ length: 2 + ROUGH_ROUNDS }, (_, round) =>
+      inventFile(POINTS, seed + round, options),
+    );
+    return (round: number) => importFile(files[round] ?? new Uint8Array(0));
+  };
+  const times = await measureInTurns(
+    { rough: importEach({ samples: 1 }, 900), listed: importEach({ isListed: true }, 800) },
+    ROUGH_ROUNDS,
   );
   const { rows } = await database.owner.query<{ most: string }>(
     "select count(*) as most from suspects group by reading_id order by 1 desc limit 1",
   );
-  return {
-    name: `Import of ${POINTS} points with the roughest floor`,
-    measured: milliseconds(whole),
-    beside: `up to ${rows[0]?.most ?? 0} suspects in a reading`,
-  };
+  return [
+    {
+      name: `Import of ${POINTS} points with the roughest floor`,
+      measured: milliseconds(times.rough),
+      beside: `up to ${rows[0]?.most ?? 0} suspects in a reading`,
+    },
+    {
+      name: `Import of ${POINTS} points at equal ratios of frequency`,
+      measured: milliseconds(times.listed),
+      beside: "frequencies are stored one by one",
+    },
+  ];
 }
 
 /** Import of a file up to stored readings against three masks, beside parsing and writing alone. */
@@ -91,6 +105,6 @@ export async function measureImport(place: Place): Promise<Figure[]> {
       limit: { text: `median ≤ ${LIMIT}`, isHeld: middleOf(ratios) <= LIMIT },
       beside: `${milliseconds(times.whole)}; parse ${milliseconds(times.parse)}, write ${milliseconds(times.write)}`,
     },
-    await measureRoughImport(place),
+    ...(await measureOtherImports(place)),
   ];
 }

@@ -23,12 +23,21 @@ export function inventLevels(count: number, seed: number, samples = FAST_SWEEP):
   });
 }
 
+interface FileOptions {
+  samples?: number;
+  /** Frequencies at equal ratios, which are no regular axis and are stored one by one. */
+  isListed?: boolean;
+}
+
 /** Two columns as an analyzer writes them; every file of another seed has other bytes. */
-export function inventFile(count: number, seed: number, samples?: number): Uint8Array {
-  const levels = inventLevels(count, seed, samples);
-  const stepHz = (STOP_HZ - START_HZ) / (count - 1);
+export function inventFile(count: number, seed: number, options: FileOptions = {}): Uint8Array {
+  const levels = inventLevels(count, seed, options.samples);
+  const frequencyAt = (share: number) =>
+    options.isListed
+      ? START_HZ * (STOP_HZ / START_HZ) ** share
+      : START_HZ + (STOP_HZ - START_HZ) * share;
   const rows = Array.from(levels, (level, i) => {
-    return `${(START_HZ + i * stepHz).toFixed(2)},${level.toFixed(3)}`;
+    return `${frequencyAt(i / (count - 1)).toFixed(2)},${level.toFixed(3)}`;
   });
   return Buffer.from(`Frequency (Hz),Peak (dBµV)\n${rows.join("\n")}\n`, "utf8");
 }

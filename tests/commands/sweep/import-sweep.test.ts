@@ -3,6 +3,7 @@ import { inTeam } from "@/db/client";
 import { reviseSignalPath } from "@/lib/commands/bench/revise-signal-path";
 import { createMask } from "@/lib/commands/mask/create-mask";
 import { setProgramMasks } from "@/lib/commands/program/set-program-masks";
+import { CommandError } from "@/lib/commands/result";
 import { importSweep } from "@/lib/commands/sweep/import-sweep";
 import { readSweep } from "@/lib/core/reading/read-sweep";
 import { frequencyAt } from "@/lib/core/sweep/axis";
@@ -21,6 +22,7 @@ import {
   levelsOf,
   makePlace,
   SETTINGS,
+  text,
   TRANSDUCERS,
 } from "../../support/sweeps";
 import { countRows, readingRows } from "./rows";
@@ -219,7 +221,7 @@ describe("importSweep", () => {
   });
 
   test.each(["ambient", "floor"])(
-    "never holds an %s sweep against a mask, nor puts it on record",
+    "never holds a sweep of purpose %s against a mask, nor puts it on record",
     async (purpose) => {
       const ctx = await makeMember(database, "engineer");
       const place = await makePlace(ctx);
@@ -262,5 +264,38 @@ describe("importSweep", () => {
     );
     expect(byTitle.Above).toMatchObject({ standing: "undecided", coverage: { fraction: 0 } });
     expect(byTitle.Volts?.notComparable).toContain("different quantities");
+  });
+
+  test("stores several traces at uneven frequencies in their order, each with its detector", async () => {
+    const ctx = await makeMember(database, "engineer");
+    const mask = flatMask(50, { detector: "quasi-peak" });
+    const place = await makePlace(ctx, mask);
+    const hz = Array.from({ length: 40 }, (_, i) => Math.round(30e6 * 1.06 ** i));
+    const rows = hz.map((f, i) => `${f},${i === 20 ? 58 : 30},${i === 20 ? 41 : 25}`);
+    const bytes = text(`Frequency (Hz),A (dBuV) peak,B (dBuV) QP\n${rows.join("\n")}\n`);
+    const { sweepId, readings } = await importSweep(ctx, importInput(place, bytes));
+    const stored = await inTeam(ctx.db, ctx.teamId, (tx) => loadTraces(tx, ctx.teamId, sweepId));
+    expect(stored.map((trace) => trace.detector)).toEqual(["peak", "quasi-peak"]);
+    for (const [k, levels] of [
+      [0, [30, 58]],
+      [1, [25, 41]],
+    ] as const) {
+      expect(stored[k]?.axis).toEqual({ kind: "listed", frequenciesHz: Float64Array.from(hz) });
+      const at = hz[20] ?? 0;
+      expect(stored[k]?.levelsDb[20]).toBeCloseTo(levels[1] + addedDb(at), 4);
+      expect(stored[k]?.levelsDb[5]).toBeCloseTo(levels[0] + addedDb(hz[5] ?? 0), 4);
+    }
+    // Quasi-peak decides where it was swept; the peak far over the limit is not heard.
+    expect(readings[0]?.marginDb).toBeCloseTo(50 - 41 - addedDb(hz[20] ?? 0), 4);
+  });
+
+  test("never calls a level that no number can hold a level under the mask", async () => {
+    const ctx = await makeMember(database, "engineer");
+    const place = await makePlace(ctx);
+    const outcome = await importLevels(ctx, place, levelsOf(20, { 7: 1e39 })).then(
+      ({ readings }) => readings[0]?.standing,
+      (error: unknown) => (error instanceof CommandError ? error.code : error),
+    );
+    expect(["invalid", "over", "undecided"]).toContain(outcome);
   });
 });

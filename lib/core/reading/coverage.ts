@@ -18,14 +18,18 @@ function localStepHz(axis: FrequencyAxis, i: number): number {
 /** Whether the spacing after point i is no gap: at most twice the median of those around it. */
 function isJoined(axis: FrequencyAxis, i: number): boolean {
   if (axis.kind === "regular") return true;
-  const gap = frequencyAt(axis, i + 1) - frequencyAt(axis, i);
+  const hz = axis.frequenciesHz;
+  const stepAt = (k: number) => (hz[k + 1] ?? Number.NaN) - (hz[k] ?? Number.NaN);
+  const gap = stepAt(i);
   const from = Math.max(0, i - NEIGHBOURS);
-  const to = Math.min(pointCount(axis) - 2, i + NEIGHBOURS);
-  let wide = 0;
-  for (let k = from; k <= to; k += 1)
-    if (2 * (frequencyAt(axis, k + 1) - frequencyAt(axis, k)) >= gap) wide += 1;
-  // With more than half of them wide enough so is their median, without sorting them.
-  return 2 * wide > to - from + 1 || gap <= 2 * localStepHz(axis, i);
+  const to = Math.min(hz.length - 2, i + NEIGHBOURS);
+  // Once more than half of them are wide enough so is their median, without sorting them.
+  let missing = Math.floor((to - from + 1) / 2) + 1;
+  for (let k = from; k <= to; k += 1) {
+    if (2 * stepAt(k) >= gap) missing -= 1;
+    if (missing === 0) return true;
+  }
+  return gap <= 2 * localStepHz(axis, i);
 }
 
 /** Ranges merged and in ascending order. */

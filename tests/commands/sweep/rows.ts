@@ -17,7 +17,7 @@ export async function countRows(database: TestDatabase, teamId: string) {
 
 export const NOTHING = Object.fromEntries(TABLES.map((table) => [table, 0]));
 
-export interface ReadingRow {
+interface ReadingRow {
   sweep_id: string;
   mask_id: string;
   revision: number;

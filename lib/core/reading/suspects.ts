@@ -78,7 +78,8 @@ function isDecided(traces: readonly Trace[], line: MaskLine, hz: number): boolea
 
 /**
  * Suspects of traces in the mask's unit, lowest margin first: maxima of the wanted prominence,
- * one RBW or more from a stronger one, at most `marginDb` under the line with the least margin.
+ * one RBW or more from one with a lower margin (by level alone, a peak trace far under its line
+ * would hide the average trace that is over), at most `marginDb` under the line.
  * Where the line's own detector was swept, an upper bound of another one is no suspect.
  */
 export function findSuspects(
@@ -123,7 +124,7 @@ export function findSuspects(
   const cell = (hz: number) => (rbwHz > 0 ? Math.floor(hz / rbwHz) : hz);
   const reach = rbwHz > 0 ? [-1, 0, 1] : [0];
   return candidates
-    .sort((a, b) => b.levelDb - a.levelDb || a.marginDb - b.marginDb)
+    .sort((a, b) => a.marginDb - b.marginDb || b.levelDb - a.levelDb)
     .filter(({ sampleHz }) => {
       const own = cell(sampleHz);
       const near = reach.flatMap((d) => taken.get(own + d) ?? []);
@@ -131,6 +132,5 @@ export function findSuspects(
       taken.set(own, [...(taken.get(own) ?? []), sampleHz]);
       return true;
     })
-    .sort((a, b) => a.marginDb - b.marginDb)
     .map((suspect, i) => ({ ...suspect, number: i + 1 }));
 }

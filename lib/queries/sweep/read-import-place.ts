@@ -91,5 +91,3 @@ export async function readImportPlace(ctx: Context, buildId: string, stepId: str
     return { build, steps, benches: benchRows, last };
   });
 }
-
-export type ImportPlace = NonNullable<Awaited<ReturnType<typeof readImportPlace>>>;

@@ -10,7 +10,6 @@ export function DeltaTable({ delta }: { delta: SweepDelta }) {
   if (!changes) return <NotComparable delta={delta} />;
   return (
     <div>
-      <p className="mb-2">{changes.sentence}</p>
       <div
         className="overflow-x-auto"
         tabIndex={0}

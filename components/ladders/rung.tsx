@@ -11,6 +11,7 @@ import type { Standing } from "@/lib/core/reading/reading";
 import { formatMargin } from "@/lib/core/units/format";
 import { StandingMark } from "../readings/standing-mark";
 import { DeltaTable } from "./delta-table";
+import { DeltaValue } from "./delta-value";
 import { StepForm } from "./step-form";
 
 export interface RungStep {
@@ -64,7 +65,7 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
         {step.position}
       </span>
       <div className="flex flex-wrap items-start gap-x-6 gap-y-2">
-        <div className="min-w-0 flex-1">
+        <div className="min-w-0 flex-1 basis-72">
           <h3 className="text-lg">
             <span className="sr-only">Step {step.position}: </span>
             {step.name}
@@ -75,8 +76,8 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
           </p>
         </div>
         {step.worst ? (
-          <div className="text-right">
-            <p className="flex items-baseline justify-end gap-3">
+          <div className="sm:text-right">
+            <p className="flex items-baseline gap-3 sm:justify-end">
               <span className="font-mono text-2xl whitespace-nowrap">
                 {formatMargin(step.worst.marginDb)}
               </span>
@@ -163,30 +164,67 @@ function Deltas({ step }: { step: RungStep }) {
     );
   return (
     <>
-      <DeltaGroup title={`Against step ${step.position - 1}`} deltas={step.againstPrevious} open />
+      <DeltaGroup title={`Against step ${step.position - 1}`} deltas={step.againstPrevious} />
       {step.position > 1 ? (
-        <DeltaGroup title="Against step 0" deltas={step.againstStart} open={false} />
+        <details>
+          <summary className="cursor-pointer text-sm text-deep underline">Against step 0</summary>
+          <div className="mt-3">
+            <DeltaGroup title="Against step 0" deltas={step.againstStart} />
+          </div>
+        </details>
       ) : null}
     </>
   );
 }
 
-function DeltaGroup(props: { title: string; deltas: SweepDelta[]; open: boolean }) {
-  const { title, deltas, open } = props;
+function DeltaGroup({ title, deltas }: { title: string; deltas: SweepDelta[] }) {
   if (deltas.length === 0) return null;
   return (
-    <details open={open} className="border border-rule bg-sheet px-4 py-3">
-      <summary className="cursor-pointer font-medium">{title}</summary>
-      <div className="mt-3 space-y-6">
+    <div className="border border-rule bg-sheet px-4 py-3">
+      <h4 className="mb-2 font-medium">{title}</h4>
+      <div className="space-y-4">
         {deltas.map((delta) => (
           <div key={`${delta.beforeName} ${delta.afterName}`}>
-            {deltas.length > 1 ? (
-              <h4 className="mb-1 text-sm text-ink-soft">{delta.afterName}</h4>
-            ) : null}
-            <DeltaTable delta={delta} />
+            {deltas.length > 1 ? <p className="text-sm text-ink-soft">{delta.afterName}</p> : null}
+            <DeltaSummary delta={delta} />
           </div>
         ))}
       </div>
-    </details>
+    </div>
+  );
+}
+
+/** The sentence and the changes of margin; the numbers behind them on request. */
+function DeltaSummary({ delta }: { delta: SweepDelta }) {
+  const { changes } = delta;
+  if (!changes) return <DeltaTable delta={delta} />;
+  const told = changes.margins.filter(
+    (margin) => margin.beforeDb !== null || margin.afterDb !== null,
+  );
+  return (
+    <>
+      <p>{changes.sentence}</p>
+      <ul className="mt-1 flex flex-wrap gap-x-6 gap-y-1">
+        {told.map((margin) => (
+          <li
+            key={`${margin.maskRevisionId} ${margin.lineName}`}
+            className="flex items-baseline gap-2"
+          >
+            <span className="text-sm text-ink-soft">{margin.lineName} margin</span>
+            {margin.note ? (
+              <span className="text-sm text-shoal">not comparable</span>
+            ) : (
+              <DeltaValue changeDb={margin.changeDb} better="up" />
+            )}
+          </li>
+        ))}
+      </ul>
+      <details className="mt-2">
+        <summary className="cursor-pointer text-sm text-deep underline">All numbers</summary>
+        <div className="mt-3">
+          <DeltaTable delta={delta} />
+        </div>
+      </details>
+    </>
   );
 }

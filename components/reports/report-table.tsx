@@ -19,7 +19,7 @@ interface ReportTableProps {
 export function ReportTable({ reports }: ReportTableProps) {
   return (
     <div
-      className="overflow-x-auto border border-rule bg-sheet"
+      className="relative overflow-x-auto border border-rule bg-sheet"
       tabIndex={0}
       role="region"
       aria-label="Reports"

@@ -13,10 +13,10 @@ const exists = (path: string) =>
 export function folderStore(
   folder = join(process.env.NEAP_DATA_DIR ?? ".neap", "files"),
 ): FileStore {
-  const root = resolve(folder);
+  const root = resolve(/* turbopackIgnore: true */ folder);
   const at = (key: string) => {
     if (!/^[\w-]+(\/[\w-]+)*$/.test(key)) throw new Error(`"${key}" is no key of a file.`);
-    return join(root, key);
+    return join(/* turbopackIgnore: true */ root, key);
   };
   return {
     put: async (key, bytes) => {

@@ -4,7 +4,7 @@ import type { Mask } from "@/lib/core/mask/mask";
 import { maskFromJson } from "@/lib/core/mask/mask-json";
 
 async function readShippedMask(folder: string, file: string): Promise<Mask> {
-  const text = await readFile(join(folder, file), "utf8");
+  const text = await readFile(join(/* turbopackIgnore: true */ folder, file), "utf8");
   let json: unknown;
   try {
     json = JSON.parse(text);
@@ -25,6 +25,8 @@ async function readShippedMask(folder: string, file: string): Promise<Mask> {
 
 /** The masks of the folder `masks/`, by key; throws with the file's name when one is broken. */
 export async function readShippedMasks(folder = join(process.cwd(), "masks")): Promise<Mask[]> {
-  const files = (await readdir(folder)).filter((file) => file.endsWith(".json")).sort();
+  const files = (await readdir(/* turbopackIgnore: true */ folder))
+    .filter((file) => file.endsWith(".json"))
+    .sort();
   return Promise.all(files.map((file) => readShippedMask(folder, file)));
 }

@@ -78,7 +78,7 @@ describe("findSuspects", () => {
         expect(found[0]!.marginDb).toBeCloseTo(50 - highest, 4);
         found.forEach((suspect, i) => {
           expect(suspect.number).toBe(i + 1);
-          if (i > 0) expect(suspect.marginDb).toBeGreaterThanOrEqual(found[i - 1]!.marginDb);
+          if (i > 0) expect(suspect.marginDb!).toBeGreaterThanOrEqual(found[i - 1]!.marginDb!);
           for (const other of found.slice(0, i))
             expect(Math.abs(other.sampleHz - suspect.sampleHz)).toBeGreaterThanOrEqual(1e6);
         });

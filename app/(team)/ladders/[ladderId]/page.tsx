@@ -35,6 +35,7 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
   const mayWrite = isAllowed(ctx, "sweep.write") && ladder.archivedAt === null;
   const answer = ladderAnswer(ladder.steps);
   const overlay = chooseOverlay(ladder);
+  const bought = ladder.steps.length > 1 ? boughtPerLine(ladder.steps) : [];
   return (
     <>
       <PageHead
@@ -68,15 +69,31 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
             : "No delta can be given yet: the steps below say why."}
         </p>
       )}
-      {boughtPerLine(ladder.steps).map((line) => (
+      {bought.length > 0 ? (
         <Section
-          key={line.key}
-          title={`What each step bought: ${line.title}`}
-          lead="Change of the worst margin against the step before."
+          title="What each step bought"
+          lead="Change of the worst margin of each mask line against the step before."
         >
-          <DeltaBars items={line.items} />
+          <div className="grid gap-x-12 gap-y-6 lg:grid-cols-2">
+            {bought.map((line) => (
+              <div key={line.key}>
+                <h3 className="mb-2 text-base">{line.title}</h3>
+                <DeltaBars items={line.items} />
+              </div>
+            ))}
+          </div>
         </Section>
-      ))}
+      ) : null}
+      {overlay ? (
+        <Section title="Before and after">
+          <Overlay
+            sweeps={overlaySweeps(ladder.steps)}
+            before={overlay.before}
+            after={overlay.after}
+            masks={ladder.masks}
+          />
+        </Section>
+      ) : null}
       <Section title="Steps">
         <ol className="ml-4">
           {ladder.steps.map((step, i) => (
@@ -94,16 +111,6 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
       {mayWrite ? (
         <Section title="Add a step">
           <StepForm action={appendStep} about={{ ladderId: ladder.id }} label="Add step" />
-        </Section>
-      ) : null}
-      {overlay ? (
-        <Section title="Before and after">
-          <Overlay
-            sweeps={overlaySweeps(ladder.steps)}
-            before={overlay.before}
-            after={overlay.after}
-            masks={ladder.masks}
-          />
         </Section>
       ) : null}
     </>

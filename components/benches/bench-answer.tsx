@@ -11,7 +11,7 @@ export function BenchAnswer({ benches }: BenchAnswerProps) {
   return (
     <div className="mb-6">
       <p>
-        <span className="font-mono text-4xl whitespace-nowrap">{number}</span>{" "}
+        <span className="font-mono text-4xl [word-spacing:-0.3em] whitespace-nowrap">{number}</span>{" "}
         <span className="text-lg">{words}</span>
       </p>
       {rest ? <p className="mt-1 text-shoal">{rest}</p> : null}

@@ -47,48 +47,51 @@ export function BenchForm({ action, bench }: BenchFormProps) {
   });
   const { fieldErrors } = form;
   return (
-    <form onSubmit={form.onSubmit} method="post" className="max-w-md">
+    <form onSubmit={form.onSubmit} method="post" className="max-w-3xl">
       <ErrorNote message={form.message} />
-      <Field label="Name" name="name" defaultValue={bench?.name} error={fieldErrors.name} />
-      <Field
-        label="Site"
-        name="site"
-        hint="Where it stands: a room, a chamber, a table."
-        defaultValue={bench?.site}
-        error={fieldErrors.site}
-      />
-      <Field
-        label="Instrument"
-        name="instrument"
-        defaultValue={bench?.instrument}
-        error={fieldErrors.instrument}
-      />
-      <Field
-        label="Measuring distance in m"
-        name="distanceM"
-        inputMode="decimal"
-        hint="Leave it empty where there is none, as on a mains bench."
-        defaultValue={bench?.distanceM ?? ""}
-        error={fieldErrors.distanceM}
-      />
-      <Field
-        label="Guard in dB"
-        name="guardDb"
-        inputMode="decimal"
-        hint="Margins smaller than this are shown as inside guard. Write 0 for none."
-        defaultValue={bench?.guardDb}
-        error={fieldErrors.guardDb}
-      />
-      {bench ? null : (
+      <div className="grid gap-x-5 sm:grid-cols-2">
+        <Field label="Name" name="name" defaultValue={bench?.name} error={fieldErrors.name} />
         <Field
-          label="Impedance of the instrument's input in Ω"
-          name="impedanceOhm"
-          inputMode="decimal"
-          hint="50 on most analyzers, 75 on some for cable networks. Levels in dBm are turned into dBµV with it."
-          defaultValue={50}
-          error={fieldErrors.impedanceOhm}
+          label="Site"
+          name="site"
+          hint="Where it stands: a room, a chamber, a table."
+          defaultValue={bench?.site}
+          error={fieldErrors.site}
         />
-      )}
+        <Field
+          label="Instrument"
+          name="instrument"
+          hint="What kind it is, and its range."
+          defaultValue={bench?.instrument}
+          error={fieldErrors.instrument}
+        />
+        <Field
+          label="Measuring distance in m"
+          name="distanceM"
+          inputMode="decimal"
+          hint="Leave it empty where there is none, as on a mains bench."
+          defaultValue={bench?.distanceM ?? ""}
+          error={fieldErrors.distanceM}
+        />
+        <Field
+          label="Guard in dB"
+          name="guardDb"
+          inputMode="decimal"
+          hint="Margins smaller than this are shown as inside guard. Write 0 for none."
+          defaultValue={bench?.guardDb}
+          error={fieldErrors.guardDb}
+        />
+        {bench ? null : (
+          <Field
+            label="Impedance of the instrument's input in Ω"
+            name="impedanceOhm"
+            inputMode="decimal"
+            hint="50 on most analyzers, 75 on some for cable networks. Levels in dBm are turned into dBµV with it."
+            defaultValue={50}
+            error={fieldErrors.impedanceOhm}
+          />
+        )}
+      </div>
       <TextArea label="Notes" name="notes" defaultValue={bench?.notes} error={fieldErrors.notes} />
       <div className="flex gap-2">
         <Button type="submit" disabled={form.pending}>

@@ -3,6 +3,7 @@
 import Link from "next/link";
 import type { DataColumn } from "@/components/ui/data-table";
 import { DataTable } from "@/components/ui/data-table";
+import { keepUnits } from "@/components/ui/keep-units";
 import { calibrationWords } from "./calibration";
 
 interface BenchLine {
@@ -27,14 +28,24 @@ const COLUMNS: DataColumn<BenchLine>[] = [
     cell: (b) => (
       <>
         <Link href={`/benches/${b.id}`} className="font-medium text-deep underline">
-          {b.name}
+          {keepUnits(b.name)}
         </Link>
         {b.archived ? <span className="ml-2 text-sm text-ink-soft">archived</span> : null}
       </>
     ),
   },
-  { id: "site", header: "Site", value: (b) => b.site || null },
-  { id: "instrument", header: "Instrument", value: (b) => b.instrument || null },
+  {
+    id: "site",
+    header: "Site",
+    value: (b) => b.site || null,
+    cell: (b) => keepUnits(b.site),
+  },
+  {
+    id: "instrument",
+    header: "Instrument",
+    value: (b) => b.instrument || null,
+    cell: (b) => keepUnits(b.instrument),
+  },
   {
     id: "distance",
     header: "Distance in m",
@@ -56,7 +67,7 @@ const COLUMNS: DataColumn<BenchLine>[] = [
     header: "Calibrations",
     value: calibrationWords,
     cell: (b) => (
-      <span className={b.overdue > 0 ? "bg-shoal-bed px-1 text-shoal" : ""}>
+      <span className={b.overdue > 0 ? "bg-shoal-bed px-1 whitespace-nowrap text-shoal" : ""}>
         {calibrationWords(b)}
       </span>
     ),

@@ -1,6 +1,7 @@
 "use client";
 
 import { useState } from "react";
+import { FileField } from "@/components/ui/file-field";
 import { SelectField } from "@/components/ui/select-field";
 import { TextArea } from "@/components/ui/text-area";
 import { readTextFile } from "./read-text-file";
@@ -19,14 +20,10 @@ interface FactorTableFieldProps {
 export function FactorTableField({ draft, name, error, onChange }: FactorTableFieldProps) {
   const [fileMessage, setFileMessage] = useState<string | null>(null);
 
-  async function load(input: HTMLInputElement) {
-    const file = input.files?.[0];
-    if (!file) return;
+  async function load(file: File) {
     const read = await readTextFile(file);
     setFileMessage(read.ok ? `Loaded from ${file.name}.` : read.message);
     if (read.ok) onChange({ text: read.text });
-    // The same file may be chosen again after it was mended.
-    input.value = "";
   }
 
   const typed = draft.table.state === "unreadable" ? draft.table.message : undefined;
@@ -35,15 +32,15 @@ export function FactorTableField({ draft, name, error, onChange }: FactorTableFi
       <TextArea
         label="Factor table"
         name={name}
-        hint="Frequency and factor in two columns, one row per point: typed, pasted from a spreadsheet, or from a CSV file."
-        rows={8}
+        hint="Frequency and factor in two columns, one row per point."
+        rows={9}
         spellCheck={false}
         className="font-mono"
         value={draft.text}
         onChange={(event) => onChange({ text: event.target.value })}
         error={typed ?? error}
       />
-      <p role="status" className="-mt-3 mb-3 text-sm text-ink-soft">
+      <p role="status" className="-mt-2 mb-3 text-sm">
         {[tableWords(draft.table), fileMessage ?? ""].join(" ").trim()}
       </p>
       <div className="flex flex-wrap gap-x-6">
@@ -53,15 +50,11 @@ export function FactorTableField({ draft, name, error, onChange }: FactorTableFi
           value={draft.unit}
           onChange={(event) => onChange({ unit: event.target.value })}
         />
-        <label className="mb-4 block">
-          <span className="mb-1 block font-medium">Load a CSV file</span>
-          <input
-            type="file"
-            accept=".csv,.tsv,.txt,text/*"
-            className="block max-w-full"
-            onChange={(event) => void load(event.currentTarget)}
-          />
-        </label>
+        <FileField
+          label="Load a CSV file"
+          accept=".csv,.tsv,.txt,text/*"
+          onFile={(file) => void load(file)}
+        />
       </div>
     </div>
   );

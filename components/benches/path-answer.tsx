@@ -22,7 +22,7 @@ export function PathAnswer({ transducers, today }: PathAnswerProps) {
   return (
     <div className="mb-6">
       <p>
-        <span className="font-mono text-4xl whitespace-nowrap">
+        <span className="font-mono text-4xl [word-spacing:-0.3em] whitespace-nowrap">
           {count("in-date")} of {total}
         </span>{" "}
         <span className="text-lg">

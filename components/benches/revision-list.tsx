@@ -1,4 +1,5 @@
 import Link from "next/link";
+import { keepUnits } from "@/components/ui/keep-units";
 
 interface RevisionListProps {
   /** Newest first. */
@@ -26,7 +27,7 @@ export function RevisionList({ revisions, shown, href }: RevisionListProps) {
           <time dateTime={createdAt.toISOString()} className="font-mono">
             {createdAt.toISOString().slice(0, 16).replace("T", " ")} UTC
           </time>
-          <span className="text-ink-soft">{summary}</span>
+          <span className="text-ink-soft">{keepUnits(summary)}</span>
           <span className="ml-auto text-sm text-ink-soft">
             {[...(i === 0 ? ["current"] : []), ...(revision === shown ? ["shown above"] : [])].join(
               ", ",

@@ -1,3 +1,4 @@
+import { keepUnits } from "@/components/ui/keep-units";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
 import { calibrationState } from "./calibration";
 import { factorSpan } from "./factor-span";
@@ -37,13 +38,13 @@ export function SignalPathTable({ path, today }: SignalPathTableProps) {
           {path.transducers.map((transducer, i) => (
             <tr key={transducer.name} className="border-b border-rule last:border-0">
               <td className="px-3 py-2 font-mono">{i + 1}</td>
-              <th scope="row" className="px-3 py-2 font-medium">
-                {transducer.name}
+              <th scope="row" className="min-w-40 px-3 py-2 font-medium">
+                {keepUnits(transducer.name)}
                 <span className="block text-sm font-normal text-ink-soft">
                   {TRANSDUCER_KIND_LABELS[transducer.kind]}
                 </span>
               </th>
-              <td className="px-3 py-2 text-sm">{FACTOR_MEANINGS[transducer.kind]}</td>
+              <td className="min-w-36 px-3 py-2 text-sm">{FACTOR_MEANINGS[transducer.kind]}</td>
               <td className="px-3 py-2 font-mono whitespace-nowrap">
                 {factorSpan(transducer.factors)}
               </td>

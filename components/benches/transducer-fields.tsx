@@ -31,7 +31,7 @@ export function TransducerFields(props: TransducerFieldsProps) {
   const at = `transducers.${place}`;
   const called = draft.name.trim() || `transducer ${place + 1}`;
   return (
-    <fieldset className="mb-6 border border-rule bg-sheet p-4">
+    <fieldset className="mb-6 min-w-0 border border-rule bg-sheet p-4">
       <legend className="px-2 font-title text-lg">
         {place + 1}. {draft.name.trim() || "New transducer"}
       </legend>
@@ -79,22 +79,24 @@ export function TransducerFields(props: TransducerFieldsProps) {
             }
             error={errorOf("kind")}
           />
-          <Field
-            label="Calibrated on"
-            name={`${at}.calibratedOn`}
-            type="date"
-            value={draft.calibratedOn}
-            onChange={(event) => onPatch({ calibratedOn: event.target.value })}
-            error={errorOf("calibratedOn")}
-          />
-          <Field
-            label="Calibration due on"
-            name={`${at}.dueOn`}
-            type="date"
-            value={draft.dueOn}
-            onChange={(event) => onPatch({ dueOn: event.target.value })}
-            error={errorOf("dueOn")}
-          />
+          <div className="grid gap-x-4 lg:grid-cols-2">
+            <Field
+              label="Calibrated on"
+              name={`${at}.calibratedOn`}
+              type="date"
+              value={draft.calibratedOn}
+              onChange={(event) => onPatch({ calibratedOn: event.target.value })}
+              error={errorOf("calibratedOn")}
+            />
+            <Field
+              label="Calibration due on"
+              name={`${at}.dueOn`}
+              type="date"
+              value={draft.dueOn}
+              onChange={(event) => onPatch({ dueOn: event.target.value })}
+              error={errorOf("dueOn")}
+            />
+          </div>
         </div>
         <FactorTableField
           draft={draft}

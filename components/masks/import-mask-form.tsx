@@ -5,6 +5,7 @@ import { useState } from "react";
 import { readTextFile } from "@/components/benches/read-text-file";
 import { Button, ButtonLink } from "@/components/ui/button";
 import { ErrorNote } from "@/components/ui/error-note";
+import { FileField } from "@/components/ui/file-field";
 import { TextArea } from "@/components/ui/text-area";
 import { useActionForm } from "@/components/ui/use-action-form";
 
@@ -24,13 +25,10 @@ export function ImportMaskForm({ action }: { action: (input: unknown) => Promise
   });
   const problems = Object.entries(form.fieldErrors).filter(([path]) => path !== "text");
 
-  async function load(input: HTMLInputElement) {
-    const file = input.files?.[0];
-    if (!file) return;
+  async function load(file: File) {
     const read = await readTextFile(file);
     setFileMessage(read.ok ? `Loaded from ${file.name}; nothing is stored yet.` : read.message);
     if (read.ok) setText(read.text);
-    input.value = "";
   }
 
   return (
@@ -46,16 +44,12 @@ export function ImportMaskForm({ action }: { action: (input: unknown) => Promise
           ))}
         </ul>
       ) : null}
-      <label className="mb-4 block">
-        <span className="mb-1 block font-medium">Choose a mask file</span>
-        <input
-          type="file"
-          accept=".json,application/json"
-          className="block max-w-full"
-          onChange={(event) => void load(event.currentTarget)}
-        />
-      </label>
-      <p role="status" className="mb-2 text-sm text-ink-soft">
+      <FileField
+        label="Mask file"
+        accept=".json,application/json"
+        onFile={(file) => void load(file)}
+      />
+      <p role="status" className="mb-2 text-sm empty:mb-0">
         {fileMessage}
       </p>
       <TextArea

@@ -66,9 +66,9 @@ export function MaskEditor({ save, edited }: MaskEditorProps) {
   return (
     <form onSubmit={form.onSubmit} method="post" noValidate>
       <ErrorNote message={form.message} />
-      <div className="grid gap-8 lg:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
+      <MaskFields draft={draft} errorAt={(path) => problemAt(problems, path)} onPatch={patch} />
+      <div className="mt-2 grid gap-6 lg:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
         <div className="min-w-0">
-          <MaskFields draft={draft} errorAt={(path) => problemAt(problems, path)} onPatch={patch} />
           {draft.lines.map((line, place) => (
             <MaskLineFields
               key={line.id}

@@ -33,7 +33,7 @@ interface MaskFieldsProps {
 /** What a mask is and where its numbers come from. */
 export function MaskFields({ draft, errorAt, onPatch }: MaskFieldsProps) {
   return (
-    <div className="grid gap-x-4 sm:grid-cols-2">
+    <div className="grid gap-x-4 sm:grid-cols-2 lg:grid-cols-4">
       <Field
         label="Title"
         name="title"
@@ -101,9 +101,10 @@ export function MaskFields({ draft, errorAt, onPatch }: MaskFieldsProps) {
         }
         error={errorAt("provenance")}
       />
-      <div className="sm:col-span-2">
+      <div className="sm:col-span-2 lg:col-span-3">
         <TextArea
           label="Note"
+          rows={2}
           name="note"
           value={draft.note}
           onChange={(event) => onPatch({ note: event.target.value })}
@@ -111,9 +112,9 @@ export function MaskFields({ draft, errorAt, onPatch }: MaskFieldsProps) {
         />
       </div>
       <SelectField
-        label="Plain numbers for frequencies are in"
+        label="Plain numbers are in"
         name="frequencyUnit"
-        hint="What is typed is shown with its unit as soon as the cell is left."
+        hint="For frequencies typed without a unit; each is shown with its unit when you leave it."
         options={FREQUENCY_OPTIONS}
         value={draft.frequencyUnit}
         onChange={(event) => onPatch({ frequencyUnit: event.target.value })}

@@ -51,11 +51,11 @@ export function MaskLineFields(props: MaskLineFieldsProps) {
   }
 
   return (
-    <fieldset className="mb-6 border border-rule bg-sheet p-4">
+    <fieldset className="mb-6 min-w-0 border border-rule bg-sheet p-4">
       <legend className="px-2 font-title text-lg">{line.name.trim() || `Line ${place + 1}`}</legend>
       <div className="grid gap-x-4 sm:grid-cols-2">
         <Field
-          label="Line"
+          label="Name of the line"
           name={`${at}.name`}
           value={line.name}
           onChange={(event) => changes.patch({ name: event.target.value })}
@@ -97,7 +97,7 @@ export function MaskLineFields(props: MaskLineFieldsProps) {
           <thead className="text-sm text-ink-soft">
             <tr>
               {HEADS.map((head) => (
-                <th key={head} scope="col" className="px-1 py-1 font-medium">
+                <th key={head} scope="col" className="px-1 py-1 align-bottom font-medium">
                   {head || <span className="sr-only">Number</span>}
                 </th>
               ))}
@@ -130,7 +130,12 @@ export function MaskLineFields(props: MaskLineFieldsProps) {
         <Button look="quiet" onClick={changes.addSegment}>
           Add segment
         </Button>
-        <Button look="quiet" aria-label={`Remove ${called}`} onClick={changes.remove}>
+        <Button
+          look="quiet"
+          className="ml-auto"
+          aria-label={`Remove ${called}`}
+          onClick={changes.remove}
+        >
           Remove line
         </Button>
       </div>

@@ -23,7 +23,7 @@ export function MaskLines({ mask }: { mask: Mask }) {
   return mask.lines.map((line) => (
     <div
       key={line.name}
-      className="mb-6 overflow-x-auto border border-rule bg-sheet"
+      className="mb-4 max-w-3xl overflow-x-auto border border-rule bg-sheet"
       tabIndex={0}
       role="region"
       aria-label={`Segments of ${line.name}`}
@@ -38,25 +38,25 @@ export function MaskLines({ mask }: { mask: Mask }) {
         </caption>
         <thead className="text-sm text-ink-soft">
           <tr className="border-y border-rule">
-            <th className="px-3 py-2 text-right font-medium">From</th>
-            <th className="px-3 py-2 text-right font-medium">To</th>
-            <th className="px-3 py-2 text-right font-medium">Limit at start</th>
-            <th className="px-3 py-2 text-right font-medium">Limit at end</th>
+            <th className="px-3 py-1.5 text-right font-medium">From</th>
+            <th className="px-3 py-1.5 text-right font-medium">To</th>
+            <th className="px-3 py-1.5 text-right font-medium">Limit at start</th>
+            <th className="px-3 py-1.5 text-right font-medium">Limit at end</th>
             <th className="px-3 py-2 font-medium">Between</th>
           </tr>
         </thead>
         <tbody>
           {line.segments.map((segment, i) => (
             <tr key={i} className="border-b border-rule last:border-0">
-              <td className="px-3 py-2 text-right font-mono whitespace-nowrap">
+              <td className="px-3 py-1.5 text-right font-mono whitespace-nowrap">
                 {writeFrequency(segment.startHz)}
               </td>
-              <td className="px-3 py-2 text-right font-mono whitespace-nowrap">
+              <td className="px-3 py-1.5 text-right font-mono whitespace-nowrap">
                 {writeFrequency(segment.stopHz)}
               </td>
-              <td className="px-3 py-2 text-right font-mono">{levelText(segment.startDb)}</td>
-              <td className="px-3 py-2 text-right font-mono">{levelText(segment.stopDb)}</td>
-              <td className="px-3 py-2 text-sm text-ink-soft">
+              <td className="px-3 py-1.5 text-right font-mono">{levelText(segment.startDb)}</td>
+              <td className="px-3 py-1.5 text-right font-mono">{levelText(segment.stopDb)}</td>
+              <td className="px-3 py-1.5 text-sm text-ink-soft">
                 {segment.startDb === segment.stopDb
                   ? "flat"
                   : INTERPOLATION_LABELS[segment.interpolation]}

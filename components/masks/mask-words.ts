@@ -16,6 +16,27 @@ export const PROVENANCE_LABELS: Record<Provenance, string> = {
   team: "the team's own",
 };
 
+/** The same beside a mask in a table, where the line has little room. */
+export const PROVENANCE_MARKS: Record<Provenance, string> = {
+  read: "read in document",
+  "from memory": "from memory",
+  team: "the team's own",
+};
+
+/** Shipped masks say "not stated" where their document does not say it. */
+const isStated = (text: string) => text !== "" && text !== "not stated";
+
+/** "CISPR 32 / EN 55032, Annex A": the document with the clause when it is known. */
+export function sourceWords({ document, clause }: { document: string; clause: string }): string {
+  if (!isStated(document)) return "document not stated";
+  return isStated(clause) ? `${document}, ${clause}` : document;
+}
+
+/** The edition, or that nobody stated it. */
+export function editionWords({ edition }: { edition: string }): string {
+  return isStated(edition) ? edition : "not stated";
+}
+
 export const INTERPOLATION_LABELS: Record<Interpolation, string> = {
   log: "straight over log frequency",
   linear: "straight over frequency",

@@ -75,7 +75,7 @@ export function SegmentRow(props: SegmentRowProps) {
   return (
     <>
       <tr>
-        <td className="px-2 py-1 font-mono text-sm text-ink-soft">{place + 1}</td>
+        <td className="px-1 py-1 font-mono text-sm text-ink-soft">{place + 1}</td>
         {CELLS.map((cell) => (
           <td key={cell.key} className="px-1 py-1">
             <input
@@ -89,7 +89,7 @@ export function SegmentRow(props: SegmentRowProps) {
               aria-describedby={describedBy}
               autoComplete="off"
               inputMode={cell.isFrequency ? "text" : "decimal"}
-              className={`${CONTROL} min-w-20 text-right font-mono`}
+              className={`${CONTROL} px-2! text-right font-mono ${cell.isFrequency ? "min-w-26" : "min-w-18"}`}
               value={segment[cell.key]}
               onChange={(event) => props.onPatch({ [cell.key]: event.target.value })}
               onBlur={() => leave(cell)}
@@ -102,7 +102,7 @@ export function SegmentRow(props: SegmentRowProps) {
         <td className="px-1 py-1">
           <select
             aria-label={`interpolation, ${called}`}
-            className={CONTROL}
+            className={`${CONTROL} min-w-22 px-1!`}
             value={segment.interpolation}
             onChange={(event) =>
               props.onPatch({
@@ -144,7 +144,7 @@ function RowButton(props: { label: string; onClick: () => void; children: string
       type="button"
       aria-label={props.label}
       onClick={props.onClick}
-      className="min-h-6 cursor-pointer px-1.5 text-deep underline"
+      className="min-h-6 cursor-pointer px-1 text-deep underline"
     >
       {props.children}
     </button>

@@ -6,7 +6,9 @@ import type { Provenance } from "@/lib/core/mask/mask";
 import { Button } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
 import { ErrorNote } from "@/components/ui/error-note";
+import { editionWords, PROVENANCE_MARKS, sourceWords } from "@/components/masks/mask-words";
 import { Field } from "@/components/ui/field";
+import { keepUnits } from "@/components/ui/keep-units";
 import { StatusNote } from "@/components/ui/status-note";
 import { useActionForm } from "@/components/ui/use-action-form";
 import type { Outcome } from "./outcome";
@@ -28,12 +30,6 @@ interface MasksFormProps {
   action: (input: unknown) => Promise<Outcome>;
 }
 
-const PROVENANCE_WORDS: Record<Provenance, string> = {
-  read: "read from the document",
-  "from memory": "from memory, confirm it",
-  team: "made by the team",
-};
-
 const textOf = (choice: Choice) =>
   [choice.title, choice.document, choice.clause, choice.edition].join(" ").toLowerCase();
 
@@ -52,8 +48,10 @@ export function MasksForm({ programId, choices, action }: MasksFormProps) {
     },
     onDone: () => setDone("Masks stored."),
   });
+  // What the program holds already stands first, in the order of the library.
+  const ordered = [...choices].sort((a, b) => Number(b.isChosen) - Number(a.isChosen));
   const words = search.toLowerCase().split(/\s+/);
-  const shown = choices.filter((choice) => words.every((word) => textOf(choice).includes(word)));
+  const shown = ordered.filter((choice) => words.every((word) => textOf(choice).includes(word)));
 
   function toggle(id: string, isOn: boolean) {
     const next = new Set(chosen);
@@ -83,12 +81,12 @@ export function MasksForm({ programId, choices, action }: MasksFormProps) {
         value={search}
         onChange={(event) => setSearch(event.target.value)}
       />
-      <fieldset className="mb-4 max-h-96 overflow-y-auto border border-rule bg-sheet">
+      <fieldset className="mb-4 max-h-96 min-w-0 overflow-y-auto border border-rule bg-sheet">
         <legend className="sr-only">Masks that the program must fit under</legend>
         {shown.map((choice) => (
           <label
             key={choice.id}
-            className="flex cursor-pointer gap-3 border-b border-rule px-4 py-2 last:border-0"
+            className="flex cursor-pointer gap-3 border-b border-rule px-4 py-1.5 last:border-0"
           >
             <input
               type="checkbox"
@@ -97,12 +95,12 @@ export function MasksForm({ programId, choices, action }: MasksFormProps) {
               onChange={(event) => toggle(choice.id, event.target.checked)}
             />
             <span className="min-w-0">
-              <span className="font-medium">{choice.title}</span>
+              <span className="font-medium">{keepUnits(choice.title)}</span>
               <span className="block text-sm text-ink-soft">
-                {[choice.document, choice.clause, choice.edition].filter(Boolean).join(", ")}
+                {sourceWords(choice)}, edition {editionWords(choice)}
                 {" · "}
                 <span className={choice.provenance === "from memory" ? "text-shoal" : ""}>
-                  {PROVENANCE_WORDS[choice.provenance]}
+                  {PROVENANCE_MARKS[choice.provenance]}
                 </span>
                 {choice.isArchived ? " · archived: take it off" : ""}
               </span>

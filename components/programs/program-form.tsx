@@ -2,7 +2,7 @@
 
 import { useRouter } from "next/navigation";
 import { useState } from "react";
-import { Button } from "@/components/ui/button";
+import { Button, ButtonLink } from "@/components/ui/button";
 import { ErrorNote } from "@/components/ui/error-note";
 import { Field } from "@/components/ui/field";
 import { readNumber } from "@/components/ui/read-number";
@@ -56,9 +56,12 @@ export function ProgramForm({ action, program }: ProgramFormProps) {
         defaultValue={program?.targetMarginDb}
         error={fieldErrors.targetMarginDb}
       />
-      <Button type="submit" disabled={form.pending}>
-        {program ? "Store details" : "Create program"}
-      </Button>
+      <div className="flex gap-2">
+        <Button type="submit" disabled={form.pending}>
+          {program ? "Store details" : "Create program"}
+        </Button>
+        {program ? null : <ButtonLink href="/programs">Cancel</ButtonLink>}
+      </div>
     </form>
   );
 }

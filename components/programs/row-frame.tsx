@@ -11,7 +11,7 @@ interface RowFrameProps {
 /** One row of a list that is edited as a whole: its fields side by side, and taking it out. */
 export function RowFrame({ label, onRemove, children }: RowFrameProps) {
   return (
-    <fieldset className="mb-3 border border-rule bg-sheet px-4 pt-3">
+    <fieldset className="mb-3 min-w-0 border border-rule bg-sheet px-4 pt-3">
       <legend className="sr-only">{label}</legend>
       <div className="grid items-start gap-x-4 sm:grid-cols-[1fr_1fr_1fr_auto]">
         {children}

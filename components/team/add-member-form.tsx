@@ -33,34 +33,36 @@ export function AddMemberForm({ action }: { action: (input: unknown) => Promise<
   });
   const { fieldErrors } = form;
   return (
-    <form ref={element} onSubmit={form.onSubmit} method="post" className="max-w-md">
+    <form ref={element} onSubmit={form.onSubmit} method="post" className="max-w-3xl">
       <ErrorNote message={form.message} />
       <StatusNote message={done} />
-      <Field label="Name" name="name" autoComplete="off" error={fieldErrors.name} />
-      <Field
-        label="E-mail"
-        name="email"
-        type="email"
-        autoComplete="off"
-        hint="Used to sign in. Neap sends no e-mail to it."
-        error={fieldErrors.email}
-      />
-      <SelectField
-        label="Role"
-        name="role"
-        defaultValue="engineer"
-        options={ROLE_OPTIONS}
-        error={fieldErrors.role}
-      />
-      <Field
-        label="First password"
-        name="password"
-        autoComplete="off"
-        spellCheck={false}
-        className="font-mono"
-        hint="At least 12 characters. You hand it over yourself, and the person changes it under Account."
-        error={fieldErrors.password}
-      />
+      <div className="grid gap-x-5 sm:grid-cols-2">
+        <Field label="Name" name="name" autoComplete="off" error={fieldErrors.name} />
+        <Field
+          label="E-mail"
+          name="email"
+          type="email"
+          autoComplete="off"
+          hint="Used to sign in. Neap sends no e-mail to it."
+          error={fieldErrors.email}
+        />
+        <SelectField
+          label="Role"
+          name="role"
+          defaultValue="engineer"
+          options={ROLE_OPTIONS}
+          error={fieldErrors.role}
+        />
+        <Field
+          label="First password"
+          name="password"
+          autoComplete="off"
+          spellCheck={false}
+          className="font-mono"
+          hint="At least 12 characters. You hand it over yourself, and the person changes it under Account."
+          error={fieldErrors.password}
+        />
+      </div>
       <Button type="submit" disabled={form.pending}>
         Add member
       </Button>

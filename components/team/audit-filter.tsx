@@ -19,7 +19,7 @@ export function AuditFilter({ choices, action, actorId }: AuditFilterProps) {
           name="action"
           defaultValue={action ?? ""}
           options={[
-            { value: "", label: "All actions" },
+            { value: "", label: "Every action" },
             ...choices.actions.map((value) => ({ value, label: describeAction(value) })),
           ]}
         />

@@ -45,7 +45,7 @@ export function MemberRow({ member, isSelf, actions }: MemberRowProps) {
 
   return (
     <tr className="border-b border-rule last:border-0">
-      <td className="px-4 py-3">
+      <td className="px-4 py-3 whitespace-nowrap">
         {name}
         {isSelf ? <span className="text-ink-soft"> (you)</span> : null}
       </td>
@@ -54,7 +54,7 @@ export function MemberRow({ member, isSelf, actions }: MemberRowProps) {
         <span className="flex gap-2">
           <select
             aria-label={`Role of ${name}`}
-            className={`${CONTROL} max-w-36`}
+            className={`${CONTROL} max-w-36 min-w-32`}
             value={chosen ?? member.role}
             disabled={pending}
             onChange={(event) => setChosen(event.target.value)}

@@ -115,8 +115,9 @@ export function DataTable<T extends object>(props: DataTableProps<T>) {
                       onClick={header.column.getToggleSortingHandler()}
                       className="cursor-pointer py-1 tracking-[inherit] whitespace-nowrap hover:text-ink"
                     >
+                      {columns[i]?.align === "right" ? <SortMark sorted={sorted} /> : null}
                       {columns[i]?.header}
-                      <SortMark sorted={sorted} />
+                      {columns[i]?.align === "right" ? null : <SortMark sorted={sorted} />}
                     </button>
                   </th>
                 );
@@ -154,7 +155,7 @@ export function DataTable<T extends object>(props: DataTableProps<T>) {
 /** Drawn, because none of the shipped fonts has these signs. */
 function SortMark({ sorted }: { sorted: false | "asc" | "desc" }) {
   return (
-    <svg aria-hidden width="8" height="8" viewBox="0 0 8 8" className="ml-1 inline-block">
+    <svg aria-hidden width="8" height="8" viewBox="0 0 8 8" className="mx-1 inline-block">
       {sorted ? (
         <path d={sorted === "asc" ? "M0 6 L4 1 L8 6 Z" : "M0 2 L4 7 L8 2 Z"} fill="currentColor" />
       ) : null}

@@ -1,4 +1,5 @@
 import type { ReactNode } from "react";
+import { keepUnits } from "./keep-units";
 
 interface FactsProps {
   items: { label: string; value: ReactNode; mono?: boolean }[];
@@ -12,7 +13,9 @@ export function Facts({ items }: FactsProps) {
         <div key={label} className="border-t border-rule pt-1">
           <dt className="text-sm text-ink-soft">{label}</dt>
           <dd className={`break-words ${mono && value !== null ? "font-mono" : ""}`}>
-            {value ?? <span className="text-ink-soft">not stated</span>}
+            {typeof value === "string"
+              ? keepUnits(value)
+              : (value ?? <span className="text-ink-soft">not stated</span>)}
           </dd>
         </div>
       ))}

@@ -14,22 +14,22 @@ export function describedBy(id: string, hint: ReactNode, error: string | undefin
   return { "aria-invalid": error ? true : undefined, "aria-describedby": ids || undefined };
 }
 
-/** Label above, hint between, error below: the frame of every control of a form. */
+/** Label above, error and hint below, so that controls side by side stand in one line. */
 export function FieldFrame({ id, label, hint, error, children }: FieldFrameProps) {
   return (
     <div className="mb-4">
       <label htmlFor={id} className="mb-1 block font-medium">
         {label}
       </label>
-      {hint ? (
-        <p id={`${id}-hint`} className="mb-1 text-sm text-ink-soft">
-          {hint}
-        </p>
-      ) : null}
       {children}
       {error ? (
         <p id={`${id}-error`} className="mt-1 text-sm text-aground">
           {error}
+        </p>
+      ) : null}
+      {hint ? (
+        <p id={`${id}-hint`} className="mt-1 text-sm text-ink-soft">
+          {hint}
         </p>
       ) : null}
     </div>

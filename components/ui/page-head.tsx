@@ -1,5 +1,6 @@
 import Link from "next/link";
 import type { ReactNode } from "react";
+import { keepUnits } from "./keep-units";
 
 interface PageHeadProps {
   title: string;
@@ -18,7 +19,7 @@ export function PageHead({ title, trail = [], lead, actions }: PageHeadProps) {
           {trail.map(({ href, label }) => (
             <span key={href}>
               <Link href={href} className="text-deep underline">
-                {label}
+                {keepUnits(label)}
               </Link>
               <span aria-hidden className="px-1.5 text-ink-soft">
                 /
@@ -28,8 +29,8 @@ export function PageHead({ title, trail = [], lead, actions }: PageHeadProps) {
         </nav>
       ) : null}
       <div className="flex flex-wrap items-start gap-x-6 gap-y-3">
-        <div className="min-w-0 flex-1">
-          <h1 className="text-3xl break-words">{title}</h1>
+        <div className="min-w-0 flex-[1_1_20rem]">
+          <h1 className="text-3xl break-words">{keepUnits(title)}</h1>
           {lead ? <p className="mt-1 text-ink-soft">{lead}</p> : null}
         </div>
         {actions ? <div className="flex flex-wrap gap-2 print:hidden">{actions}</div> : null}

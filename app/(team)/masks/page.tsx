@@ -23,6 +23,12 @@ export default async function MasksPage(props: { searchParams: Promise<SearchPar
   const archived = all.length - open.length;
   const unsure = open.filter((mask) => mask.provenance === "from memory").length;
   const isFiltered = masksHref({ ...filter, archived: false }) !== "/masks";
+  const clearedHref = masksHref({
+    text: "",
+    port: null,
+    provenance: null,
+    archived: filter.archived,
+  });
   const shown = filterMasks(all, filter);
   return (
     <>
@@ -50,13 +56,22 @@ export default async function MasksPage(props: { searchParams: Promise<SearchPar
           </p>
           {unsure > 0 ? (
             <p className="mt-1 text-shoal">
-              {unsure} {unsure === 1 ? "is" : "are"} from memory: confirm them against your own copy
-              before you lean on them.
+              {unsure === 1
+                ? "1 is from memory: confirm it against your own copy before you lean on it."
+                : `${unsure} are from memory: confirm them against your own copy before you lean on them.`}
             </p>
           ) : null}
         </div>
       ) : null}
       {all.length > 0 ? <MaskFilterForm key={masksHref(filter)} filter={filter} /> : null}
+      {isFiltered && shown.length > 0 ? (
+        <p role="status" className="-mb-4">
+          {shown.length} of {filter.archived ? all.length : open.length} match.{" "}
+          <Link href={clearedHref} className="text-deep underline">
+            Clear the filters
+          </Link>
+        </p>
+      ) : null}
       {shown.length > 0 ? (
         <MaskLibrary masks={shown} />
       ) : (
@@ -71,7 +86,7 @@ export default async function MasksPage(props: { searchParams: Promise<SearchPar
             <>
               {isFiltered ? "No mask matches. " : "Every mask is archived."}
               {isFiltered ? (
-                <Link href="/masks" className="text-deep underline">
+                <Link href={clearedHref} className="text-deep underline">
                   Clear the filters
                 </Link>
               ) : null}

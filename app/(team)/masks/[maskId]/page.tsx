@@ -61,7 +61,7 @@ export default async function MaskPage(props: MaskPageProps) {
             <a
               href={`/masks/${found.id}/json?revision=${shown.revision}`}
               download
-              className="inline-flex min-h-10 items-center px-2 text-deep underline"
+              className="order-first inline-flex min-h-10 items-center px-2 text-deep underline"
             >
               Download JSON
             </a>

@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import { ProgramForm } from "@/components/programs/program-form";
+import { PageHead } from "@/components/ui/page-head";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { addProgram } from "../actions";
@@ -10,7 +11,11 @@ export default async function NewProgramPage() {
   const ctx = await currentContext();
   return (
     <>
-      <h1 className="mb-6 text-3xl">New program</h1>
+      <PageHead
+        title="New program"
+        trail={[{ href: "/programs", label: "Programs" }]}
+        lead="Its masks and milestones come next, under Edit."
+      />
       {isAllowed(ctx, "program.write") ? (
         <ProgramForm action={addProgram} />
       ) : (

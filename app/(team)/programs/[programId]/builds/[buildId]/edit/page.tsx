@@ -29,6 +29,7 @@ export default async function EditBuildPage(props: EditBuildPageProps) {
       trail={[
         { href: "/programs", label: "Programs" },
         { href: `/programs/${program.id}`, label: program.name },
+        { href: `/programs/${program.id}/builds/${build.id}`, label: build.name },
       ]}
     />
   );

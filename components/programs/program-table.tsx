@@ -38,8 +38,9 @@ function untilText(dueOn: string, today: string): string {
 function againstTarget({ now, targetMarginDb }: ProgramLine): string {
   if (!now || now.marginDb === null) return `target ${formatMargin(targetMarginDb)}`;
   const lacking = targetMarginDb - now.marginDb;
-  return lacking > 0
-    ? `${lacking.toFixed(1)} dB short of ${formatMargin(targetMarginDb)}`
+  if (lacking > 0) return `${lacking.toFixed(1)} dB short of ${formatMargin(targetMarginDb)}`;
+  return now.standing === "undecided"
+    ? `target ${formatMargin(targetMarginDb)} reached where it is decided`
     : `target ${formatMargin(targetMarginDb)} met`;
 }
 

@@ -82,14 +82,20 @@ export function withPreview(file: DeskFile, preview: DeskPreview): DeskFile {
   const { measuredOn, ...settings } = preview.settings;
   const stated = toDraft(MEASUREMENT_FIELDS, settings);
   const refused = preview.outcome === "refused";
-  const where = preview.line === null ? "" : `Line ${preview.line}: `;
   return {
     ...file,
     preview,
     state: refused ? "refused" : preview.outcome === "ask" ? "asks" : "ready",
-    message: refused ? `${where}${preview.reason ?? "The file was not understood."}` : null,
+    message: refused ? refusalOf(preview) : null,
     measuredOn: file.measuredOn || (measuredOn ?? ""),
     own: { ...stated, ...file.own },
     stated: Object.keys(stated),
   };
+}
+
+/** Why a file was refused, with its line, which most reasons name themselves. */
+function refusalOf({ reason, line }: DeskPreview): string {
+  const why = reason ?? "The file was not understood.";
+  const isNamed = line === null || new RegExp(`\\bline ${line}\\b`, "i").test(why);
+  return isNamed ? why : `Line ${line}: ${why}`;
 }

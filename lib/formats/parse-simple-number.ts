@@ -1,4 +1,7 @@
 /** A place in a text and the number that was read there. */
+/** Beyond any frequency in Hz and any level; a larger number in a file is a damaged one. */
+export const LARGEST_VALUE = 1e12;
+
 export interface NumberCursor {
   text: string;
   at: number;
@@ -59,7 +62,7 @@ export function parseSimpleNumber(cursor: NumberCursor, mark: number): boolean {
   } else {
     const printed = text.slice(from, at);
     cursor.value = Number(markAt < 0 || mark === 46 ? printed : printed.replace(",", "."));
-    if (!Number.isFinite(cursor.value)) return false;
+    if (!(Math.abs(cursor.value) <= LARGEST_VALUE)) return false;
   }
   cursor.at = at;
   return true;

@@ -1,5 +1,5 @@
 import { isGap, parseNumber, type DecimalMark } from "./parse-number";
-import { parseSimpleNumber, type NumberCursor } from "./parse-simple-number";
+import { LARGEST_VALUE, parseSimpleNumber, type NumberCursor } from "./parse-simple-number";
 import { quote, Refusal } from "./refusal";
 import { splitRow, trimCells, WHITESPACE } from "./split-row";
 import { isComment, lineEnd, nextLine } from "./text-lines";
@@ -54,11 +54,11 @@ export function cellProblem(cells: string[], shape: TableShape, line: number): R
     const value = parseNumber(cell, shape.decimal);
     const isFrequency = i === shape.frequencyColumn;
     const what = isFrequency ? "frequency" : "level";
-    if (value !== null && Number.isFinite(value)) continue;
+    if (value !== null && Math.abs(value) <= LARGEST_VALUE) continue;
     if (value === null && isGap(cell) && !isFrequency) continue;
     const reads = cell === "" ? "is empty" : `reads ${quote(cell)}`;
     return new Refusal(
-      `Line ${line}, column ${i + 1}: the ${what} ${reads}, which is no number. Correct it in the file or export it again.`,
+      `Line ${line}, column ${i + 1}: the ${what} ${reads}, which is no ${value === null ? "number" : `${what} that can be meant`}. Correct it in the file or export it again.`,
       line,
     );
   }

@@ -159,3 +159,25 @@ describe("reachesMask", () => {
     expect(reachesMask(read([20, 20, 60], -2))).toBe(true);
   });
 });
+
+describe("combineReadings over benches", () => {
+  const held = (marginDb: number, guardDb: number, standing: "over" | "undecided" | "clear") => {
+    const reading = read(levelsOf(9, 30));
+    const [line] = reading.lines;
+    const worst = { ...line!.worst!, marginDb };
+    return { ...reading, guardDb, lines: [{ ...line!, worst, standing }] };
+  };
+
+  test("is inside guard when one sweep lies inside its own bench's guard, though another is lower", () => {
+    const combined = combineReadings(MASK, [held(1, 0, "clear"), held(2, 6, "clear")]);
+    expect(combined.standing).toBe("inside-guard");
+    expect(combined.deciding!.worst.marginDb).toBe(1);
+  });
+
+  test("is over by the margin that makes it so, not by another sweep's upper bound", () => {
+    const combined = combineReadings(MASK, [held(-1, 0, "over"), held(-8, 0, "undecided")]);
+    expect(combined.standing).toBe("over");
+    expect(combined.deciding!.worst.marginDb).toBe(-1);
+    expect(combined.deciding!.source).toBe(0);
+  });
+});

@@ -30,7 +30,10 @@ describe("the floor", () => {
   test("is a window of 200 bandwidths and never under 51 points", () => {
     expect(floorWindow(makeTrace(noisy(1, 100)), null)).toBe(51);
     expect(floorWindow(makeTrace(noisy(1, 100)), 1e3)).toBe(51);
-    expect(floorWindow(makeTrace(noisy(1, 100)), 120e3)).toBe(401);
+    expect(floorWindow(makeTrace(noisy(1, 500)), 120e3)).toBe(401);
+    // Wider than twice the trace changes nothing, and an absurd RBW stays harmless.
+    expect(floorWindow(makeTrace(noisy(1, 100)), 1e15)).toBe(201);
+    expect(floorOf(makeTrace(noisy(1, 100)), 1e15)).not.toBeNull();
   });
 
   test("equals the percentile of each window taken afresh, with and without gaps", () => {

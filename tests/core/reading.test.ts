@@ -117,3 +117,13 @@ it("takes the higher of two peak traces on one grid as the bound, in either orde
     expect(reading.remeasure.map((point) => point.frequencyHz)).toEqual([30.25e6]);
   }
 });
+
+it("is over by its own detector's margin, not by a lower bound where that detector was not swept", () => {
+  const own = scan("quasi-peak", (i) => (i < 10 ? 41 : Number.NaN));
+  const bound = scan("peak", (i) => (i > 20 ? 60 : Number.NaN));
+  const reading = read([own, bound]);
+  expect(reading.standing).toBe("over");
+  expect(reading.lines[0]).toMatchObject({ basis: "like-for-like", standing: "over" });
+  expect(reading.lines[0]?.worst?.marginDb).toBe(-1);
+  expect(reading.remeasure.length).toBeGreaterThan(0);
+});

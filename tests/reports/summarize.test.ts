@@ -36,10 +36,10 @@ describe("a mask line over several sweeps", () => {
     }
   });
 
-  test("names both sweeps when the lowest margin is only an upper bound of another sweep", () => {
+  test("is over by the margin that makes it so, not by another sweep's upper bound", () => {
     const [row] = summarizeLines(sampleSnapshot({ sweeps: [over, bound] }));
     expect(row).toMatchObject({ standing: "over", standingSweep: "Over" });
-    expect(row?.worst).toMatchObject({ sweep: "Bound", basis: "upper-bound" });
+    expect(row?.worst).toMatchObject({ sweep: "Over", basis: "like-for-like" });
   });
 
   test("keeps revisions of one mask apart", () => {

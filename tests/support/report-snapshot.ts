@@ -1,11 +1,11 @@
 import { readFileSync } from "node:fs";
 import { join } from "node:path";
-import type { SweepDelta } from "@/lib/core/delta/delta";
 import { maskFromJson } from "@/lib/core/mask/mask-json";
 import type { Mask } from "@/lib/core/mask/mask";
 import { readSweep } from "@/lib/core/reading/read-sweep";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import type { Trace } from "@/lib/core/sweep/trace";
+import { REFUSED, sampleDelta } from "./report-delta";
 import { hashSnapshot } from "@/lib/reports/snapshot-hash";
 import type {
   ReportSnapshot,
@@ -183,47 +183,6 @@ export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
   };
 }
 
-export function sampleDelta(change: Partial<NonNullable<SweepDelta["changes"]>> = {}): SweepDelta {
-  return {
-    beforeName: "Gannet B3, plain, vertical",
-    afterName: "Gannet B3, scrambler on, vertical",
-    mismatches: [],
-    doubts: ["VBW is not stated for either sweep."],
-    changes: {
-      detector: "peak",
-      margins: [
-        {
-          maskRevisionId: "revision-2",
-          maskTitle: "CISPR 32 class B, 3 m",
-          lineName: "Quasi-peak",
-          beforeDb: -5.4,
-          afterDb: 4.2,
-          beforeStanding: "undecided",
-          afterStanding: "clear",
-          changeDb: 9.6,
-          note: null,
-        },
-      ],
-      peakDb: -9.6,
-      floorDb: 12.04,
-      bandPowerDb: 0.1,
-      bandPowerIsPower: false,
-      sentence:
-        "Peaks came down 9.6 dB, the floor came up 12.0 dB, band power moved 0.1 dB: the energy was spread, not removed.",
-      ...change,
-    },
-  };
-}
-
-const REFUSED: SweepDelta = {
-  beforeName: "Gannet B3, scrambler on, vertical",
-  afterName: "Gannet B3, clamp, vertical",
-  mismatches: [{ field: "rbw", text: "The RBW was 120.0 kHz before and 1.000 MHz after." }],
-  doubts: [],
-  changes: null,
-};
-
-/** A report with two sweeps and a ladder of three steps, the last of them not comparable. */
 export function sampleSnapshot(change: Partial<ReportSnapshot> = {}): ReportSnapshot {
   const spread = sampleDelta();
   return {

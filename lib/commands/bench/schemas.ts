@@ -1,8 +1,6 @@
 import { z } from "zod";
 import { TRANSDUCER_KINDS } from "@/lib/core/bench/signal-path";
-import { isStorableText, NOT_STORABLE } from "../mask/storable-text";
-
-const storable = z.string().refine(isStorableText, NOT_STORABLE);
+import { storable } from "../storable-text";
 
 const benchFields = {
   name: storable.trim().min(1, "Give it a name.").max(80, "Keep the name under 80 characters."),

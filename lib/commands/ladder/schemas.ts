@@ -1,7 +1,5 @@
 import { z } from "zod";
-import { isStorableText, NOT_STORABLE } from "../mask/storable-text";
-
-const storable = z.string().refine(isStorableText, NOT_STORABLE);
+import { storable } from "../storable-text";
 
 const name = storable
   .trim()

@@ -2,7 +2,7 @@ import type { Mask } from "@/lib/core/mask/mask";
 import { maskFromJson } from "@/lib/core/mask/mask-json";
 import type { MaskProblem } from "@/lib/core/mask/validate-mask";
 import { CommandError, type FieldErrors } from "../result";
-import { isStorableText, NOT_STORABLE } from "./storable-text";
+import { isStorableText, NOT_STORABLE } from "../storable-text";
 
 const MAX_LINES = 40;
 const MAX_SEGMENTS_PER_LINE = 300;

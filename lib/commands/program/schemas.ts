@@ -1,13 +1,15 @@
 import { z } from "zod";
+import { storable } from "../storable-text";
 
-const name = z
-  .string()
+const name = storable
   .trim()
   .min(1, "Give it a name.")
   .max(80, "Keep the name under 80 characters.");
 
 /** Dates of the form 2026-03-31 that exist in the calendar. */
-const isoDate = z.iso.date("Write the date as year-month-day, for example 2026-03-31.");
+const isoDate = z.iso
+  .date("Write the date as year-month-day, for example 2026-03-31.")
+  .refine((day) => day >= "1950", "A date before 1950 is a slip of the keys.");
 
 const targetMarginDb = z
   .number("State the target margin in dB.")
@@ -19,7 +21,7 @@ const buildId = z.uuid("Choose a build.");
 
 export const createProgramSchema = z.object({
   name,
-  description: z.string().trim().max(2000, "Keep the description under 2,000 characters."),
+  description: storable.trim().max(2000, "Keep the description under 2,000 characters."),
   targetMarginDb,
 });
 
@@ -27,7 +29,7 @@ export const createBuildSchema = z.object({
   programId,
   name,
   builtOn: isoDate.nullable(),
-  notes: z.string().trim().max(4000, "Keep the notes under 4,000 characters."),
+  notes: storable.trim().max(4000, "Keep the notes under 4,000 characters."),
 });
 
 export const programRefSchema = z.object({ programId });

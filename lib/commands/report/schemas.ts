@@ -1,13 +1,13 @@
 import { z } from "zod";
+import { storable } from "../storable-text";
 import { PAPERS } from "@/lib/reports/paper";
 
 const content = {
-  title: z
-    .string()
+  title: storable
     .trim()
     .min(1, "Give the report a title.")
     .max(120, "Keep the title under 120 characters."),
-  summary: z.string().trim().max(4000, "Keep the summary under 4,000 characters."),
+  summary: storable.trim().max(4000, "Keep the summary under 4,000 characters."),
   paper: z.enum(PAPERS, "Choose the paper."),
   sweepIds: z
     .array(z.uuid())
@@ -26,8 +26,7 @@ export const reportIdSchema = z.object({ reportId: z.uuid() });
 
 export const withdrawReportSchema = z.object({
   reportId: z.uuid(),
-  reason: z
-    .string()
+  reason: storable
     .trim()
     .min(1, "Say why: whoever holds the PDF will ask.")
     .max(400, "Keep the reason under 400 characters."),

@@ -16,9 +16,7 @@ import {
   TRACE_KINDS,
 } from "@/lib/core/sweep/settings";
 import { LEVEL_UNITS, LINEAR_UNITS } from "@/lib/core/units/level-units";
-import { isStorableText, NOT_STORABLE } from "../mask/storable-text";
-
-const storable = z.string().refine(isStorableText, NOT_STORABLE);
+import { storable } from "../storable-text";
 
 const numberOrNull = (what: string) => z.number(`State ${what} as a number, or leave it empty.`);
 const positive = (what: string) =>

@@ -1,13 +1,10 @@
 import { z } from "zod";
+import { storable } from "../storable-text";
 import { ROLES } from "@/lib/auth/permissions";
 
 export const createFirstTeamSchema = z.object({
-  teamName: z
-    .string()
-    .trim()
-    .min(1, "Give the team a name.")
-    .max(80, "Keep it under 80 characters."),
-  name: z.string().trim().min(1, "Write your name.").max(80, "Keep it under 80 characters."),
+  teamName: storable.trim().min(1, "Give the team a name.").max(80, "Keep it under 80 characters."),
+  name: storable.trim().min(1, "Write your name.").max(80, "Keep it under 80 characters."),
   email: z.email("Write an e-mail address, for example ada@example.com."),
   password: z
     .string()
@@ -24,11 +21,7 @@ const newPassword = z
   .max(200, "Keep it under 200 characters.");
 
 export const addMemberSchema = z.object({
-  name: z
-    .string()
-    .trim()
-    .min(1, "Write the person's name.")
-    .max(80, "Keep it under 80 characters."),
+  name: storable.trim().min(1, "Write the person's name.").max(80, "Keep it under 80 characters."),
   email: z
     .email("Write an e-mail address, for example ada@example.com.")
     .max(320, "Keep it under 320 characters."),

@@ -52,7 +52,10 @@ function combineLine(line: MaskLine, held: readonly (LineReading | undefined)[])
   const coverage = gaps.length === 0 ? 1 : Math.max(0, 1 - width(gaps) / total);
   let source: number | null = null;
   let worst: MarginPoint | null = null;
+  const isOver = held.some((reading) => reading?.standing === "over");
   held.forEach((reading, i) => {
+    // A line that is over is known by what made it so, not by another sweep's lower bound.
+    if (isOver && reading?.standing !== "over") return;
     if (reading?.worst && (!worst || reading.worst.marginDb < worst.marginDb)) {
       worst = reading.worst;
       source = i;
@@ -64,26 +67,29 @@ function combineLine(line: MaskLine, held: readonly (LineReading | undefined)[])
 function standingOf(
   line: CombinedLine,
   held: readonly (LineReading | undefined)[],
-  guardDb: number,
+  readings: readonly Held[],
 ): Standing {
   if (held.some((reading) => reading?.standing === "over")) return "over";
   // Below zero and not over: an upper bound, which only the line's own detector can settle.
   if (!line.worst || line.worst.marginDb < 0 || line.coverage < 1) return "undecided";
-  return line.worst.marginDb < guardDb ? "inside-guard" : "clear";
+  const isInside = held.some(
+    (reading, i) => reading?.worst && reading.worst.marginDb < (readings[i]?.guardDb ?? 0),
+  );
+  return isInside ? "inside-guard" : "clear";
 }
 
 /**
  * Readings of several sweeps against the same mask revision taken together, as for a build whose
  * span is split over sweeps or that was swept in two polarizations: over when one of them is,
  * undecided while a bound of one of them lies over the line or a part was covered by none, and
- * otherwise by the lowest margin of all. A guard is that of the bench that gave the margin.
+ * otherwise inside guard as soon as one of them lies inside the guard of its own bench. What was
+ * covered is joined whatever the polarization or height: which of them a mask asks for is not known.
  */
 export function combineReadings(mask: Mask, readings: readonly Held[]): CombinedReading {
   const lines = mask.lines.map((line, i) => {
     const held = readings.map((reading) => reading.lines[i]);
     const combined = combineLine(line, held);
-    const guardDb = combined.source === null ? 0 : (readings[combined.source]?.guardDb ?? 0);
-    return { ...combined, standing: standingOf(combined, held, guardDb) };
+    return { ...combined, standing: standingOf(combined, held, readings) };
   });
   let deciding: CombinedReading["deciding"] = null;
   for (const line of lines) {

@@ -112,7 +112,10 @@ export function readLine(
   const bounds = joinPoints([...boundsByRank.values()]);
   const worstOwn = lowestPoint(joinPoints(own));
   const worstBound = lowestPoint(bounds);
-  const isBound = worstBound !== null && !(worstOwn && worstOwn.marginDb <= worstBound.marginDb);
+  // What is over by the line's own detector is known by that margin, not by a bound elsewhere.
+  const isBound =
+    worstBound !== null &&
+    !(worstOwn && (worstOwn.marginDb < 0 || worstOwn.marginDb <= worstBound.marginDb));
   const worst = isBound ? worstBound : worstOwn;
   const basis: Basis = isBound ? "upper-bound" : "like-for-like";
   const coverage = coverageOf(

@@ -10,7 +10,11 @@ const BANDWIDTHS = 200;
 /** Points of the floor's window: 200 RBW wide and never under 51 points; always odd. */
 export function floorWindow(trace: Trace, rbwHz: number | null): number {
   const points = rbwHz === null ? 0 : Math.ceil((BANDWIDTHS * rbwHz) / medianStepHz(trace.axis));
-  const wanted = Number.isFinite(points) ? Math.max(LEAST_POINTS, points) : LEAST_POINTS;
+  // Wider than the whole trace on both sides changes nothing.
+  const widest = Math.max(LEAST_POINTS, 2 * pointCount(trace.axis) + 1);
+  const wanted = Number.isFinite(points)
+    ? Math.min(Math.max(LEAST_POINTS, points), widest)
+    : LEAST_POINTS;
   return wanted % 2 === 1 ? wanted : wanted + 1;
 }
 

@@ -40,5 +40,3 @@ export async function listReports(ctx: Context, programId: string | null) {
       .orderBy(sql`${reports.number} desc nulls first`, desc(reports.createdAt)),
   );
 }
-
-export type ReportLine = Awaited<ReturnType<typeof listReports>>[number];

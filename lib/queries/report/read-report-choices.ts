@@ -53,5 +53,3 @@ export async function readReportChoices(ctx: Context, buildId: string) {
   if (!found) return null;
   return { ...found, sweeps: await listBuildSweeps(ctx, buildId) };
 }
-
-export type ReportChoices = NonNullable<Awaited<ReturnType<typeof readReportChoices>>>;

@@ -1,4 +1,5 @@
 import { Text, View } from "@react-pdf/renderer";
+import { formatMargin } from "@/lib/core/units/format";
 import { Words } from "../parts/words";
 import { Facts, Paragraph, SectionTitle } from "../parts/blocks";
 import { Table } from "../parts/table";
@@ -23,7 +24,7 @@ export function ItemAndPeople({ snapshot, state }: RecordProps) {
           { label: "Program", value: program.name },
           { label: "Build", value: build.name },
           { label: "Built on", value: build.builtOn ?? NOT_STATED, kind: "number" },
-          { label: "Target margin", value: `${program.targetMarginDb} dB`, kind: "number" },
+          { label: "Target margin", value: formatMargin(program.targetMarginDb), kind: "number" },
           { label: "Team", value: snapshot.team },
           { label: "Issued by", value: snapshot.issuedBy },
           { label: "Issued", value: formatInstant(snapshot.issuedAt), kind: "number" },

@@ -1,4 +1,5 @@
 import { Text, View } from "@react-pdf/renderer";
+import { formatMargin } from "@/lib/core/units/format";
 import { Words } from "../parts/words";
 import { CoastChart } from "../chart/coast-chart";
 import { Label } from "../parts/blocks";
@@ -35,7 +36,7 @@ function Masthead({ snapshot, fit }: SummaryProps) {
     ["Program and build", `${shorten(program.name, 48)}, ${shorten(build.name, 60)}`],
     ["Measured", measuredOn(snapshot)],
     ["Bench", benches.length === 0 ? NOT_STATED : shorten(joinWords(benches), 80)],
-    ["Target margin", `${program.targetMarginDb} dB`],
+    ["Target margin", formatMargin(program.targetMarginDb)],
   ] as const;
   return (
     <View>

@@ -14,6 +14,7 @@ import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { formatFrequency, formatMargin } from "@/lib/core/units/format";
 import { newestStanding } from "@/lib/queries/program/load-standings";
+import type { MaskStanding } from "@/lib/queries/sweep/load-readings";
 import type { ProgramDetail } from "@/lib/queries/program/read-program";
 import { readProgram } from "@/lib/queries/program/read-program";
 import { addBuild } from "../actions";
@@ -52,7 +53,7 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
         <BigMargin marginDb={newest.worst.marginDb} standing={newest.worst.standing}>
           {newest.build.name}, {newest.worst.lineName} line of {newest.worst.maskTitle}
           {` at ${formatFrequency(newest.worst.marginAtHz)}`}.{" "}
-          {againstTarget(newest.worst.marginDb, program.targetMarginDb)}
+          {againstTarget(newest.worst, program.targetMarginDb)}
         </BigMargin>
       ) : (
         <p className="text-lg">
@@ -101,11 +102,12 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
   );
 }
 
-function againstTarget(marginDb: number | null, targetDb: number): string {
-  if (marginDb === null) return `The target is ${formatMargin(targetDb)}.`;
+function againstTarget({ marginDb, standing }: MaskStanding, targetDb: number): string {
   const lacking = targetDb - marginDb;
-  return lacking > 0
-    ? `${lacking.toFixed(1)} dB short of the target of ${formatMargin(targetDb)}.`
+  if (lacking > 0)
+    return `${lacking.toFixed(1)} dB short of the target of ${formatMargin(targetDb)}.`;
+  return standing === "undecided"
+    ? `The target of ${formatMargin(targetDb)} is reached where the mask is decided.`
     : `The target of ${formatMargin(targetDb)} is met on the bench.`;
 }
 

@@ -1,3 +1,5 @@
+import { z } from "zod";
+
 /**
  * PostgreSQL takes neither the null character nor half a surrogate pair; both reach a form by
  * pasting from a damaged file and would otherwise end as an unknown error.
@@ -7,3 +9,6 @@ export function isStorableText(text: string): boolean {
 }
 
 export const NOT_STORABLE = "This holds a character that cannot be stored; type it again.";
+
+/** Text of a form. */
+export const storable = z.string().refine(isStorableText, NOT_STORABLE);

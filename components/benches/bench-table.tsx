@@ -27,7 +27,10 @@ const COLUMNS: DataColumn<BenchLine>[] = [
     value: (b) => b.name,
     cell: (b) => (
       <>
-        <Link href={`/benches/${b.id}`} className="font-medium text-deep underline">
+        <Link
+          href={`/benches/${b.id}`}
+          className="inline-block min-w-52 font-medium text-deep underline"
+        >
           {keepUnits(b.name)}
         </Link>
         {b.archived ? <span className="ml-2 text-sm text-ink-soft">archived</span> : null}

@@ -25,12 +25,7 @@ export function MaskFilterForm({ filter }: { filter: MaskFilter }) {
       aria-label="Masks"
       className="mb-2 grid items-end gap-x-4 sm:grid-cols-2 lg:grid-cols-[1fr_12rem_16rem_auto]"
     >
-      <Field
-        label="Title, document or detector"
-        name="text"
-        type="search"
-        defaultValue={filter.text}
-      />
+      <Field label="Search" name="text" type="search" defaultValue={filter.text} />
       <SelectField
         label="Port"
         name="port"

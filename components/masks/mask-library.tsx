@@ -9,13 +9,13 @@ import { ProvenanceMark } from "./provenance-mark";
 
 /** On a phone only the mask and its provenance; their widths are shared by the tables of all ports. */
 const HEADS = [
-  { head: "Mask", look: "lg:w-[27%]" },
-  { head: "Document", look: "max-sm:hidden lg:w-[21%]" },
-  { head: "Edition", look: "max-lg:hidden lg:w-[10%]" },
-  { head: "Distance", look: "text-right max-lg:hidden lg:w-[8%]" },
-  { head: "Detectors", look: "max-sm:hidden lg:w-[16%]" },
-  { head: "Provenance", look: "lg:w-[11%]" },
-  { head: "Revision", look: "text-right max-lg:hidden lg:w-[7%]" },
+  { head: "Mask", look: "lg:w-[28%]" },
+  { head: "Document", look: "max-sm:hidden lg:w-[20%]" },
+  { head: "Edition", look: "max-lg:hidden lg:w-[8.5%]" },
+  { head: "Distance", look: "text-right max-lg:hidden lg:w-[7%]" },
+  { head: "Detectors", look: "max-sm:hidden lg:w-[18.5%]" },
+  { head: "Provenance", look: "lg:w-[11.5%]" },
+  { head: "Revision", look: "text-right max-lg:hidden lg:w-[6.5%]" },
 ];
 const CELL = "px-2 py-1.5 first:pl-3 last:pr-3";
 

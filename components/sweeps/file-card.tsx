@@ -9,6 +9,7 @@ import type { SweepFileAnswers } from "@/lib/formats/sweep-file";
 import type { SweepPurpose } from "@/lib/core/sweep/settings";
 import { SWEEP_PURPOSES } from "@/lib/core/sweep/settings";
 import { formatMargin } from "@/lib/core/units/format";
+import type { LevelUnit } from "@/lib/core/units/level-units";
 import type { DeskFile } from "./desk-file";
 import { FileContents } from "./file-contents";
 import { FileQuestions } from "./file-questions";
@@ -25,23 +26,32 @@ const STATES: Record<DeskFile["state"], string> = {
   stored: "stored",
 };
 
+/** Levels in these exist only after an antenna's factor was applied. */
+const FIELD_UNITS: ReadonlySet<LevelUnit> = new Set(["dBuV/m", "dBuA/m", "dBpT"]);
+
 interface FileCardProps {
   file: DeskFile;
   common: TagDraft;
   onChange: (part: Partial<DeskFile>) => void;
   onAnswer: (answers: SweepFileAnswers) => void;
+  /** How many other files ask the same, and the answers for them. */
+  alike: number;
+  onAnswerAlike: (answers: SweepFileAnswers) => void;
   onRemove: () => void;
 }
 
 /** One file: what is in it, what it leaves open, how it will be stored, what became of it. */
-export function FileCard({ file, common, onChange, onAnswer, onRemove }: FileCardProps) {
+export function FileCard(props: FileCardProps) {
+  const { file, common, onChange, onRemove } = props;
+  // A file that could be stored and was not says so until it is tried again.
+  const isStopped = file.state === "refused" || (file.state === "ready" && file.message !== null);
   const busy = file.state === "reading" || file.state === "storing";
   return (
     <article className="border border-rule bg-sheet p-4" aria-label={file.file.name}>
       <div className="mb-3 flex flex-wrap items-baseline gap-x-4 gap-y-1">
-        <h3 className="font-mono text-base break-all">{file.file.name}</h3>
-        <span role="status" className={file.state === "refused" ? "text-aground" : "text-ink-soft"}>
-          {STATES[file.state]}
+        <h3 className="min-w-0 font-mono text-base break-all">{file.file.name}</h3>
+        <span role="status" className={isStopped ? "text-aground" : "text-ink-soft"}>
+          {isStopped && file.state === "ready" ? "not stored" : STATES[file.state]}
         </span>
         {file.state === "stored" || busy ? null : (
           <button
@@ -62,7 +72,12 @@ export function FileCard({ file, common, onChange, onAnswer, onRemove }: FileCar
       {file.preview && file.preview.traces.length > 0 && file.state !== "stored" ? (
         <>
           <FileContents preview={file.preview} />
-          <FileQuestions file={file} onAnswer={onAnswer} />
+          <FileQuestions
+            file={file}
+            alike={props.alike}
+            onAnswer={props.onAnswer}
+            onAnswerAlike={props.onAnswerAlike}
+          />
           <SameFileNote file={file} onChange={onChange} />
           <OwnFields file={file} common={common} onChange={onChange} />
         </>
@@ -121,8 +136,13 @@ function SameFileNote({ file, onChange }: Pick<FileCardProps, "file" | "onChange
   );
 }
 
-function OwnFields({ file, common, onChange }: Omit<FileCardProps, "onAnswer" | "onRemove">) {
+function OwnFields({
+  file,
+  common,
+  onChange,
+}: Pick<FileCardProps, "file" | "common" | "onChange">) {
   const { errors } = file;
+  const isField = file.preview?.traces.some(({ unit }) => unit !== null && FIELD_UNITS.has(unit));
   const stated = MEASUREMENT_FIELDS.filter(({ path }) => file.stated.includes(path)).map(
     ({ path, label }) => `${label} ${file.own[path] || "as for all files"}`,
   );
@@ -175,6 +195,12 @@ function OwnFields({ file, common, onChange }: Omit<FileCardProps, "onAnswer" | 
           Counts for the trend of the build
         </label>
       </div>
+      {isField && !file.corrected && !errors.corrected ? (
+        <p className="mb-3 max-w-none border-l-4 border-shoal bg-shoal-bed px-3 py-1.5 text-sm">
+          The file holds field strengths, not levels at the instrument&apos;s input: tick that
+          factors were applied, or answer its unit again.
+        </p>
+      ) : null}
       {errors.corrected ? <p className="mb-3 text-sm text-aground">{errors.corrected}</p> : null}
       <details
         open={MEASUREMENT_FIELDS.some(({ path }) => errors[path]) || undefined}

@@ -55,7 +55,10 @@ export function FileContents({ preview }: { preview: DeskPreview }) {
       </p>
       {[...preview.warnings, ...preview.leftOut.map((c) => `${c.name} is left out: ${c.why}`)].map(
         (text) => (
-          <p key={text} className="mb-2 border-l-4 border-shoal bg-shoal-bed px-3 py-1.5 text-sm">
+          <p
+            key={text}
+            className="mb-3 max-w-none border-l-4 border-shoal bg-shoal-bed px-3 py-1.5 text-sm"
+          >
             {text}
           </p>
         ),

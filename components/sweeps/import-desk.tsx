@@ -8,6 +8,7 @@ import { SelectField } from "@/components/ui/select-field";
 import { StatusNote } from "@/components/ui/status-note";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
+import type { DeskFile } from "./desk-file";
 import { FileCard, StoreButton } from "./file-card";
 import { LINK_FIELDS, MEASUREMENT_FIELDS } from "./tag-fields";
 import { TagInputs } from "./tag-inputs";
@@ -58,9 +59,10 @@ export function ImportDesk({ buildId, steps, benches, last, actions, ...props }:
     for (const file of ready) {
       if (await desk.store(file, { buildId, stepId, benchId }, common, link)) stored += 1;
     }
-    setNote(
-      stored === 1 ? "1 sweep is stored." : `${stored} of ${ready.length} sweeps are stored.`,
-    );
+    const rest = ready.length - stored;
+    const all = stored === 1 ? "1 sweep is stored." : `${stored} sweeps are stored.`;
+    const some = `${stored} of ${ready.length} stored. What keeps the ${rest === 1 ? "other" : "others"} stands at each file.`;
+    setNote(rest === 0 ? all : some);
   }
 
   if (benches.length === 0) {
@@ -93,7 +95,7 @@ export function ImportDesk({ buildId, steps, benches, last, actions, ...props }:
           label="Bench"
           value={benchId}
           options={[
-            { value: "", label: "choose" },
+            { value: "", label: "Choose…" },
             ...benches.map((bench) => ({ value: bench.id, label: bench.name })),
           ]}
           onChange={(event) => {
@@ -156,8 +158,9 @@ export function ImportDesk({ buildId, steps, benches, last, actions, ...props }:
           )}
           {open.length > 0 ? (
             <p className="mb-3 text-ink-soft">
-              {open.length === 1 ? "One file asks" : `${open.length} files ask`} something before it
-              can be stored.
+              {open.length === 1
+                ? "One file asks something before it can be stored."
+                : `${open.length} files ask something before they can be stored.`}
             </p>
           ) : null}
           <div className="space-y-4">
@@ -168,14 +171,31 @@ export function ImportDesk({ buildId, steps, benches, last, actions, ...props }:
                 common={common}
                 onChange={(part) => desk.change(file.key, part)}
                 onAnswer={(answers) => desk.answer(file, answers)}
+                alike={alikeOf(file, open).length}
+                onAnswerAlike={(answers) => {
+                  for (const other of alikeOf(file, open))
+                    desk.answer(other, { ...answers, ...other.answers });
+                }}
                 onRemove={() => desk.remove(file.key)}
               />
             ))}
           </div>
+          {desk.files.length > 2 ? (
+            <div className="mt-4 flex justify-end">
+              <StoreButton count={benchId ? ready.length : 0} onStore={() => void storeAll()} />
+            </div>
+          ) : null}
         </Section>
       ) : null}
     </>
   );
+}
+
+/** The other files that leave the same open. */
+function alikeOf(file: DeskFile, open: readonly DeskFile[]): DeskFile[] {
+  const asked = ({ preview }: DeskFile) =>
+    [...new Set(preview?.questions.map(({ field }) => field))].sort().join();
+  return open.filter((other) => other.key !== file.key && asked(other) === asked(file));
 }
 
 /** The bench's own distance fills an empty field; a typed one stays. */

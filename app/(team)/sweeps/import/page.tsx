@@ -1,6 +1,8 @@
 import type { Metadata } from "next";
+import Link from "next/link";
 import { notFound } from "next/navigation";
 import { ImportDesk } from "@/components/sweeps/import-desk";
+import { EmptyState } from "@/components/ui/empty-state";
 import { PageHead } from "@/components/ui/page-head";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
@@ -15,6 +17,19 @@ export default async function ImportPage(props: {
 }) {
   const { buildId, stepId } = readImportParams(await props.searchParams);
   const ctx = await currentContext();
+  if (buildId === "") {
+    return (
+      <>
+        <PageHead title="Import sweeps" lead="A sweep is stored with the build that was swept." />
+        <EmptyState>
+          Open the build first; its page has the import.{" "}
+          <Link href="/programs" className="text-deep underline">
+            Choose a program
+          </Link>
+        </EmptyState>
+      </>
+    );
+  }
   const place = await readImportPlace(ctx, buildId, stepId);
   if (!place) notFound();
   const { build } = place;

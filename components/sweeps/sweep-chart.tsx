@@ -4,6 +4,8 @@ import { useMemo, useState } from "react";
 import { CoastChart } from "@/components/charts/coast-chart";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { Suspect } from "@/lib/core/reading/reading";
+import type { KnownClock } from "./clock-harmonics";
+import { harmonicsIn } from "./clock-harmonics";
 import { SuspectTable } from "./suspect-table";
 import type { ShownTrace } from "./use-trace-views";
 import { useTraceViews } from "./use-trace-views";
@@ -17,6 +19,8 @@ interface SweepChartProps {
   mask: Mask | null;
   suspects: Suspect[];
   guardDb: number;
+  /** Known clocks of the build; their harmonics are marked when switched on. */
+  clocks: KnownClock[];
 }
 
 /** So many of the worst suspects in view carry a buoy; zooming in shows the next ones. */
@@ -29,7 +33,12 @@ export function SweepChart(props: SweepChartProps) {
   const { name, extent, stepHz, mask, suspects, guardDb } = props;
   const [highlighted, setHighlighted] = useState<number | null>(null);
   const [hidden, setHidden] = useState<string[]>([]);
+  const [marksClocks, setMarksClocks] = useState(false);
   const { view, setView, setScale } = useUrlView(extent);
+  const clockMarks = useMemo(
+    () => (marksClocks ? harmonicsIn(props.clocks, view) : []),
+    [marksClocks, props.clocks, view],
+  );
   const all = props.traces;
   const shown = useMemo(() => all.filter((t) => !hidden.includes(idOf(t))), [all, hidden]);
   const { traces, state } = useTraceViews(shown, view, extent);
@@ -42,9 +51,9 @@ export function SweepChart(props: SweepChartProps) {
   );
   return (
     <>
-      {props.traces.length > 1 ? (
+      {props.traces.length > 1 || props.clocks.length > 0 ? (
         <fieldset className="mb-3 flex flex-wrap gap-x-5 gap-y-1 print:hidden">
-          <legend className="sr-only">Traces shown</legend>
+          <legend className="sr-only">What is shown</legend>
           {props.traces.map((trace) => (
             <label key={idOf(trace)} className="flex items-center gap-1.5">
               <input
@@ -61,6 +70,16 @@ export function SweepChart(props: SweepChartProps) {
               {trace.name}
             </label>
           ))}
+          {props.clocks.length > 0 ? (
+            <label className="flex items-center gap-1.5">
+              <input
+                type="checkbox"
+                checked={marksClocks}
+                onChange={(event) => setMarksClocks(event.target.checked)}
+              />
+              Known clocks
+            </label>
+          ) : null}
         </fieldset>
       ) : null}
       <CoastChart
@@ -77,6 +96,7 @@ export function SweepChart(props: SweepChartProps) {
         state={state}
         label={mask ? `${name} against ${mask.title}` : name}
         guardDb={guardDb}
+        clocks={clockMarks}
       />
       {mask ? (
         <SuspectTable

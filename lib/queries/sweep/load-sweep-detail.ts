@@ -3,6 +3,7 @@ import type { Transaction } from "@/db/client";
 import {
   benches,
   builds,
+  clocks,
   ladders,
   ladderSteps,
   programs,
@@ -96,13 +97,18 @@ export async function loadSweepDetail(tx: Transaction, teamId: string, sweepId: 
       ),
     )
     .orderBy(asc(sweeps.name));
+  const clockRows = await tx
+    .select({ name: clocks.name, frequencyHz: clocks.frequencyHz })
+    .from(clocks)
+    .where(and(eq(clocks.teamId, teamId), eq(clocks.buildId, sweep.buildId)))
+    .orderBy(asc(clocks.frequencyHz));
   const readings = await listReadings(tx, teamId, {
     sweepId,
     programId: sweep.programId,
     ambientTaken: ambient.length > 0,
     port: sweep.settings.port,
   });
-  return { ...sweep, traces: traceRows, ambient, readings };
+  return { ...sweep, traces: traceRows, ambient, clocks: clockRows, readings };
 }
 
 export type SweepDetail = NonNullable<Awaited<ReturnType<typeof loadSweepDetail>>>;

@@ -117,6 +117,7 @@ export default async function SweepPage(props: SweepPageProps) {
         mask={comparable?.mask ?? null}
         suspects={comparable?.reading.suspects ?? []}
         guardDb={sweep.guardDb}
+        clocks={sweep.clocks}
       />
       {comparable ? (
         <>

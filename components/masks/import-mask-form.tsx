@@ -38,7 +38,9 @@ export function ImportMaskForm({ action }: { action: (input: unknown) => Promise
         <ul className="mb-4 space-y-1 border border-rule bg-sheet p-3" aria-label="Problems">
           {problems.map(([path, problem]) => (
             <li key={path}>
-              <span className="font-mono text-sm">{path}</span>{" "}
+              {problem.startsWith(`"${path}"`) ? null : (
+                <span className="mr-1.5 font-mono text-sm">{path}</span>
+              )}
               <span className="text-aground">{problem}</span>
             </li>
           ))}

@@ -10,7 +10,7 @@ interface FrequencyFieldProps {
   error: string | undefined;
 }
 
-/** A frequency typed with its unit; says below how it was read, so that a comma is no surprise. */
+/** A frequency typed with its unit; says below when it was read otherwise than it was written. */
 export function FrequencyField({ name, initialHz, error }: FrequencyFieldProps) {
   const [text, setText] = useState(initialHz === null ? "" : writeFrequency(initialHz));
   const frequencyHz = readFrequency(text);
@@ -26,7 +26,7 @@ export function FrequencyField({ name, initialHz, error }: FrequencyFieldProps) 
         onChange={(event) => setText(event.target.value)}
         error={error}
       />
-      {Number.isFinite(frequencyHz) ? (
+      {Number.isFinite(frequencyHz) && writeFrequency(frequencyHz) !== text.trim() ? (
         <p className="-mt-3 mb-3 text-sm text-ink-soft">
           Read as <span className="font-mono">{writeFrequency(frequencyHz)}</span>
         </p>

@@ -230,7 +230,7 @@ function OwnFields({
 export function StoreButton({ count, onStore }: { count: number; onStore: () => void }) {
   return (
     <Button onClick={onStore} disabled={count === 0}>
-      {count === 1 ? "Store 1 sweep" : `Store ${count} sweeps`}
+      {count === 0 ? "Store sweeps" : count === 1 ? "Store 1 sweep" : `Store ${count} sweeps`}
     </Button>
   );
 }

@@ -1,7 +1,7 @@
 "use client";
 
 import type { FormEvent } from "react";
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 
 interface Refusal {
   ok: false;
@@ -21,10 +21,19 @@ export function useActionForm<I, T>(options: {
 }) {
   const [pending, setPending] = useState(false);
   const [refusal, setRefusal] = useState<Refusal | null>(null);
+  const lastFocus = useRef<Element | null>(null);
+
+  // A button that is disabled while it waits loses the focus, which would start over at the top.
+  useEffect(() => {
+    const was = lastFocus.current;
+    if (pending || document.activeElement !== document.body) return;
+    if (was instanceof HTMLElement && was.isConnected) was.focus({ preventScroll: true });
+  }, [pending]);
 
   async function onSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault();
     const form = event.currentTarget;
+    lastFocus.current = document.activeElement;
     setPending(true);
     setRefusal(null);
     try {

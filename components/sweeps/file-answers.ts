@@ -3,7 +3,7 @@ import { DETECTOR_LABELS, DETECTORS, TRACE_KINDS } from "@/lib/core/sweep/settin
 import type { FileUnit } from "@/lib/core/units/level-units";
 import { LEVEL_UNIT_LABELS, LEVEL_UNITS, LINEAR_UNITS } from "@/lib/core/units/level-units";
 import { FREQUENCY_UNITS } from "@/lib/core/units/parse-quantity";
-import type { QuestionField, SweepFileAnswers } from "@/lib/formats/sweep-file";
+import type { QuestionField, SweepFileAnswers, SweepFileQuestion } from "@/lib/formats/sweep-file";
 
 /** What can be answered, by the field that a file leaves open. */
 export const ANSWER_OPTIONS: Record<QuestionField, { value: string; label: string }[]> = {
@@ -67,6 +67,19 @@ export function answerWords(
       return name && said.length > 0 ? [`${name} ${said.join(", ")}`] : [];
     }),
   ].join("; ");
+}
+
+/**
+ * Whether two files leave the same open and look alike in it: an answer for one that looks like Hz
+ * must not slip into one that looks like MHz.
+ */
+export function asksAlike(
+  a: readonly Pick<SweepFileQuestion, "field" | "guess">[],
+  b: readonly Pick<SweepFileQuestion, "field" | "guess">[],
+): boolean {
+  const asked = (questions: typeof a) =>
+    [...new Set(questions.map(({ field, guess }) => `${field} ${guess}`))].sort().join("|");
+  return asked(a) === asked(b);
 }
 
 /**

@@ -13,6 +13,7 @@ import type { LevelUnit } from "@/lib/core/units/level-units";
 import type { DeskFile } from "./desk-file";
 import { FileContents } from "./file-contents";
 import { FileQuestions } from "./file-questions";
+import { isHereAlready } from "./is-here-already";
 import { MEASUREMENT_FIELDS } from "./tag-fields";
 import { TagInputs } from "./tag-inputs";
 import type { TagDraft } from "./tags";
@@ -51,7 +52,13 @@ export function FileCard(props: FileCardProps) {
       <div className="mb-3 flex flex-wrap items-baseline gap-x-4 gap-y-1">
         <h3 className="min-w-0 font-mono text-base break-all">{file.file.name}</h3>
         <span role="status" className={isStopped ? "text-aground" : "text-ink-soft"}>
-          {isStopped && file.state === "ready" ? "not stored" : STATES[file.state]}
+          {file.state !== "ready"
+            ? STATES[file.state]
+            : isStopped
+              ? "not stored"
+              : isHereAlready(file)
+                ? "here already"
+                : STATES.ready}
         </span>
         {file.state === "stored" || busy ? null : (
           <button
@@ -63,8 +70,8 @@ export function FileCard(props: FileCardProps) {
           </button>
         )}
       </div>
-      {file.message ? (
-        <p role="alert" className="mb-3 border-l-4 border-aground bg-paper px-3 py-2">
+      {file.message && !file.errors.corrected ? (
+        <p role="alert" className="mb-3 max-w-none border-l-4 border-aground bg-paper px-3 py-2">
           {file.message}
         </p>
       ) : null}
@@ -201,7 +208,11 @@ function OwnFields({
           factors were applied, or answer its unit again.
         </p>
       ) : null}
-      {errors.corrected ? <p className="mb-3 text-sm text-aground">{errors.corrected}</p> : null}
+      {errors.corrected ? (
+        <p role="alert" className="mb-3 text-sm text-aground">
+          {errors.corrected}
+        </p>
+      ) : null}
       <details
         open={MEASUREMENT_FIELDS.some(({ path }) => errors[path]) || undefined}
         className="border-t border-rule pt-2"
@@ -230,7 +241,7 @@ function OwnFields({
 export function StoreButton({ count, onStore }: { count: number; onStore: () => void }) {
   return (
     <Button onClick={onStore} disabled={count === 0}>
-      {count === 0 ? "Store sweeps" : count === 1 ? "Store 1 sweep" : `Store ${count} sweeps`}
+      {count === 1 ? "Store 1 sweep" : `Store ${count} sweeps`}
     </Button>
   );
 }

@@ -9,7 +9,9 @@ import { StatusNote } from "@/components/ui/status-note";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import type { DeskFile } from "./desk-file";
+import { asksAlike } from "./file-answers";
 import { FileCard, StoreButton } from "./file-card";
+import { isHereAlready } from "./is-here-already";
 import { LINK_FIELDS, MEASUREMENT_FIELDS } from "./tag-fields";
 import { TagInputs } from "./tag-inputs";
 import type { TagDraft } from "./tags";
@@ -50,7 +52,7 @@ export function ImportDesk({ buildId, steps, benches, last, actions, ...props }:
     // A ladder's steps are tries; what counts is said on the ladder itself.
     onRecord: props.stepId === null,
   });
-  const ready = desk.files.filter((file) => file.state === "ready");
+  const ready = desk.files.filter((file) => file.state === "ready" && !isHereAlready(file));
   const open = desk.files.filter((file) => file.state === "asks");
 
   async function storeAll() {
@@ -193,9 +195,10 @@ export function ImportDesk({ buildId, steps, benches, last, actions, ...props }:
 
 /** The other files that leave the same open. */
 function alikeOf(file: DeskFile, open: readonly DeskFile[]): DeskFile[] {
-  const asked = ({ preview }: DeskFile) =>
-    [...new Set(preview?.questions.map(({ field }) => field))].sort().join();
-  return open.filter((other) => other.key !== file.key && asked(other) === asked(file));
+  const questionsOf = ({ preview }: DeskFile) => preview?.questions ?? [];
+  return open.filter(
+    (other) => other.key !== file.key && asksAlike(questionsOf(other), questionsOf(file)),
+  );
 }
 
 /** The bench's own distance fills an empty field; a typed one stays. */

@@ -1,5 +1,10 @@
 import { describe, expect, test } from "vitest";
-import { answersForOthers, answerWords, withAnswer } from "@/components/sweeps/file-answers";
+import {
+  answersForOthers,
+  answerWords,
+  asksAlike,
+  withAnswer,
+} from "@/components/sweeps/file-answers";
 
 const TRACES = [
   { column: 1, name: "Trace 1" },
@@ -25,5 +30,15 @@ describe("answers about a file", () => {
     const alike = withAnswer(withAnswer({}, "unit", 1, "dBuV"), "unit", 2, "dBuV");
     expect(answersForOthers({ ...alike, decimal: "," })).toEqual({ unit: "dBuV", decimal: "," });
     expect(answersForOthers(withAnswer(alike, "unit", 2, "dBm"))).toBeNull();
+  });
+
+  test("do not serve a file that looks different, though it leaves the same open", () => {
+    const hz = [
+      { field: "frequencyUnit", guess: "1" },
+      { field: "detector", guess: null },
+    ] as const;
+    expect(asksAlike(hz, [...hz].reverse())).toBe(true);
+    expect(asksAlike(hz, [{ field: "frequencyUnit", guess: "1000000" }, hz[1]])).toBe(false);
+    expect(asksAlike(hz, [hz[0]])).toBe(false);
   });
 });

@@ -33,9 +33,14 @@ export function SignalPathEditor(props: SignalPathEditorProps) {
   const { drafts, patch, changeTable, add, move, remove } = useTransducerDrafts(path, readTable);
   // Errors name places; a transducer that is moved afterwards keeps its own.
   const [sentIds, setSentIds] = useState<number[]>([]);
+  // What the server said of a field holds until that field is changed.
+  const [changed, setChanged] = useState<ReadonlySet<string>>(new Set());
+  const markChanged = (id: number, fields: string[]) =>
+    setChanged((all) => new Set([...all, ...fields.map((field) => `${id}.${field}`)]));
   const form = useActionForm({
     action: save,
     read: (data): unknown => {
+      setChanged(new Set());
       setSentIds(drafts.map((draft) => draft.id));
       return {
         benchId,
@@ -47,6 +52,7 @@ export function SignalPathEditor(props: SignalPathEditorProps) {
     onDone: () => router.push(`/benches/${benchId}`),
   });
   const errorOf = (id: number, field: string) => {
+    if (changed.has(`${id}.${field}`)) return undefined;
     const at = `transducers.${sentIds.indexOf(id)}.${field}`;
     const found = Object.entries(form.fieldErrors).find(
       ([path]) => path === at || path.startsWith(`${at}.`) || path === tableErrorOf(at),
@@ -80,8 +86,14 @@ export function SignalPathEditor(props: SignalPathEditorProps) {
           place={place}
           count={drafts.length}
           errorOf={(field) => errorOf(draft.id, field)}
-          onPatch={(change) => patch(draft.id, change)}
-          onTable={(change) => changeTable(draft, change)}
+          onPatch={(change) => {
+            markChanged(draft.id, Object.keys(change));
+            patch(draft.id, change);
+          }}
+          onTable={(change) => {
+            markChanged(draft.id, ["factors"]);
+            changeTable(draft, change);
+          }}
           onMove={(by) => move(draft.id, by)}
           onRemove={() => remove(draft.id)}
         />

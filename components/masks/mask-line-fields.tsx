@@ -55,7 +55,7 @@ export function MaskLineFields(props: MaskLineFieldsProps) {
       <legend className="px-2 font-title text-lg">{line.name.trim() || `Line ${place + 1}`}</legend>
       <div className="grid gap-x-4 sm:grid-cols-2">
         <Field
-          label="Name of the line"
+          label="Line"
           name={`${at}.name`}
           value={line.name}
           onChange={(event) => changes.patch({ name: event.target.value })}

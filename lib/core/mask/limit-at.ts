@@ -1,6 +1,13 @@
 import type { FrequencyRange } from "../reading/reading";
 import type { MaskLine, MaskSegment } from "./mask";
 
+/**
+ * Share of a frequency within which it lies on an edge. Frequencies worked out as start + i·step
+ * miss the edge that they mean by some parts in 10^16, and just past it the higher limit would
+ * apply, or none.
+ */
+export const EDGE_TOLERANCE = 1e-12;
+
 /** Limit of one segment at a frequency inside it, dB of the mask's unit. */
 export function segmentLimitAt(segment: MaskSegment, hz: number): number {
   if (hz === segment.startHz) return segment.startDb;
@@ -17,9 +24,10 @@ export function segmentLimitAt(segment: MaskSegment, hz: number): number {
  * segments meet or overlap the lower one applies (47 CFR 15.107(a), 15.109(c)).
  */
 export function limitAt(line: MaskLine, hz: number): number | null {
+  const slackHz = hz * EDGE_TOLERANCE;
   let lowest: number | null = null;
   for (const segment of line.segments) {
-    if (hz < segment.startHz || hz > segment.stopHz) continue;
+    if (hz < segment.startHz - slackHz || hz > segment.stopHz + slackHz) continue;
     const limit = segmentLimitAt(segment, hz);
     if (lowest === null || limit < lowest) lowest = limit;
   }

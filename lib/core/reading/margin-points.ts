@@ -1,4 +1,4 @@
-import { limitAt, lineRanges } from "../mask/limit-at";
+import { EDGE_TOLERANCE, limitAt, lineRanges } from "../mask/limit-at";
 import type { MaskLine } from "../mask/mask";
 import { frequencyAt, indexAtOrAfter, pointCount } from "../sweep/axis";
 import type { Trace } from "../sweep/trace";
@@ -54,12 +54,15 @@ export function holdAgainst(
 ): MarginPoints {
   const { axis, levelsDb } = trace;
   const count = Math.min(pointCount(axis), levelsDb.length);
-  const ranges = lineRanges(line).map(({ startHz, stopHz }) => ({
-    from: indexAtOrAfter(axis, startHz),
-    stopHz,
-    // One more than what lies below the end, for a sample right at it.
-    to: Math.min(count, indexAtOrAfter(axis, stopHz) + 1),
-  }));
+  const ranges = lineRanges(line).map((range) => {
+    const stopHz = range.stopHz * (1 + EDGE_TOLERANCE);
+    return {
+      from: indexAtOrAfter(axis, range.startHz * (1 - EDGE_TOLERANCE)),
+      stopHz,
+      // One more than what lies below the end, for a sample right at it.
+      to: Math.min(count, indexAtOrAfter(axis, stopHz) + 1),
+    };
+  });
   const points = makePoints(ranges.reduce((sum, r) => sum + Math.max(0, r.to - r.from), 0));
   let found = 0;
   for (const { from, to, stopHz } of ranges) {

@@ -9,7 +9,7 @@ import type { Reading, Standing } from "./reading";
 import { findSuspects } from "./suspects";
 
 /** Counts up whenever the same input may read differently. */
-export const ENGINE_VERSION = 1;
+export const ENGINE_VERSION = 2;
 
 export interface ReadSweepInput {
   traces: readonly Trace[];

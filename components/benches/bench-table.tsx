@@ -29,7 +29,7 @@ const COLUMNS: DataColumn<BenchLine>[] = [
       <>
         <Link
           href={`/benches/${b.id}`}
-          className="inline-block min-w-52 font-medium text-deep underline"
+          className="inline-block min-w-40 font-medium text-deep underline"
         >
           {keepUnits(b.name)}
         </Link>
@@ -38,16 +38,26 @@ const COLUMNS: DataColumn<BenchLine>[] = [
     ),
   },
   {
+    id: "calibrations",
+    header: "Calibrations",
+    value: calibrationWords,
+    cell: (b) => (
+      <span className={b.overdue > 0 ? "bg-shoal-bed px-1 whitespace-nowrap text-shoal" : ""}>
+        {calibrationWords(b)}
+      </span>
+    ),
+  },
+  {
     id: "site",
     header: "Site",
     value: (b) => b.site || null,
-    cell: (b) => keepUnits(b.site),
+    cell: (b) => <span className="block max-sm:min-w-44">{keepUnits(b.site)}</span>,
   },
   {
     id: "instrument",
     header: "Instrument",
     value: (b) => b.instrument || null,
-    cell: (b) => keepUnits(b.instrument),
+    cell: (b) => <span className="block max-sm:min-w-44">{keepUnits(b.instrument)}</span>,
   },
   {
     id: "distance",
@@ -65,16 +75,6 @@ const COLUMNS: DataColumn<BenchLine>[] = [
     value: (b) => b.transducers,
   },
   { id: "revision", header: "Revision", align: "right", mono: true, value: (b) => b.revision },
-  {
-    id: "calibrations",
-    header: "Calibrations",
-    value: calibrationWords,
-    cell: (b) => (
-      <span className={b.overdue > 0 ? "bg-shoal-bed px-1 whitespace-nowrap text-shoal" : ""}>
-        {calibrationWords(b)}
-      </span>
-    ),
-  },
 ];
 
 export function BenchTable({ benches }: { benches: BenchLine[] }) {

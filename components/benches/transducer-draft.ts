@@ -42,16 +42,27 @@ export function emptyTransducer(id: number): TransducerDraft {
   };
 }
 
-/** A stored transducer as a draft; frequencies in Hz, so that no digit is lost on the way. */
+/**
+ * The unit a stored table is shown in: MHz as calibrations are written, unless a digit were lost on
+ * the way there and back (the reader rounds a product to 15 digits).
+ */
+function unitOfTable(factors: readonly FactorPoint[]): number {
+  const survives = ({ frequencyHz }: FactorPoint) =>
+    frequencyHz >= 1e3 && Number(((frequencyHz / 1e6) * 1e6).toPrecision(15)) === frequencyHz;
+  return factors.every(survives) ? 1e6 : 1;
+}
+
+/** A stored transducer as a draft that reads back as the same table. */
 export function draftTransducer(id: number, transducer: Transducer): TransducerDraft {
+  const unitHz = unitOfTable(transducer.factors);
   return {
     id,
     name: transducer.name,
     kind: transducer.kind,
     calibratedOn: transducer.calibratedOn ?? "",
     dueOn: transducer.dueOn ?? "",
-    text: transducer.factors.map((f) => `${f.frequencyHz}\t${f.factorDb}`).join("\n"),
-    unit: "1",
+    text: transducer.factors.map((f) => `${f.frequencyHz / unitHz}\t${f.factorDb}`).join("\n"),
+    unit: String(unitHz),
     table: { state: "read", factors: transducer.factors },
   };
 }

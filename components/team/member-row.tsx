@@ -48,8 +48,9 @@ export function MemberRow({ member, isSelf, actions }: MemberRowProps) {
       <td className="px-4 py-3 whitespace-nowrap">
         {name}
         {isSelf ? <span className="text-ink-soft"> (you)</span> : null}
+        <span className="block text-sm text-ink-soft sm:hidden">{member.email}</span>
       </td>
-      <td className="px-4 py-3">{member.email}</td>
+      <td className="px-4 py-3 max-sm:hidden">{member.email}</td>
       <td className="px-4 py-2">
         <span className="flex gap-2">
           <select

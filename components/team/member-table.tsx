@@ -28,7 +28,7 @@ export function MemberTable({ members, ownUserId, actions }: MemberTableProps) {
         <thead className="text-sm text-ink-soft">
           <tr className="border-b border-rule">
             <th className="px-4 py-2 font-medium">Name</th>
-            <th className="px-4 py-2 font-medium">E-mail</th>
+            <th className="px-4 py-2 font-medium max-sm:hidden">E-mail</th>
             <th className="px-4 py-2 font-medium">Role</th>
             <th className="px-4 py-2 font-medium">Access</th>
           </tr>

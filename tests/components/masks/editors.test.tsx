@@ -44,7 +44,7 @@ describe("the mask editor", () => {
 });
 
 describe("the signal path editor", () => {
-  test("shows each table in Hz with every digit, and names every control", () => {
+  test("shows each table in MHz with every digit, and names every control", () => {
     const path: SignalPath = {
       version: 1,
       impedanceOhm: 75,
@@ -64,7 +64,7 @@ describe("the signal path editor", () => {
     const html = renderToStaticMarkup(
       <SignalPathEditor benchId="b" revision={1} path={path} save={refuse} readTable={refuse} />,
     );
-    expect(html).toContain("30000000.5\t18.4999975\n1000000000\t24");
+    expect(html).toContain("30.0000005\t18.4999975\n1000\t24");
     expect(html).toContain("2 rows read, 30.00 MHz to 1.000 GHz.");
     expect(html).toContain("Save as revision 2");
     expect(nameless(html)).toEqual([]);

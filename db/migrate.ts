@@ -2,6 +2,8 @@ import { fileURLToPath } from "node:url";
 import { drizzle } from "drizzle-orm/node-postgres";
 import { migrate } from "drizzle-orm/node-postgres/migrator";
 import { Client } from "pg";
+import { openDatabase } from "./client";
+import { refreshReadings } from "./refresh-readings";
 import { updateShippedMasks } from "./update-shipped-masks";
 
 /** Creates the app's role when missing, sets its password, and applies what is new in `drizzle/`. */
@@ -29,5 +31,11 @@ if (!ownerUrl || !appPassword) {
   process.exitCode = 1;
 } else {
   await migrateDatabase(ownerUrl, appPassword);
-  await updateShippedMasks(ownerUrl);
+  const { db, pool } = openDatabase(ownerUrl);
+  try {
+    await updateShippedMasks(db);
+    await refreshReadings(db);
+  } finally {
+    await pool.end();
+  }
 }

@@ -51,13 +51,13 @@ const COLUMNS: DataColumn<BenchLine>[] = [
     id: "site",
     header: "Site",
     value: (b) => b.site || null,
-    cell: (b) => <span className="block max-sm:min-w-44">{keepUnits(b.site)}</span>,
+    cell: (b) => <span className="block text-sm max-sm:min-w-44">{keepUnits(b.site)}</span>,
   },
   {
     id: "instrument",
     header: "Instrument",
     value: (b) => b.instrument || null,
-    cell: (b) => <span className="block max-sm:min-w-44">{keepUnits(b.instrument)}</span>,
+    cell: (b) => <span className="block text-sm max-sm:min-w-44">{keepUnits(b.instrument)}</span>,
   },
   {
     id: "distance",

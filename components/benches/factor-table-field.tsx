@@ -35,7 +35,7 @@ export function FactorTableField({ draft, name, error, onChange }: FactorTableFi
         hint="Frequency and factor in two columns, one row per point."
         rows={9}
         spellCheck={false}
-        className="font-mono"
+        className="font-mono [tab-size:14]"
         value={draft.text}
         onChange={(event) => onChange({ text: event.target.value })}
         error={typed ?? error}

@@ -101,7 +101,7 @@ test("bad files are told what is wrong with them at the file, and the build stil
       .getByRole("article", { name })
       .getByRole("button", { name: "Take off the list" })
       .click();
-  await expect(page.getByRole("button", { name: "Store 0 sweeps" })).toBeDisabled();
+  await expect(page.getByRole("button", { name: "Store 0 sweeps" }).first()).toBeDisabled();
 
   await page.goto(build);
   await expect(page.getByText("No sweeps yet.")).toBeVisible();

@@ -83,7 +83,6 @@ test("an engineer makes a program with its mask, a build, and a bench with its s
   await page.getByRole("button", { name: "Save as revision" }).click();
   await expect(page.getByRole("rowheader", { name: "Reed cable" })).toBeVisible();
   at.bench = pathOf(page);
-  await expectAccessible(page);
 
   await page.goto("/masks");
   await page.getByRole("link", { name: MASK }).first().click();
@@ -145,7 +144,6 @@ test("the ladder shows the 6 dB that step 1 bought, and step 1 goes on the line 
   await page.goto(at.build);
   await expect(page.getByText("over one sweep on the line of record")).toBeVisible();
   await expect(page.getByText("+13.2 dB", { exact: true }).first()).toBeVisible();
-  await expectAccessible(page);
 });
 
 test("the engineer issues the report and finds no way to approve it", async ({ page }) => {
@@ -153,7 +151,6 @@ test("the engineer issues the report and finds no way to approve it", async ({ p
   await page.goto(at.build);
   await page.getByRole("link", { name: "New report" }).click();
   await page.getByLabel("Title").fill(`${program}, bench summary`);
-  await expectAccessible(page);
   await page.getByRole("button", { name: "Save draft" }).click();
   await expect(page.getByText("A draft: nothing is fixed yet.")).toBeVisible();
   at.report = pathOf(page);

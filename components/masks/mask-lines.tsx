@@ -1,4 +1,5 @@
 import { writeFrequency } from "@/components/programs/read-frequency";
+import { keepUnits } from "@/components/ui/keep-units";
 import type { Mask, MaskLine } from "@/lib/core/mask/mask";
 import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
@@ -20,51 +21,57 @@ function bandwidthText({ rbwHz, rbwKind }: MaskLine): string {
 
 /** Every line of a mask with its segments, as they are held against a sweep. */
 export function MaskLines({ mask }: { mask: Mask }) {
-  return mask.lines.map((line) => (
+  return (
     <div
-      key={line.name}
-      className="mb-4 max-w-3xl overflow-x-auto border border-rule bg-sheet"
-      tabIndex={0}
-      role="region"
-      aria-label={`Segments of ${line.name}`}
+      className={`grid items-start gap-4 ${mask.lines.length > 1 ? "lg:grid-cols-2" : "max-w-3xl"}`}
     >
-      <table className="w-full text-left">
-        <caption className="px-3 py-2 text-left">
-          <span className="font-medium">{line.name}</span>{" "}
-          <span className="text-sm text-ink-soft">
-            {DETECTOR_LABELS[line.detector]} detector; {bandwidthText(line)}; limits in{" "}
-            {LEVEL_UNIT_LABELS[mask.unit]}
-          </span>
-        </caption>
-        <thead className="text-sm text-ink-soft">
-          <tr className="border-y border-rule">
-            <th className="px-3 py-1.5 text-right font-medium">From</th>
-            <th className="px-3 py-1.5 text-right font-medium">To</th>
-            <th className="px-3 py-1.5 text-right font-medium">Limit at start</th>
-            <th className="px-3 py-1.5 text-right font-medium">Limit at end</th>
-            <th className="px-3 py-2 font-medium">Between</th>
-          </tr>
-        </thead>
-        <tbody>
-          {line.segments.map((segment, i) => (
-            <tr key={i} className="border-b border-rule last:border-0">
-              <td className="px-3 py-1.5 text-right font-mono whitespace-nowrap">
-                {writeFrequency(segment.startHz)}
-              </td>
-              <td className="px-3 py-1.5 text-right font-mono whitespace-nowrap">
-                {writeFrequency(segment.stopHz)}
-              </td>
-              <td className="px-3 py-1.5 text-right font-mono">{levelText(segment.startDb)}</td>
-              <td className="px-3 py-1.5 text-right font-mono">{levelText(segment.stopDb)}</td>
-              <td className="px-3 py-1.5 text-sm text-ink-soft">
-                {segment.startDb === segment.stopDb
-                  ? "flat"
-                  : INTERPOLATION_LABELS[segment.interpolation]}
-              </td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      {mask.lines.map((line) => (
+        <div
+          key={line.name}
+          className="min-w-0 overflow-x-auto border border-rule bg-sheet"
+          tabIndex={0}
+          role="region"
+          aria-label={`Segments of ${line.name}`}
+        >
+          <table className="w-full text-left">
+            <caption className="px-3 py-2 text-left">
+              <span className="font-medium">{line.name}</span>{" "}
+              <span className="text-sm text-ink-soft">
+                {DETECTOR_LABELS[line.detector]} detector; {keepUnits(bandwidthText(line))}; limits
+                in {LEVEL_UNIT_LABELS[mask.unit]}
+              </span>
+            </caption>
+            <thead className="text-sm text-ink-soft">
+              <tr className="border-y border-rule">
+                <th className="px-3 py-1.5 text-right font-medium">From</th>
+                <th className="px-3 py-1.5 text-right font-medium">To</th>
+                <th className="px-3 py-1.5 text-right font-medium">Limit at start</th>
+                <th className="px-3 py-1.5 text-right font-medium">Limit at end</th>
+                <th className="px-3 py-2 font-medium">Between</th>
+              </tr>
+            </thead>
+            <tbody>
+              {line.segments.map((segment, i) => (
+                <tr key={i} className="border-b border-rule last:border-0">
+                  <td className="px-3 py-1.5 text-right font-mono whitespace-nowrap">
+                    {writeFrequency(segment.startHz)}
+                  </td>
+                  <td className="px-3 py-1.5 text-right font-mono whitespace-nowrap">
+                    {writeFrequency(segment.stopHz)}
+                  </td>
+                  <td className="px-3 py-1.5 text-right font-mono">{levelText(segment.startDb)}</td>
+                  <td className="px-3 py-1.5 text-right font-mono">{levelText(segment.stopDb)}</td>
+                  <td className="px-3 py-1.5 text-sm text-ink-soft">
+                    {segment.startDb === segment.stopDb
+                      ? "flat"
+                      : INTERPOLATION_LABELS[segment.interpolation]}
+                  </td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
+      ))}
     </div>
-  ));
+  );
 }

@@ -138,7 +138,9 @@ test("the ladder shows the 6 dB that step 1 bought, and step 1 goes on the line 
   const delta = rung.getByRole("row").filter({ hasText: MASK });
   await expect(delta).toContainText("+7.2 dB+13.2 dB");
   await expect(delta.getByRole("cell").last()).toHaveText("+6.0 dB");
-  await rung.getByRole("button", { name: "Put on the line of record" }).click();
+  const record = rung.getByRole("button", { name: "Put on the line of record" });
+  await record.click();
+  await expect(record).toHaveCount(0);
   await expect(rung.getByText("on the line of record")).toBeVisible();
   await expectAccessible(page);
   await page.goto(at.build);

@@ -7,7 +7,7 @@ export function MainNavigation({ items }: { items: { href: string; label: string
   const path = usePathname();
   const isHere = (href: string) => (href === "/" ? path === "/" : path.startsWith(href));
   return (
-    <nav aria-label="Main" className="flex gap-x-5">
+    <nav aria-label="Main" className="flex flex-wrap gap-x-5">
       {items.map(({ href, label }) => (
         <Link
           key={href}

@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import type { ZodType } from "zod";
 import { auditEvents } from "@/db/schema";
 import type { Transaction } from "@/db/client";
@@ -43,6 +44,8 @@ export function change<T>(
       await tx.insert(auditEvents).values({
         teamId: ctx.teamId,
         actorId: ctx.userId,
+        // The moment of the row itself: several rows of one transaction keep their order.
+        at: sql`clock_timestamp()`,
         action: entry.action,
         subjectType: entry.subjectType,
         subjectId: entry.subjectId,

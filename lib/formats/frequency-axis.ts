@@ -84,6 +84,9 @@ export function guessUnitHz([first, last]: [number, number]): number {
   return first >= 0.5 && last <= 8 ? 1e9 : 1e6;
 }
 
+/** No swept spectrum of this kind reaches it; beyond it the unit was mistaken. */
+const HIGHEST_HZ = 1e12;
+
 /** One multiplication leaves an error in the last bit; whole hertz are meant as such. */
 function toHz(value: number, unitHz: number): number {
   const hz = value * unitHz;
@@ -101,6 +104,11 @@ export function axisOfColumn(
   const values = table.rows.values[frequencyColumn] ?? new Float64Array(0);
   const hz = new Float64Array(rows?.length ?? values.length);
   for (let i = 0; i < hz.length; i += 1) hz[i] = toHz(values[rows?.[i] ?? i] ?? NaN, unitHz);
+  const highest = Math.max(hz[0] ?? 0, hz.at(-1) ?? 0);
+  if (highest > HIGHEST_HZ)
+    throw new Refusal(
+      `Read in that unit the sweep would reach ${(highest / 1e12).toPrecision(3)} THz. Check the unit of the frequencies.`,
+    );
   const resolution = table.probe.reduce(
     (most, cells) => Math.max(most, printedResolution(cells[frequencyColumn] ?? "", decimal)),
     0,

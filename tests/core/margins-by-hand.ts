@@ -18,7 +18,7 @@ interface Sample {
 /** Loose to tight, CISPR 16-1-1: PK ≥ QP ≥ RMS-AV ≥ AV. */
 const ORDER = ["peak", "quasi-peak", "rms-average", "average"];
 
-/** measurement.md §1: what 0 dB of a unit is in dBµV or dBµV/m. */
+/** What 0 dB of a unit is in dBµV or dBµV/m. */
 function offsetOf(unit: string, ohm: number): number {
   if (unit === "dBm") return 20 * Math.log10(Math.sqrt(1e-3 * ohm) * 1e6);
   if (unit === "dBmV") return 60;

@@ -9,7 +9,7 @@ const SCRIPT = `
 import json, sys
 import numpy as np
 out = []
-# measurement.md 1: what 0 dB of a unit is in the mask's, from volts, ohms and free space.
+# What 0 dB of a unit is in the mask's, from volts, ohms and free space.
 def offset(unit, ohm):
     return {
         "dBm": 20 * np.log10(np.sqrt(1e-3 * ohm) * 1e6),

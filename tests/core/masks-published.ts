@@ -1,6 +1,6 @@
 /**
- * The published tables of every shipped mask, written out anew from measurement.md §10, never from
- * the files. One row per detector and RBW: bands in MHz, levels in the unit of the head, "66>56"
+ * The published tables of every shipped mask, written down a second time by hand and apart from
+ * the files; the mark says whether the values were read in a public source or are from memory. One row per detector and RBW: bands in MHz, levels in the unit of the head, "66>56"
  * falling in log f. RBW and their 6 dB kind are those of CISPR 16-1-1, from memory.
  */
 export interface PublishedTable {

@@ -105,7 +105,7 @@ describe("published check values", () => {
     },
   );
 
-  // 47 CFR 15.109 states µV/m, read; one decimal in dB is the form of measurement.md §10.
+  // 47 CFR 15.109 states µV/m, read; one decimal in dB is the form of the published tables.
   it.each([
     ["fcc-15-109-class-b-3m", [100, 150, 200, 500]],
     ["fcc-15-109-class-a-10m", [90, 150, 210, 300]],

@@ -8,7 +8,7 @@ const FIELD: LevelUnit[] = ["dBuV/m", "dBuA/m", "dBpT"];
 const QUANTITIES: LevelUnit[][] = [TERMINAL, FIELD, ["dB"]];
 
 describe("published offsets", () => {
-  // measurement.md §1: computed from P = U²/R, I = U/R, the impedance of free space and µ0.
+  // Computed from P = U²/R, I = U/R, the impedance of free space and µ0.
   it.each([
     ["dBm", "dBuV", 50, 106.9897],
     ["dBm", "dBuV", 75, 108.7506],

@@ -33,7 +33,7 @@ function through(trace: Trace, transducers: Transducer[], impedanceOhm = 50): Tr
   return field;
 }
 
-/** measurement.md §2: 20 log10 f(MHz) − G(dBi) − 29.77 in 50 Ω, computed. */
+/** Antenna factor, 20 log10 f(MHz) − G(dBi) − 29.77 in 50 Ω, computed. */
 const factorOf = (mhz: number, gainDbi: number) => 20 * Math.log10(mhz) - gainDbi - 29.77;
 
 describe("published field examples", () => {

@@ -73,3 +73,11 @@ it("refuses a file of endless small tables instead of searching it for ever", ()
   const text = Array.from({ length: 2100 }, (_, i) => `Part ${i} of many\n1,2\n2,1\n`).join("");
   expect(refusal(text)[1]).toContain("small tables");
 });
+
+it("a unit of frequency that no sweep can have been taken in is told, not stored", () => {
+  const text = "f,level\n30000000,40\n30100000,41\n30200000,42\n";
+  const answers = { frequencyUnitHz: 1e6, unit: "dBuV" as const, detector: "peak" as const };
+  const preview = previewSweepFile(new TextEncoder().encode(text), "a.csv", answers);
+  expect(preview.outcome).toBe("refused");
+  expect(preview.reason).toContain("Check the unit of the frequencies");
+});

@@ -2,6 +2,7 @@ import { sweeps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { applySignalPath } from "@/lib/core/bench/apply-signal-path";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
+import { reachesMask } from "@/lib/core/reading/combine-readings";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
 import type { Standing } from "@/lib/core/reading/reading";
 import type { Trace } from "@/lib/core/sweep/trace";
@@ -38,9 +39,9 @@ function throughPath(traces: Trace[], path: SignalPath, corrected: boolean): Tra
     const unit = LEVEL_UNIT_LABELS[trace.unit];
     throw new CommandError(
       "invalid",
-      `Trace ${trace.name} is in ${unit}, which is not a level at the instrument's input.`,
+      `"${trace.name}" is in ${unit}, which is not a level at the instrument's input.`,
       {
-        corrected: `Trace ${trace.name} is in ${unit}. If the instrument applied the factors itself, mark the file as corrected.`,
+        corrected: `"${trace.name}" is in ${unit}. If the instrument applied the factors itself, mark the file as corrected.`,
       },
     );
   });
@@ -109,7 +110,7 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
         const reading = await storeReading(tx, sweep, mask);
         // A mask that the sweep does not reach says nothing about it.
         const deciding = decidingPoint(reading);
-        if (!deciding) continue;
+        if (!deciding || !reachesMask(reading)) continue;
         readings.push({
           maskTitle: mask.content.title,
           standing: reading.standing,

@@ -2,23 +2,20 @@ import { z } from "zod";
 import { storable } from "../storable-text";
 import { ROLES } from "@/lib/auth/permissions";
 
-export const createFirstTeamSchema = z.object({
-  teamName: storable.trim().min(1, "Give the team a name.").max(80, "Keep it under 80 characters."),
-  name: storable.trim().min(1, "Write your name.").max(80, "Keep it under 80 characters."),
-  email: z.email("Write an e-mail address, for example ada@example.com."),
-  password: z
-    .string()
-    .min(10, "Use at least 10 characters.")
-    .max(200, "Keep it under 200 characters."),
-});
-
-const userId = z.uuid("Choose a member.");
-const role = z.enum(ROLES, "Choose a role.");
-
 const newPassword = z
   .string()
   .min(12, "Use at least 12 characters.")
   .max(200, "Keep it under 200 characters.");
+
+export const createFirstTeamSchema = z.object({
+  teamName: storable.trim().min(1, "Give the team a name.").max(80, "Keep it under 80 characters."),
+  name: storable.trim().min(1, "Write your name.").max(80, "Keep it under 80 characters."),
+  email: z.email("Write an e-mail address, for example ada@example.com."),
+  password: newPassword,
+});
+
+const userId = z.uuid("Choose a member.");
+const role = z.enum(ROLES, "Choose a role.");
 
 export const addMemberSchema = z.object({
   name: storable.trim().min(1, "Write the person's name.").max(80, "Keep it under 80 characters."),

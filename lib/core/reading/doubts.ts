@@ -39,7 +39,7 @@ function bandwidthDoubts(mask: Mask, settings: MeasurementSettings, swept: Trace
     if (!(step > rbwHz / 2)) continue;
     // A Gaussian filter between two points (C); an unstated kind takes the larger number.
     const loss = (rbwKind === "3dB" ? 3.01 : 6.02) * (step / rbwHz) ** 2;
-    const text = `Trace ${trace.name} has a step of ${formatFrequency(step)}, more than half the bandwidth of ${formatFrequency(rbwHz)}: a line midway between points reads ${loss.toFixed(1)} dB low. Take more points.`;
+    const text = `"${trace.name}" has a step of ${formatFrequency(step)}, more than half the bandwidth of ${formatFrequency(rbwHz)}: a line midway between points reads ${loss.toFixed(1)} dB low. Take more points.`;
     doubts.push({ code: "step-coarse", text, valueDb: loss });
   }
   return doubts;

@@ -46,9 +46,9 @@ function inMaskUnit(input: ReadSweepInput): Trace[] | string {
     const add = convertLevel(0, trace.unit, mask.unit, stated ?? 50);
     const units = `${LEVEL_UNIT_LABELS[trace.unit]} and the mask in ${LEVEL_UNIT_LABELS[mask.unit]}`;
     if (add === null)
-      return `Trace ${trace.name} is in ${units}; these are different quantities, so a signal path has to be applied first.`;
+      return `"${trace.name}" is in ${units}; these are different quantities, so a signal path has to be applied first.`;
     if (stated === null && add !== convertLevel(0, trace.unit, mask.unit, 75))
-      return `Trace ${trace.name} is in ${units}; state the impedance of the instrument to restate one in the other.`;
+      return `"${trace.name}" is in ${units}; state the impedance of the instrument to restate one in the other.`;
     const levelsDb = Float32Array.from(trace.levelsDb, (level) => level + add);
     traces.push({ ...trace, unit: mask.unit, levelsDb });
   }

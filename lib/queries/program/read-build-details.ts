@@ -3,6 +3,7 @@ import { inTeam } from "@/db/client";
 import { builds, programs } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
+import { isId } from "../is-id";
 
 export interface BuildDetails {
   id: string;
@@ -19,7 +20,7 @@ export async function readBuildDetails(
   ids: { programId: string; buildId: string },
 ): Promise<BuildDetails | null> {
   requirePermission(ctx, "program.read");
-  if (![ids.programId, ids.buildId].every((id) => /^[0-9a-f-]{36}$/i.test(id))) return null;
+  if (!isId(ids.programId) || !isId(ids.buildId)) return null;
   const rows = await inTeam(ctx.db, ctx.teamId, (tx) =>
     tx
       .select({

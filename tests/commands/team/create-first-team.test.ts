@@ -23,7 +23,7 @@ describe("first run and signing in", () => {
   test("a short password is refused at its field and nothing is made", async () => {
     await expect(
       createFirstTeam({ ...INPUT, password: "short" }, database.app),
-    ).rejects.toMatchObject({ fieldErrors: { password: "Use at least 10 characters." } });
+    ).rejects.toMatchObject({ fieldErrors: { password: "Use at least 12 characters." } });
     expect((await database.owner.query("select 1 from teams")).rowCount).toBe(0);
   });
 

@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { addStep } from "@/lib/commands/ladder/add-step";
 import { archiveLadder } from "@/lib/commands/ladder/archive-ladder";
 import { createLadder } from "@/lib/commands/ladder/create-ladder";
@@ -19,12 +19,6 @@ const runAddStep = defineAction(addStep);
 const runEditStep = defineAction(editStep);
 const runRemoveStep = defineAction(removeStep);
 const runRecordStep = defineAction(recordStep);
-
-async function refreshed<R extends { ok: boolean }>(running: Promise<R>): Promise<R> {
-  const result = await running;
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
-}
 
 export async function startLadder(input: unknown) {
   return refreshed(runCreate(input));

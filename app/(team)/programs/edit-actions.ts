@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { archiveBuild } from "@/lib/commands/program/archive-build";
 import { archiveProgram } from "@/lib/commands/program/archive-program";
 import { editBuild } from "@/lib/commands/program/edit-build";
@@ -11,13 +11,6 @@ import { restoreProgram } from "@/lib/commands/program/restore-program";
 import { setClocks } from "@/lib/commands/program/set-clocks";
 import { setMilestones } from "@/lib/commands/program/set-milestones";
 import { setProgramMasks } from "@/lib/commands/program/set-program-masks";
-
-/** Everything here shows on the overview and on several pages below it. */
-async function refreshed<R extends { ok: boolean }>(running: Promise<R>): Promise<R> {
-  const result = await running;
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
-}
 
 const runEditProgram = defineAction(editProgram);
 const runEditBuild = defineAction(editBuild);

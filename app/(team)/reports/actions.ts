@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { approveReport } from "@/lib/commands/report/approve-report";
 import { createReport } from "@/lib/commands/report/create-report";
 import { discardDraft } from "@/lib/commands/report/discard-draft";
@@ -15,12 +15,6 @@ const runDiscard = defineAction(discardDraft);
 const runIssue = defineAction(issueReport);
 const runApprove = defineAction(approveReport);
 const runWithdraw = defineAction(withdrawReport);
-
-async function refreshed<R extends { ok: boolean }>(running: Promise<R>): Promise<R> {
-  const result = await running;
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
-}
 
 export async function draftReport(input: unknown) {
   return refreshed(runCreate(input));

@@ -1,18 +1,11 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { addMember } from "@/lib/commands/team/add-member";
 import { changeRole } from "@/lib/commands/team/change-role";
 import { deactivateMember } from "@/lib/commands/team/deactivate-member";
 import { reactivateMember } from "@/lib/commands/team/reactivate-member";
-
-/** A changed role may be the own one, which every page depends on. */
-async function refreshed<R extends { ok: boolean }>(running: Promise<R>): Promise<R> {
-  const result = await running;
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
-}
 
 const runAddMember = defineAction(addMember);
 const runChangeRole = defineAction(changeRole);

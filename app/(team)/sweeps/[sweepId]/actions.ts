@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { archiveSweep } from "@/lib/commands/sweep/archive-sweep";
 import { restoreSweep } from "@/lib/commands/sweep/restore-sweep";
 import { setOnRecord } from "@/lib/commands/sweep/set-on-record";
@@ -9,12 +9,6 @@ import { setOnRecord } from "@/lib/commands/sweep/set-on-record";
 const runArchive = defineAction(archiveSweep);
 const runRestore = defineAction(restoreSweep);
 const runSetOnRecord = defineAction(setOnRecord);
-
-async function refreshed<R extends { ok: boolean }>(running: Promise<R>): Promise<R> {
-  const result = await running;
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
-}
 
 export async function putAside(sweepId: string) {
   return refreshed(runArchive({ sweepId }));

@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { archiveBench } from "@/lib/commands/bench/archive-bench";
 import { createBench } from "@/lib/commands/bench/create-bench";
 import { editBench } from "@/lib/commands/bench/edit-bench";
@@ -17,33 +17,23 @@ const runReviseSignalPath = defineAction(reviseSignalPath);
 const runReadFactorTable = defineAction(readFactorTable);
 
 export async function addBench(input: unknown) {
-  const result = await runCreateBench(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runCreateBench(input));
 }
 
 export async function changeBench(input: unknown) {
-  const result = await runEditBench(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runEditBench(input));
 }
 
 export async function putBenchAway(input: unknown) {
-  const result = await runArchiveBench(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runArchiveBench(input));
 }
 
 export async function bringBenchBack(input: unknown) {
-  const result = await runRestoreBench(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runRestoreBench(input));
 }
 
 export async function saveSignalPath(input: unknown) {
-  const result = await runReviseSignalPath(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runReviseSignalPath(input));
 }
 
 export async function readTypedTable(input: unknown) {

@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { archiveMask } from "@/lib/commands/mask/archive-mask";
 import { copyMask } from "@/lib/commands/mask/copy-mask";
 import { createMask } from "@/lib/commands/mask/create-mask";
@@ -17,37 +17,25 @@ const runArchiveMask = defineAction(archiveMask);
 const runRestoreMask = defineAction(restoreMask);
 
 export async function addMask(input: unknown) {
-  const result = await runCreateMask(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runCreateMask(input));
 }
 
 export async function duplicateMask(input: unknown) {
-  const result = await runCopyMask(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runCopyMask(input));
 }
 
 export async function saveMask(input: unknown) {
-  const result = await runReviseMask(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runReviseMask(input));
 }
 
 export async function takeMaskFile(input: unknown) {
-  const result = await runImportMask(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runImportMask(input));
 }
 
 export async function putMaskAway(input: unknown) {
-  const result = await runArchiveMask(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runArchiveMask(input));
 }
 
 export async function bringMaskBack(input: unknown) {
-  const result = await runRestoreMask(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runRestoreMask(input));
 }

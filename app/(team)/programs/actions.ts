@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { createBuild } from "@/lib/commands/program/create-build";
 import { createProgram } from "@/lib/commands/program/create-program";
 
@@ -9,13 +9,9 @@ const runCreateProgram = defineAction(createProgram);
 const runCreateBuild = defineAction(createBuild);
 
 export async function addProgram(input: unknown) {
-  const result = await runCreateProgram(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runCreateProgram(input));
 }
 
 export async function addBuild(input: unknown) {
-  const result = await runCreateBuild(input);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runCreateBuild(input));
 }

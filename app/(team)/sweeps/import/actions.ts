@@ -1,7 +1,7 @@
 "use server";
 
-import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/adapters/define-action";
+import { refreshed } from "@/lib/adapters/refreshed";
 import { importSweep } from "@/lib/commands/sweep/import-sweep";
 import { previewFile } from "@/lib/commands/sweep/preview-file";
 
@@ -26,7 +26,5 @@ export async function previewUpload(form: FormData) {
 }
 
 export async function importUpload(form: FormData) {
-  const result = await runImport(form);
-  if (result.ok) revalidatePath("/", "layout");
-  return result;
+  return refreshed(runImport(form));
 }

@@ -46,7 +46,7 @@ test("an engineer sets milestones and clocks, with every error at its row, and a
 test("a liaison meets a clear refusal instead of the forms", async ({ page }) => {
   await signIn(page, "liaison@saltmarsh.example");
   await page.getByRole("link", { name: "Tern", exact: true }).first().click();
-  await expect(page.getByRole("heading", { name: "Tern" })).toBeVisible();
+  await expect(page.getByRole("heading", { name: "Tern", level: 1 })).toBeVisible();
   await page.goto(`${page.url()}/edit`);
   await expect(page.getByText("may read programs, not change them")).toBeVisible();
   await expect(page.getByRole("button", { name: "Store details" })).toHaveCount(0);

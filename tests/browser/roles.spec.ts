@@ -31,7 +31,7 @@ test("an engineer makes a program and its build, after a clear word about what w
   await expect(page.getByLabel("Name", { exact: true })).toHaveValue("Dunlin");
   await page.getByLabel("Target margin in dB").fill("2,5");
   await page.getByRole("button", { name: "Create program" }).click();
-  await expect(page.getByRole("heading", { name: "Dunlin" })).toBeVisible();
+  await expect(page.getByRole("heading", { name: "Dunlin", level: 1 })).toBeVisible();
   await expect(page.getByText("+2.5 dB")).toBeVisible();
   await page.getByLabel("Build", { exact: true }).fill("D1");
   await page.getByRole("button", { name: "Add build" }).click();
@@ -55,7 +55,7 @@ test("an admin sees the people, and another team sees none of our programs", asy
   await expectAccessible(page);
   await page.goto("/");
   await page.getByRole("link", { name: "Gannet" }).click();
-  await expect(page.getByRole("heading", { name: "Gannet" })).toBeVisible();
+  await expect(page.getByRole("heading", { name: "Gannet", level: 1 })).toBeVisible();
   const address = page.url();
   await page.getByRole("button", { name: "Sign out" }).click();
   await expect(page).toHaveURL(/\/sign-in$/);

@@ -1,7 +1,7 @@
 "use client";
 
 import { usePathname, useSearchParams } from "next/navigation";
-import { useMemo } from "react";
+import { useMemo, useSyncExternalStore } from "react";
 
 export interface UrlView {
   fromHz: number;
@@ -9,11 +9,32 @@ export interface UrlView {
   scale: "log" | "linear";
 }
 
-/** What is in view, kept in the address: it can be sent to somebody, and Back leads back. */
+const CHANGED = "neap-view";
+
+function listen(onChange: () => void): () => void {
+  window.addEventListener(CHANGED, onChange);
+  window.addEventListener("popstate", onChange);
+  return () => {
+    window.removeEventListener(CHANGED, onChange);
+    window.removeEventListener("popstate", onChange);
+  };
+}
+
+/**
+ * What is in view, kept in the address: it can be sent to somebody, and Back leads back. The
+ * address is read at once, not through the router, so that a second key press starts from what
+ * the first one left.
+ */
 export function useUrlView(extent: { fromHz: number; toHz: number }) {
-  const params = useSearchParams();
+  const given = useSearchParams().toString();
   const path = usePathname();
+  const search = useSyncExternalStore(
+    listen,
+    () => window.location.search,
+    () => `?${given}`,
+  );
   const view = useMemo((): UrlView => {
+    const params = new URLSearchParams(search);
     const from = Number(params.get("from") ?? extent.fromHz);
     const to = Number(params.get("to") ?? extent.toHz);
     const scale = params.get("scale") === "linear" ? "linear" : "log";
@@ -21,10 +42,9 @@ export function useUrlView(extent: { fromHz: number; toHz: number }) {
     return isView
       ? { fromHz: from, toHz: to, scale }
       : { fromHz: extent.fromHz, toHz: extent.toHz, scale };
-  }, [params, extent.fromHz, extent.toHz]);
+  }, [search, extent.fromHz, extent.toHz]);
 
   function write(change: Record<string, string | null>) {
-    // The address as it is now: two changes in one moment must not undo each other.
     const next = new URLSearchParams(window.location.search);
     for (const [name, value] of Object.entries(change)) {
       if (value === null) next.delete(name);
@@ -32,6 +52,7 @@ export function useUrlView(extent: { fromHz: number; toHz: number }) {
     }
     const query = next.toString();
     window.history.replaceState(null, "", query ? `${path}?${query}` : path);
+    window.dispatchEvent(new Event(CHANGED));
   }
 
   return {

@@ -135,6 +135,7 @@ test("the ladder shows the 6 dB that step 1 bought, and step 1 goes on the line 
   await page.goto(at.ladder);
   await expect(page.getByText("+6.0 dB", { exact: true }).first()).toBeVisible();
   await expect(page.getByText(`from +7.2 dB to +13.2 dB.`)).toBeVisible();
+  await rung.getByText("All numbers").first().click();
   const delta = rung.getByRole("row").filter({ hasText: MASK });
   await expect(delta).toContainText("+7.2 dB+13.2 dB");
   await expect(delta.getByRole("cell").last()).toHaveText("+6.0 dB");

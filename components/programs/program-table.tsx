@@ -1,6 +1,7 @@
 import Link from "next/link";
 import { StandingMark } from "@/components/readings/standing-mark";
 import type { Standing } from "@/lib/core/reading/reading";
+import { formatReportNumber } from "@/lib/core/report/report-number";
 import { formatMargin } from "@/lib/core/units/format";
 import { TrendThumb } from "./trend-thumb";
 
@@ -19,6 +20,7 @@ export interface ProgramLine {
   } | null;
   trend: { buildName: string; marginDb: number; standing: Standing }[];
   nextMilestone: { name: string; dueOn: string; requiredMarginDb: number | null } | null;
+  week: { sweeps: number; reports: number[] };
 }
 
 const day = (iso: string) => Date.parse(`${iso}T00:00:00Z`) / 86_400_000;
@@ -42,6 +44,17 @@ function againstTarget({ now, targetMarginDb }: ProgramLine): string {
   return now.standing === "undecided"
     ? `target ${formatMargin(targetMarginDb)} reached where it is decided`
     : `target ${formatMargin(targetMarginDb)} met`;
+}
+
+/** What came in the last seven days, in words; null when nothing did. */
+function weekText({ week }: ProgramLine): string | null {
+  const sweeps =
+    week.sweeps === 0
+      ? []
+      : [week.sweeps === 1 ? "1 sweep imported" : `${week.sweeps} sweeps imported`];
+  const reports = week.reports.map((number) => `${formatReportNumber(number)} issued`);
+  const news = [...sweeps, ...reports];
+  return news.length === 0 ? null : `This week: ${news.join(", ")}.`;
 }
 
 /** One program a row: where it stands, how that moved, what is due next. */
@@ -75,6 +88,7 @@ export function ProgramTable({ programs, today }: { programs: ProgramLine[]; tod
             ) : (
               <p className="mt-3 text-sm text-ink-soft">No milestone ahead</p>
             )}
+            <p className="text-sm text-ink-soft">{weekText(program)}</p>
           </div>
           <div>
             {program.now ? (

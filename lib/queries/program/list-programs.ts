@@ -7,6 +7,8 @@ import type { Standing } from "@/lib/core/reading/reading";
 import { worstOf } from "../sweep/worst-of";
 import type { MaskStanding } from "../sweep/load-readings";
 import { loadProgramTrends, newestStanding } from "./load-standings";
+import type { ProgramWeek } from "./load-week";
+import { loadWeek } from "./load-week";
 
 export interface ProgramRow {
   id: string;
@@ -20,6 +22,8 @@ export interface ProgramRow {
   trend: { buildName: string; marginDb: number; standing: Standing }[];
   /** The next one due on the given day or later. */
   nextMilestone: { name: string; dueOn: string; requiredMarginDb: number | null } | null;
+  /** What came in the seven days up to the given day. */
+  week: ProgramWeek;
 }
 
 /** How much room a program has against what it aims at; below zero it is short. */
@@ -65,6 +69,7 @@ export async function listPrograms(ctx: Context, today: string): Promise<Program
       teamId,
       found.map((program) => program.id),
     );
+    const weeks = await loadWeek(tx, teamId, today);
     return found.map((program, i): ProgramRow => {
       const trend = trends[i] ?? { programId: program.id, masks: [], builds: [] };
       const newest = newestStanding(trend);
@@ -83,6 +88,7 @@ export async function listPrograms(ctx: Context, today: string): Promise<Program
         nextMilestone: next
           ? { name: next.name, dueOn: next.dueOn, requiredMarginDb: next.requiredMarginDb }
           : null,
+        week: weeks.get(program.id) ?? { sweeps: 0, reports: [] },
       };
     });
   });

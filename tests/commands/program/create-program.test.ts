@@ -25,6 +25,7 @@ describe("createProgram", () => {
       now: null,
       trend: [],
       nextMilestone: null,
+      week: { sweeps: 0, reports: [] },
       ...INPUT,
     });
     expect(await auditRows(database, ctx.teamId)).toEqual([

@@ -52,7 +52,8 @@ function weekText({ week }: ProgramLine): string | null {
     week.sweeps === 0
       ? []
       : [week.sweeps === 1 ? "1 sweep imported" : `${week.sweeps} sweeps imported`];
-  const reports = week.reports.map((number) => `${formatReportNumber(number)} issued`);
+  const numbers = week.reports.map((number) => formatReportNumber(number).replace("-", "\u2011"));
+  const reports = numbers.length === 0 ? [] : [`${numbers.join(", ")} issued`];
   const news = [...sweeps, ...reports];
   return news.length === 0 ? null : `This week: ${news.join(", ")}.`;
 }

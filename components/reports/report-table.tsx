@@ -27,20 +27,25 @@ export function ReportTable({ reports }: ReportTableProps) {
       <table className="w-full text-left">
         <thead className="text-sm text-ink-soft">
           <tr className="border-b border-rule">
-            <th className="px-4 py-2 font-medium">Number</th>
+            <th className="hidden px-4 py-2 font-medium sm:table-cell">Number</th>
             <th className="px-4 py-2 font-medium">Report</th>
             <th className="px-4 py-2 font-medium">State</th>
-            <th className="px-4 py-2 font-medium">Issued on</th>
+            <th className="hidden px-4 py-2 font-medium sm:table-cell">Issued on</th>
             <th className="px-4 py-2 font-medium">PDF</th>
           </tr>
         </thead>
         <tbody>
           {reports.map((report) => (
             <tr key={report.id} className="border-b border-rule align-top last:border-0">
-              <td className="px-4 py-3 font-mono whitespace-nowrap">
+              <td className="hidden px-4 py-3 font-mono whitespace-nowrap sm:table-cell">
                 {report.number === null ? "" : formatReportNumber(report.number)}
               </td>
               <td className="px-4 py-3">
+                {report.number === null ? null : (
+                  <span className="block font-mono text-sm sm:hidden">
+                    {formatReportNumber(report.number)}
+                  </span>
+                )}
                 <Link href={`/reports/${report.id}`} className="font-medium text-deep underline">
                   {report.title}
                 </Link>
@@ -51,7 +56,7 @@ export function ReportTable({ reports }: ReportTableProps) {
               <td className="px-4 py-3">
                 <ReportState state={report.state} />
               </td>
-              <td className="px-4 py-3 font-mono whitespace-nowrap">
+              <td className="hidden px-4 py-3 font-mono whitespace-nowrap sm:table-cell">
                 {report.issuedAt ? (
                   <time
                     dateTime={report.issuedAt.toISOString()}

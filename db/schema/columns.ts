@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import { timestamp, uuid } from "drizzle-orm/pg-core";
 import { teams } from "./team";
 
@@ -7,5 +8,8 @@ export const teamId = () =>
     .notNull()
     .references(() => teams.id);
 
+/** The moment of the row itself, so that rows of one transaction keep their order. */
 export const createdAt = () =>
-  timestamp("created_at", { withTimezone: true }).notNull().defaultNow();
+  timestamp("created_at", { withTimezone: true })
+    .notNull()
+    .default(sql`clock_timestamp()`);

@@ -127,6 +127,16 @@ export const PUBLISHED_TABLES: Record<string, PublishedTable> = {
     source: "47 CFR 15.107(a), read",
     rows: MAINS_B,
   },
+  "fcc-15-209-300m": {
+    // The limit is read; which bands are average is not, so the mask stays from memory.
+    head: "47 CFR part 15 | 15.209(a), (d) | radiated | 300 m | dBuV/m | from memory",
+    source: "47 CFR 15.209(a): 2400/F(kHz) µV/m, read; 15.209(d) detectors from memory",
+    rows: [
+      `average 0.2 kHz | 0.009-0.09: ${20 * Math.log10(2400 / 9)}>${20 * Math.log10(2400 / 90)} | 0.11-0.15: ${20 * Math.log10(2400 / 110)}>${20 * Math.log10(2400 / 150)}`,
+      `average 9 kHz | 0.15-0.49: ${20 * Math.log10(2400 / 150)}>${20 * Math.log10(2400 / 490)}`,
+      `quasi-peak 0.2 kHz | 0.09-0.11: ${20 * Math.log10(2400 / 90)}>${20 * Math.log10(2400 / 110)}`,
+    ],
+  },
   "fcc-15-209-30m": {
     // The limits are read; the detector below 30 MHz is not, so the mask stays from memory.
     head: "47 CFR part 15 | 15.209(a) | radiated | 30 m | dBuV/m | from memory",

@@ -4,7 +4,9 @@ export default defineConfig({
   testDir: "tests/browser",
   workers: 1,
   retries: 0,
-  timeout: 60_000,
+  timeout: 180_000,
+  // Machines are shared and slow at times; what comes late is still right.
+  expect: { timeout: 15_000 },
   use: {
     baseURL: process.env.NEAP_ADDRESS,
     trace: "off",

@@ -5,7 +5,7 @@ import { formatMargin } from "@/lib/core/units/format";
 
 interface BuildListProps {
   programId: string;
-  masks: { id: string; title: string }[];
+  masks: { id: string; title: string; provenance: string }[];
   builds: {
     id: string;
     name: string;
@@ -36,6 +36,9 @@ export function BuildList({ programId, masks, builds }: BuildListProps) {
             {masks.map((mask) => (
               <th key={mask.id} className="max-w-56 px-4 py-2 font-medium">
                 {mask.title}
+                {mask.provenance === "from memory" ? (
+                  <span className="block text-shoal">from memory</span>
+                ) : null}
               </th>
             ))}
           </tr>

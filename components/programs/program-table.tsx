@@ -17,6 +17,7 @@ export interface ProgramLine {
     maskTitle: string;
     buildName: string;
     sweepId: string;
+    missing: string[];
   } | null;
   trend: { buildName: string; marginDb: number; standing: Standing }[];
   nextMilestone: { name: string; dueOn: string; requiredMarginDb: number | null } | null;
@@ -40,9 +41,10 @@ function untilText(dueOn: string, today: string): string {
 function againstTarget({ now, targetMarginDb }: ProgramLine): string {
   if (!now || now.marginDb === null) return `target ${formatMargin(targetMarginDb)}`;
   const lacking = targetMarginDb - now.marginDb;
-  if (lacking > 0) return `${lacking.toFixed(1)} dB short of ${formatMargin(targetMarginDb)}`;
-  return now.standing === "undecided"
-    ? `target ${formatMargin(targetMarginDb)} reached where it is decided`
+  if (lacking > 0)
+    return `${formatMargin(lacking).slice(1)} short of ${formatMargin(targetMarginDb)}`;
+  return now.standing === "undecided" || now.missing.length > 0
+    ? `target ${formatMargin(targetMarginDb)} reached where it was swept and decided`
     : `target ${formatMargin(targetMarginDb)} met`;
 }
 
@@ -107,6 +109,9 @@ export function ProgramTable({ programs, today }: { programs: ProgramLine[]; tod
                   {program.now.buildName} under {program.now.maskTitle}
                 </p>
                 <p className="text-sm">{againstTarget(program)}</p>
+                {program.now.missing.length > 0 ? (
+                  <p className="text-sm text-shoal">Not swept: {program.now.missing.join("; ")}</p>
+                ) : null}
               </>
             ) : (
               <>

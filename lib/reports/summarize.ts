@@ -14,6 +14,7 @@ import type { ReportSnapshot, SnapshotReading, SnapshotSweep } from "./report-sn
 export interface LineSummary {
   maskTitle: string;
   maskRevision: number;
+  fromMemory: boolean;
   lineName: string;
   unit: LevelUnit;
   /** Of the sweeps together, and the sweep that it comes from. */
@@ -67,7 +68,14 @@ function rowsOf(group: HeldSweep[]): LineSummary[] {
   const [first] = group;
   if (!first) return [];
   const { mask, maskRevision, reading } = first.held;
-  const at = { maskTitle: mask.title, maskRevision, unit: reading.unit, sweepCount: group.length };
+  const fromMemory = mask.provenance === "from memory";
+  const at = {
+    maskTitle: mask.title,
+    maskRevision,
+    fromMemory,
+    unit: reading.unit,
+    sweepCount: group.length,
+  };
   if (reading.lines.length === 0) {
     const explanation = reading.notComparable ?? "This mask has no lines.";
     const standingSweep = first.sweep.name;
@@ -86,8 +94,11 @@ function rowsOf(group: HeldSweep[]): LineSummary[] {
   return combineReadings(mask, readings).lines.map((line, i): LineSummary => {
     const from = line.source === null ? undefined : group[line.source];
     const own = from?.held.reading.lines[i] ?? reading.lines[i];
-    const over = group.find(({ held }) => held.reading.lines[i]?.standing === "over");
-    const decider = (line.standing === "over" ? over : from) ?? first;
+    const inGuard = group.find(({ held }) => {
+      const point = held.reading.lines[i]?.worst;
+      return point && point.marginDb < held.reading.guardDb;
+    });
+    const decider = (line.standing === "inside-guard" ? inGuard : from) ?? first;
     const point = line.worst;
     const stepHz = (point && from?.sweep.traces[point.traceIndex]?.stepHz) ?? undefined;
     return {
@@ -151,6 +162,7 @@ const IMPORTANT_FIRST: readonly DoubtCode[] = [
   "rbw-differs",
   "rbw-unstated",
   "mask-from-memory",
+  "plane-wave-assumed",
   "distance-restated",
   "step-coarse",
   "ambient-near",

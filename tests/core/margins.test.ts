@@ -43,6 +43,7 @@ function read(
 ) {
   const line = { name: "l", detector: "peak" as const, rbwHz: null, rbwKind: null, segments };
   const mask = {
+    port: "mains",
     unit: "dBuV",
     distanceM: null,
     provenance: "team",

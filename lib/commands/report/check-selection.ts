@@ -28,7 +28,7 @@ export async function checkSelection(
       ),
     );
   if (found.length < selection.sweepIds.length) {
-    throw new CommandError("invalid", "Some fields need another look.", {
+    throw new CommandError("invalid", "A chosen sweep is archived or belongs to another build.", {
       sweepIds: "A chosen sweep is archived or belongs to another build.",
     });
   }
@@ -41,10 +41,11 @@ export async function checkSelection(
           eq(ladders.teamId, teamId),
           eq(ladders.id, selection.ladderId),
           eq(ladders.buildId, buildId),
+          isNull(ladders.archivedAt),
         ),
       );
     if (!ladder) {
-      throw new CommandError("invalid", "Some fields need another look.", {
+      throw new CommandError("invalid", "Choose a ladder of this build.", {
         ladderId: "Choose a ladder of this build.",
       });
     }
@@ -67,7 +68,7 @@ export async function checkSelection(
       ),
     );
   if (!replaced) {
-    throw new CommandError("invalid", "Some fields need another look.", {
+    throw new CommandError("invalid", "Choose an issued report of the same program.", {
       replacesId: "Choose an issued report of the same program.",
     });
   }

@@ -1,10 +1,11 @@
-import { eq, max } from "drizzle-orm";
-import { reports, teams, users } from "@/db/schema";
+import { and, eq, max } from "drizzle-orm";
+import { reports, reportSweeps, teams, users } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { buildReport } from "@/lib/reports/build-report";
 import { formatReportNumber } from "@/lib/core/report/report-number";
 import { hashSnapshot } from "@/lib/reports/snapshot-hash";
 import { change, parseInput, requirePermission } from "../run";
+import { checkSelection } from "./check-selection";
 import { lockReport } from "./lock-report";
 import { moveReport } from "./move-report";
 import { reportIdSchema } from "./schemas";
@@ -30,6 +31,13 @@ export async function issueReport(
       ["draft"],
       "This report is issued already.",
     );
+    const chosen = await tx
+      .select({ id: reportSweeps.sweepId })
+      .from(reportSweeps)
+      .where(and(eq(reportSweeps.teamId, teamId), eq(reportSweeps.reportId, reportId)));
+    // What was chosen for the draft may have been archived since.
+    const sweepIds = chosen.map((sweep) => sweep.id);
+    await checkSelection(tx, teamId, draft.buildId, { ...draft, sweepIds });
     const [last] = await tx
       .select({ number: max(reports.number) })
       .from(reports)

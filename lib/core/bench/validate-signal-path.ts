@@ -1,4 +1,4 @@
-import type { FactorPoint, SignalPath, Transducer } from "./signal-path";
+import type { FactorPoint, SignalPath, Transducer, TransducerKind } from "./signal-path";
 
 /** `path` names the field ("transducers.0.factors"), `text` is a sentence for a person. */
 export interface SignalPathProblem {
@@ -14,6 +14,21 @@ function isIsoDate(text: string): boolean {
   if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return false;
   const date = new Date(`${text}T00:00:00Z`);
   return !Number.isNaN(date.getTime()) && date.toISOString().startsWith(text);
+}
+
+/** Kinds whose table is a loss or a gain, which Neap adds or subtracts by itself. */
+const AMOUNTS: Partial<Record<TransducerKind, string>> = {
+  cable: "loss",
+  attenuator: "loss",
+  preamplifier: "gain",
+};
+
+/** A loss written as a transmission (−3 dB) would raise every margin by twice its size. */
+function signProblem({ kind, factors }: Transducer): string | null {
+  const amount = AMOUNTS[kind];
+  const row = factors.findIndex((point) => point.factorDb < 0);
+  if (!amount || row < 0) return null;
+  return `Row ${row + 1}: ${factors[row]?.factorDb} dB is negative. Write the ${amount} as a positive number; Neap knows its sign.`;
 }
 
 function factorProblem(points: readonly FactorPoint[]): string | null {
@@ -56,7 +71,8 @@ function dateProblems(transducer: Transducer, at: string): SignalPathProblem[] {
 /**
  * Everything that keeps a signal path from being used; empty when it can be. Checked: an
  * impedance in Ω above 0, names that are there and differ, factor tables of two rows or more
- * with ascending frequencies in Hz and factors in dB, and dates (ISO) that exist and are in order.
+ * with ascending frequencies in Hz and factors in dB, losses and gains that are not negative,
+ * and dates (ISO) that exist and are in order.
  * A path without transducers is sound: the level at the instrument's input is then the result.
  */
 export function validateSignalPath(path: SignalPath): SignalPathProblem[] {
@@ -75,7 +91,7 @@ export function validateSignalPath(path: SignalPath): SignalPathProblem[] {
       });
     names.add(name);
     problems.push(...dateProblems(transducer, at));
-    const text = factorProblem(transducer.factors);
+    const text = factorProblem(transducer.factors) ?? signProblem(transducer);
     if (text !== null) problems.push({ path: `${at}.factors`, text });
   });
   return problems;

@@ -91,15 +91,14 @@ export function combineReadings(mask: Mask, readings: readonly Held[]): Combined
     const combined = combineLine(line, held);
     return { ...combined, standing: standingOf(combined, held, readings) };
   });
+  const over = lines.filter((line) => line.standing === "over");
   let deciding: CombinedReading["deciding"] = null;
-  for (const line of lines) {
+  // The lowest of the lines that are over or, when none is, of all: as for a single reading.
+  for (const line of over.length > 0 ? over : lines) {
     const { worst, source } = line;
     if (!worst || source === null) continue;
-    const byStanding =
-      WORST_FIRST.indexOf(line.standing) - WORST_FIRST.indexOf(deciding?.standing ?? "clear");
-    const isWorse =
-      !deciding || byStanding < 0 || (byStanding === 0 && worst.marginDb < deciding.worst.marginDb);
-    if (isWorse) deciding = { ...line, worst, source };
+    if (!deciding || worst.marginDb < deciding.worst.marginDb)
+      deciding = { ...line, worst, source };
   }
   const standing = WORST_FIRST.find((s) => lines.some((line) => line.standing === s));
   return {

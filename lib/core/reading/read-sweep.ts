@@ -2,14 +2,14 @@ import type { Mask } from "../mask/mask";
 import type { MeasurementSettings } from "../sweep/settings";
 import type { Trace } from "../sweep/trace";
 import { convertLevel } from "../units/convert-level";
-import { LEVEL_UNIT_LABELS } from "../units/level-units";
+import { LEVEL_UNIT_LABELS, type LevelUnit } from "../units/level-units";
 import { doubtsOf, type ReadingContext } from "./doubts";
 import { readLine } from "./line-reading";
-import type { Reading, Standing } from "./reading";
+import type { Doubt, Reading, Standing } from "./reading";
 import { findSuspects } from "./suspects";
 
 /** Counts up whenever the same input may read differently. */
-export const ENGINE_VERSION = 2;
+export const ENGINE_VERSION = 3;
 
 export interface ReadSweepInput {
   traces: readonly Trace[];
@@ -29,6 +29,8 @@ const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "
 /** The traces in the mask's unit, or the sentence that says why they cannot be. */
 function inMaskUnit(input: ReadSweepInput): Trace[] | string {
   const { mask, settings } = input;
+  if (mask.port !== settings.port)
+    return `The mask is for the port "${mask.port}" and the sweep was taken at the port "${settings.port}".`;
   if (mask.distanceM !== null && settings.distanceM !== mask.distanceM) {
     const swept =
       settings.distanceM === null
@@ -45,7 +47,8 @@ function inMaskUnit(input: ReadSweepInput): Trace[] | string {
     const stated = input.impedanceOhm ?? null;
     const add = convertLevel(0, trace.unit, mask.unit, stated ?? 50);
     const units = `${LEVEL_UNIT_LABELS[trace.unit]} and the mask in ${LEVEL_UNIT_LABELS[mask.unit]}`;
-    if (add === null)
+    // Volt and ampere follow from each other at the instrument's input, not behind a current probe.
+    if (add === null || (trace.unit === "dBuA") !== (mask.unit === "dBuA"))
       return `"${trace.name}" is in ${units}; these are different quantities, so a signal path has to be applied first.`;
     if (stated === null && add !== convertLevel(0, trace.unit, mask.unit, 75))
       return `"${trace.name}" is in ${units}; state the impedance of the instrument to restate one in the other.`;
@@ -53,6 +56,16 @@ function inMaskUnit(input: ReadSweepInput): Trace[] | string {
     traces.push({ ...trace, unit: mask.unit, levelsDb });
   }
   return traces;
+}
+
+/** A field restated from electric to magnetic or back, which holds in a plane wave only. */
+function planeWaveDoubt(traces: readonly Trace[], unit: LevelUnit): Doubt[] {
+  if (traces.every((trace) => trace.unit === unit || !trace.unit.match(/\/m$|^dBpT$/))) return [];
+  const electric = (of: LevelUnit) => of === "dBuV/m";
+  if (traces.every((trace) => electric(trace.unit) === electric(unit))) return [];
+  const text =
+    "The field was restated between electric and magnetic as in a plane wave (51.5 dB); in the near field the two are not tied like this.";
+  return [{ code: "plane-wave-assumed", text, valueDb: null }];
 }
 
 /** Holds a sweep against a mask: margins, standing, coverage, suspects and doubts, in dB and Hz. */
@@ -96,6 +109,9 @@ export function readSweep(input: ReadSweepInput): Reading {
     coverage,
     suspects: findSuspects(traces, mask, rbwHz, suspectProminenceDb, suspectMarginDb),
     remeasure: read.flatMap((r) => r.remeasure),
-    doubts: doubtsOf(mask, settings, traces, lines, context),
+    doubts: [
+      ...doubtsOf(mask, settings, traces, lines, context),
+      ...planeWaveDoubt(input.traces, mask.unit),
+    ],
   };
 }

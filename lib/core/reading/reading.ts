@@ -27,6 +27,7 @@ export const DOUBT_CODES = [
   "distance-restated",
   "overload-suspected",
   "mask-from-memory",
+  "plane-wave-assumed",
 ] as const;
 export type DoubtCode = (typeof DOUBT_CODES)[number];
 

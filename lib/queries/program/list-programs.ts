@@ -6,7 +6,7 @@ import { requirePermission } from "@/lib/commands/run";
 import type { Standing } from "@/lib/core/reading/reading";
 import { worstOf } from "../sweep/worst-of";
 import type { MaskStanding } from "../sweep/load-readings";
-import { loadProgramTrends, newestStanding } from "./load-standings";
+import { loadProgramTrends, newestStanding, unreachedMasks } from "./load-standings";
 import type { ProgramWeek } from "./load-week";
 import { loadWeek } from "./load-week";
 
@@ -17,7 +17,14 @@ export interface ProgramRow {
   targetMarginDb: number;
   builds: number;
   /** Of the newest build that has sweeps on record; null without one. */
-  now: (MaskStanding & { buildId: string; buildName: string }) | null;
+  now:
+    | (MaskStanding & {
+        buildId: string;
+        buildName: string;
+        /** Titles of the program's masks that no sweep on record of this build reaches. */
+        missing: string[];
+      })
+    | null;
   /** Worst margin of each build that has one, oldest first. */
   trend: { buildName: string; marginDb: number; standing: Standing }[];
   /** The next one due on the given day or later. */
@@ -39,9 +46,9 @@ function room(program: ProgramRow): number {
  * First those with a level over their mask, whatever they aim at. Not knowing where a program
  * stands is a risk of its own: it comes next. The rest go by the room they have.
  */
-function group(program: ProgramRow): number {
-  if (!program.now || program.now.marginDb === null) return 1;
-  return program.now.marginDb < 0 ? 0 : 2;
+function group({ now }: ProgramRow): number {
+  if (!now || now.standing === "undecided") return 1;
+  return now.standing === "over" ? 0 : 2;
 }
 
 /** Programs of the team that are not archived, the riskiest first. `today` is an ISO date. */
@@ -78,7 +85,12 @@ export async function listPrograms(ctx: Context, today: string): Promise<Program
         ...program,
         builds: trend.builds.length,
         now: newest
-          ? { ...newest.worst, buildId: newest.build.id, buildName: newest.build.name }
+          ? {
+              ...newest.worst,
+              buildId: newest.build.id,
+              buildName: newest.build.name,
+              missing: unreachedMasks(trend, newest.build),
+            }
           : null,
         trend: trend.builds.flatMap((build) => {
           const worst = worstOf(build.standings);

@@ -93,3 +93,10 @@ export function newestStanding(
   }
   return null;
 }
+
+/** Titles of the program's masks under which a build has no standing: nothing on record reaches them. */
+export function unreachedMasks(trend: ProgramTrend, build: BuildTrend): string[] {
+  return trend.masks
+    .filter((mask) => build.standings.every((standing) => standing.maskId !== mask.id))
+    .map((mask) => mask.title);
+}

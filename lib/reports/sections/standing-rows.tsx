@@ -40,7 +40,7 @@ function Row({ row }: { row: LineSummary }) {
         <Words
           style={TYPE.strong}
           longest={40}
-        >{`${shorten(row.maskTitle, 60)} (revision ${row.maskRevision}) · ${shorten(row.lineName, 40)}`}</Words>
+        >{`${shorten(row.maskTitle, 60)} (revision ${row.maskRevision}${row.fromMemory ? ", from memory" : ""}) · ${shorten(row.lineName, 40)}`}</Words>
         <Words style={{ ...TYPE.small, color: COLOURS.inkSoft }} longest={50}>
           {explain(row)}
         </Words>

@@ -233,7 +233,7 @@ describe("importSweep", () => {
     },
   );
 
-  test("says nothing of a mask that the sweep does not reach, and of one in another unit why", async () => {
+  test("says nothing of a mask that the sweep does not reach, and of one for another port why", async () => {
     const ctx = await makeMember(database, "engineer");
     const place = await makePlace(ctx);
     const { maskId } = place;
@@ -251,6 +251,6 @@ describe("importSweep", () => {
       (detail?.readings ?? []).map(({ mask, reading }) => [mask.title, reading]),
     );
     expect(byTitle.Above).toMatchObject({ standing: "undecided", coverage: { fraction: 0 } });
-    expect(byTitle.Volts?.notComparable).toContain("different quantities");
+    expect(byTitle.Volts?.notComparable).toContain('the port "mains"');
   });
 });

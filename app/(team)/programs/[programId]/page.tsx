@@ -13,7 +13,7 @@ import { today } from "@/lib/adapters/clock";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { formatFrequency, formatMargin } from "@/lib/core/units/format";
-import { newestStanding } from "@/lib/queries/program/load-standings";
+import { newestStanding, unreachedMasks } from "@/lib/queries/program/load-standings";
 import type { MaskStanding } from "@/lib/queries/sweep/load-readings";
 import type { ProgramDetail } from "@/lib/queries/program/read-program";
 import { readProgram } from "@/lib/queries/program/read-program";
@@ -28,6 +28,7 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
   if (!program) notFound();
   const { trend } = program;
   const newest = newestStanding(trend);
+  const missing = newest ? unreachedMasks(trend, newest.build) : [];
   const mayWrite = isAllowed(ctx, "program.write") && program.archivedAt === null;
   return (
     <>
@@ -53,7 +54,7 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
         <BigMargin marginDb={newest.worst.marginDb} standing={newest.worst.standing}>
           {newest.build.name}, {newest.worst.lineName} line of {newest.worst.maskTitle}
           {` at ${formatFrequency(newest.worst.marginAtHz)}`}.{" "}
-          {againstTarget(newest.worst, program.targetMarginDb)}
+          {againstTarget(newest.worst, program.targetMarginDb, missing)}
         </BigMargin>
       ) : (
         <p className="text-lg">
@@ -102,13 +103,19 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
   );
 }
 
-function againstTarget({ marginDb, standing }: MaskStanding, targetDb: number): string {
+function againstTarget(
+  { marginDb, standing }: MaskStanding,
+  targetDb: number,
+  missing: string[],
+): string {
   const lacking = targetDb - marginDb;
-  if (lacking > 0)
-    return `${lacking.toFixed(1)} dB short of the target of ${formatMargin(targetDb)}.`;
-  return standing === "undecided"
-    ? `The target of ${formatMargin(targetDb)} is reached where the mask is decided.`
-    : `The target of ${formatMargin(targetDb)} is met on the bench.`;
+  const text =
+    lacking > 0
+      ? `${formatMargin(lacking).slice(1)} short of the target of ${formatMargin(targetDb)}.`
+      : standing === "undecided" || missing.length > 0
+        ? `The target of ${formatMargin(targetDb)} is reached where it was swept and decided.`
+        : `The target of ${formatMargin(targetDb)} is met on the bench.`;
+  return missing.length > 0 ? `${text} Not swept: ${missing.join("; ")}.` : text;
 }
 
 function seriesOf({ id: programId, trend }: ProgramDetail) {

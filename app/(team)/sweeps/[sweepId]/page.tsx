@@ -223,7 +223,10 @@ function headline({ reading, mask }: SweepDetail["readings"][number]): string {
   const { line, point } = deciding;
   const where = `${line.name} line of ${mask.title} at ${formatFrequency(point.frequencyHz)}`;
   const worst = reading.worstLineIndex === null ? null : reading.lines[reading.worstLineIndex];
-  return worst?.explanation ? `${where}. ${worst.explanation}` : `${where}.`;
+  if (!worst?.explanation) return `${where}.`;
+  return worst === line
+    ? `${where}. ${worst.explanation}`
+    : `${where}. ${worst.name} line: ${worst.explanation}`;
 }
 
 function shownTraces(sweep: SweepDetail) {

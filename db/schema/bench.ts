@@ -10,7 +10,9 @@ import {
   uuid,
 } from "drizzle-orm/pg-core";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
+import { GUARD_RULES } from "@/lib/core/bench/uncertainty-budget";
 import { createdAt, teamId } from "./columns";
+import { equipment } from "./equipment";
 import { teamPolicy } from "./team";
 
 export const benches = pgTable(
@@ -22,12 +24,23 @@ export const benches = pgTable(
     site: text("site").notNull().default(""),
     instrument: text("instrument").notNull().default(""),
     distanceM: doublePrecision("distance_m"),
+    /** The instrument as a piece of equipment with its calibrations; `instrument` is its words. */
+    instrumentId: uuid("instrument_id"),
+    /** In force now: stated, or computed from the budget in force by the guard rule. */
     guardDb: doublePrecision("guard_db").notNull().default(0),
+    guardRule: text("guard_rule", { enum: GUARD_RULES }).notNull().default("stated"),
+    /** Drift of a bench check beyond which its day is in doubt. */
+    checkToleranceDb: doublePrecision("check_tolerance_db").notNull().default(2),
     notes: text("notes").notNull().default(""),
     archivedAt: timestamp("archived_at", { withTimezone: true }),
     createdAt: createdAt(),
   },
   (t) => [
+    foreignKey({
+      name: "benches_instrument",
+      columns: [t.teamId, t.instrumentId],
+      foreignColumns: [equipment.teamId, equipment.id],
+    }),
     unique("benches_name").on(t.teamId, t.name),
     unique("benches_tenant").on(t.teamId, t.id),
     teamPolicy("team_id"),

@@ -1,4 +1,5 @@
 import { foreignKey, integer, pgTable, text, timestamp, unique, uuid } from "drizzle-orm/pg-core";
+import { STEP_STATES } from "@/lib/core/delta/ladder-order";
 import { createdAt, teamId } from "./columns";
 import { builds } from "./program";
 import { teamPolicy } from "./team";
@@ -37,9 +38,17 @@ export const ladderSteps = pgTable(
     position: integer("position").notNull(),
     name: text("name").notNull(),
     description: text("description").notNull().default(""),
+    /** The step that this one starts from; null: the last kept one before it. */
+    branchOfId: uuid("branch_of_id"),
+    state: text("state", { enum: STEP_STATES }).notNull().default("kept"),
     createdAt: createdAt(),
   },
   (t) => [
+    foreignKey({
+      name: "ladder_steps_branch_of",
+      columns: [t.teamId, t.branchOfId],
+      foreignColumns: [t.teamId, t.id],
+    }),
     foreignKey({
       name: "ladder_steps_ladder",
       columns: [t.teamId, t.ladderId],

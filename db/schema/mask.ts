@@ -1,4 +1,6 @@
+import { sql } from "drizzle-orm";
 import {
+  boolean,
   foreignKey,
   integer,
   jsonb,
@@ -12,9 +14,12 @@ import {
 import type { Mask } from "@/lib/core/mask/mask";
 import { createdAt, teamId } from "./columns";
 import { programs } from "./program";
-import { teamPolicy } from "./team";
+import { teamPolicy, users } from "./team";
 
 export const MASK_ORIGINS = ["shipped", "team"] as const;
+
+/** How a revision came to be: shipped with Neap, written by the team, or confirmed by it. */
+export const REVISION_SOURCES = ["shipped", "team", "confirmation"] as const;
 
 export const masks = pgTable(
   "masks",
@@ -42,6 +47,13 @@ export const maskRevisions = pgTable(
     maskId: uuid("mask_id").notNull(),
     revision: integer("revision").notNull(),
     content: jsonb("content").$type<Mask>().notNull(),
+    source: text("source", { enum: REVISION_SOURCES }).notNull().default("team"),
+    /** Who confirmed the limits, when, and against which copy; null unless this is a confirmation. */
+    confirmedBy: uuid("confirmed_by").references(() => users.id),
+    confirmedAt: timestamp("confirmed_at", { withTimezone: true }),
+    confirmedCopy: text("confirmed_copy"),
+    /** null while the readings of existing sweeps are still being made; then the one before counts. */
+    inForceAt: timestamp("in_force_at", { withTimezone: true }).default(sql`clock_timestamp()`),
     createdAt: createdAt(),
   },
   (t) => [
@@ -56,6 +68,30 @@ export const maskRevisions = pgTable(
   ],
 );
 
+/** How far the readings of a new revision have been made; the job behind it counts up. */
+export const maskRecomputations = pgTable(
+  "mask_recomputations",
+  {
+    teamId: teamId(),
+    maskRevisionId: uuid("mask_revision_id").notNull(),
+    total: integer("total").notNull(),
+    done: integer("done").notNull().default(0),
+    finishedAt: timestamp("finished_at", { withTimezone: true }),
+    /** What kept the last try from finishing; null when nothing did. */
+    problem: text("problem"),
+    createdAt: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.teamId, t.maskRevisionId] }),
+    foreignKey({
+      name: "mask_recomputations_revision",
+      columns: [t.teamId, t.maskRevisionId],
+      foreignColumns: [maskRevisions.teamId, maskRevisions.id],
+    }),
+    teamPolicy("team_id"),
+  ],
+);
+
 /** The masks that a program must fit under. */
 export const programMasks = pgTable(
   "program_masks",
@@ -63,6 +99,8 @@ export const programMasks = pgTable(
     teamId: teamId(),
     programId: uuid("program_id").notNull(),
     maskId: uuid("mask_id").notNull(),
+    /** Asked for by a person: sweeps taken at another distance are restated to the mask's. */
+    restateDistance: boolean("restate_distance").notNull().default(false),
   },
   (t) => [
     primaryKey({ columns: [t.teamId, t.programId, t.maskId] }),

@@ -1,4 +1,5 @@
 import {
+  boolean,
   doublePrecision,
   foreignKey,
   index,
@@ -10,6 +11,7 @@ import {
   unique,
   uuid,
 } from "drizzle-orm/pg-core";
+import type { AmbientCheck } from "@/lib/core/reading/ambient-check";
 import type { Reading } from "@/lib/core/reading/reading";
 import { BASES, STANDINGS } from "@/lib/core/reading/reading";
 import { createdAt, teamId } from "./columns";
@@ -30,6 +32,8 @@ export const readings = pgTable(
     maskId: uuid("mask_id").notNull(),
     maskRevisionId: uuid("mask_revision_id").notNull(),
     engineVersion: integer("engine_version").notNull(),
+    /** Levels were restated from the sweep's distance to the mask's, because the program asked. */
+    restated: boolean("restated").notNull().default(false),
     standing: text("standing", { enum: STANDINGS }).notNull(),
     /** Of the line that the reading is known by; null when the sweep does not reach the mask. */
     marginDb: doublePrecision("margin_db"),
@@ -57,7 +61,7 @@ export const readings = pgTable(
       columns: [t.teamId, t.maskRevisionId],
       foreignColumns: [maskRevisions.teamId, maskRevisions.id],
     }),
-    unique("readings_once").on(t.teamId, t.sweepId, t.maskRevisionId),
+    unique("readings_once").on(t.teamId, t.sweepId, t.maskRevisionId, t.restated),
     unique("readings_tenant").on(t.teamId, t.id),
     index("readings_by_mask").on(t.teamId, t.maskId),
     teamPolicy("team_id"),
@@ -87,6 +91,47 @@ export const suspects = pgTable(
       columns: [t.teamId, t.readingId],
       foreignColumns: [readings.teamId, readings.id],
     }).onDelete("cascade"),
+    teamPolicy("team_id"),
+  ],
+);
+
+/**
+ * Several sweeps held against one mask revision together, where that needs their levels. Kept the
+ * first time anyone needs it, under a hash of what it was made from, so it never goes stale.
+ */
+export const combinedReadings = pgTable(
+  "combined_readings",
+  {
+    teamId: teamId(),
+    key: text("key").notNull(),
+    content: jsonb("content").$type<Reading>().notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [primaryKey({ columns: [t.teamId, t.key] }), teamPolicy("team_id")],
+);
+
+/** An ambient sweep of the same bench and day held beside a reading. */
+export const ambientChecks = pgTable(
+  "ambient_checks",
+  {
+    teamId: teamId(),
+    readingId: uuid("reading_id").notNull(),
+    ambientSweepId: uuid("ambient_sweep_id").notNull(),
+    content: jsonb("content").$type<AmbientCheck>().notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.teamId, t.readingId, t.ambientSweepId] }),
+    foreignKey({
+      name: "ambient_checks_reading",
+      columns: [t.teamId, t.readingId],
+      foreignColumns: [readings.teamId, readings.id],
+    }).onDelete("cascade"),
+    foreignKey({
+      name: "ambient_checks_sweep",
+      columns: [t.teamId, t.ambientSweepId],
+      foreignColumns: [sweeps.teamId, sweeps.id],
+    }),
     teamPolicy("team_id"),
   ],
 );

@@ -14,11 +14,13 @@ import {
   unique,
   uuid,
 } from "drizzle-orm/pg-core";
+import type { SweepInstrument } from "@/lib/core/bench/equipment";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import { DETECTORS, HOLDS, SWEEP_PURPOSES, TRACE_KINDS } from "@/lib/core/sweep/settings";
 import { LEVEL_UNITS } from "@/lib/core/units/level-units";
 import { benches, signalPathRevisions } from "./bench";
+import { uncertaintyBudgets } from "./bench-quality";
 import { createdAt, teamId } from "./columns";
 import { storedFiles } from "./file";
 import { ladderSteps } from "./ladder";
@@ -47,6 +49,10 @@ export const sweeps = pgTable(
     settings: jsonb("settings").$type<MeasurementSettings>().notNull(),
     link: jsonb("link").$type<LinkSettings>().notNull(),
     guardDb: doublePrecision("guard_db").notNull(),
+    /** The bench's instrument on the day of the import; null: the bench names none. */
+    instrument: jsonb("instrument").$type<SweepInstrument>(),
+    /** The bench's uncertainty budget in force at the import; null: it has none. */
+    budgetId: uuid("budget_id"),
     notes: text("notes").notNull().default(""),
     /** Counts for the trend of its build. */
     onRecord: boolean("on_record").notNull(),
@@ -82,6 +88,12 @@ export const sweeps = pgTable(
       columns: [t.teamId, t.fileId],
       foreignColumns: [storedFiles.teamId, storedFiles.id],
     }),
+    foreignKey({
+      name: "sweeps_budget",
+      columns: [t.teamId, t.budgetId],
+      foreignColumns: [uncertaintyBudgets.teamId, uncertaintyBudgets.id],
+    }),
+    index("sweeps_by_bench_day").on(t.teamId, t.benchId, t.measuredOn),
     index("sweeps_by_build").on(t.teamId, t.buildId),
     index("sweeps_by_step").on(t.teamId, t.stepId),
     unique("sweeps_tenant").on(t.teamId, t.id),
@@ -117,6 +129,8 @@ export const traces = pgTable(
     /** Points with a level; the rest are not covered. */
     covered: integer("covered").notNull(),
     maxDb: doublePrecision("max_db"),
+    /** Highest level in the file's unit, before the signal path; null: not kept at the time. */
+    fileMaxDb: doublePrecision("file_max_db"),
     maxAtHz: doublePrecision("max_at_hz"),
     floorDb: doublePrecision("floor_db"),
     /** 10 log10 of the sum of power ratio times step in Hz; see lib/core/sweep/band-power.ts. */

@@ -104,6 +104,7 @@ describe("buoys", () => {
     lineName: null,
     basis: "upper-bound" as const,
     traceIndex: 0,
+    partIndex: 0,
   };
 
   test("at neighbouring peaks do not lie on each other", () => {

@@ -46,7 +46,15 @@ export async function addShippedMasks(
       throw new Error(`The key ${row.key} of a shipped mask is taken by a mask of the team's own.`);
     const before = current.get(row.id);
     if (before && isDeepStrictEqual(before.content, content)) return [];
-    return [{ teamId, maskId: row.id, revision: (before?.revision ?? 0) + 1, content }];
+    return [
+      {
+        teamId,
+        maskId: row.id,
+        revision: (before?.revision ?? 0) + 1,
+        content,
+        source: "shipped" as const,
+      },
+    ];
   });
   if (fresh.length === 0) return;
   await tx.insert(maskRevisions).values(fresh);

@@ -3,10 +3,10 @@ import { maskRevisions } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
-import { completeReadings } from "../sweep/complete-readings";
 import { lockMask } from "./lock-mask";
 import { readMaskInput } from "./read-mask-input";
 import { reviseMaskSchema } from "./schemas";
+import { startRecomputation } from "./start-recomputation";
 
 /** Adds the next revision of a team's mask; readings name the one they were made with. */
 export async function reviseMask(
@@ -42,11 +42,11 @@ export async function reviseMask(
     const revision = current.revision + 1;
     const [row] = await tx
       .insert(maskRevisions)
-      .values({ teamId: ctx.teamId, maskId, revision, content })
+      .values({ teamId: ctx.teamId, maskId, revision, content, inForceAt: null })
       .returning({ id: maskRevisions.id });
     if (!row) throw new Error("The mask was not stored.");
     const maskRevisionId = row.id;
-    await completeReadings(tx, ctx.teamId, { maskId });
+    await startRecomputation(tx, ctx, { maskId, maskRevisionId });
     await audit({
       action: "mask.revise",
       subjectType: "mask",

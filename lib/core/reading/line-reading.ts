@@ -130,6 +130,8 @@ export function readLine(
     lineName: line.name,
     boundDb: bounds.levelsDb[i] ?? Number.NaN,
     limitDb: bounds.limitsDb[i] ?? Number.NaN,
+    traceIndex: bounds.traceIndexes[i] ?? 0,
+    partIndex: 0,
   }));
   return {
     reading: {
@@ -140,6 +142,7 @@ export function readLine(
       standing,
       worst,
       coverage,
+      bands: [],
       explanation,
     },
     remeasure,

@@ -135,6 +135,7 @@ export function lowestPoint(points: MarginPoints): MarginPoint | null {
     limitDb: points.limitsDb[lowest] ?? Number.NaN,
     marginDb: lowestDb,
     traceIndex: points.traceIndexes[lowest] ?? 0,
+    partIndex: 0,
   };
 }
 

@@ -20,16 +20,31 @@ export const DOUBT_CODES = [
   "rbw-kind-differs",
   "step-coarse",
   "not-covered",
+  "polarization-missing",
   "calibration-overdue",
+  "calibration-unchecked",
   "ambient-not-taken",
   "ambient-near",
+  "ambient-not-comparable",
   "sweep-time-short",
+  "sweep-time-unchecked",
   "distance-restated",
+  "near-field",
   "overload-suspected",
+  "overload-unchecked",
+  "bench-check-drifted",
   "mask-from-memory",
   "plane-wave-assumed",
 ] as const;
 export type DoubtCode = (typeof DOUBT_CODES)[number];
+
+/** Doubts that say that something could not be checked, because the sweep does not state it. */
+export const UNCHECKED_DOUBTS: ReadonlySet<DoubtCode> = new Set([
+  "rbw-unstated",
+  "calibration-unchecked",
+  "sweep-time-unchecked",
+  "overload-unchecked",
+]);
 
 /** Something that weakens a reading. `text` is a whole sentence with its number and the remedy. */
 export interface Doubt {
@@ -56,6 +71,18 @@ export interface MarginPoint {
   /** limit minus level, dB; positive lies under the mask. */
   marginDb: number;
   traceIndex: number;
+  /** Which of the sweeps held together gave the level; 0 for a sweep held alone. */
+  partIndex: number;
+}
+
+/** A stretch of a line between two of its frequencies where the limit changes. */
+export interface BandReading {
+  startHz: number;
+  stopHz: number;
+  worst: MarginPoint | null;
+  basis: Basis;
+  /** Share of the band that was swept, 0…1 in log frequency. */
+  coverage: number;
 }
 
 export interface LineReading {
@@ -67,6 +94,8 @@ export interface LineReading {
   standing: Standing;
   worst: MarginPoint | null;
   coverage: Coverage;
+  /** Ascending; the line's worst is the worst of them. */
+  bands: BandReading[];
   /** Whole sentence when the standing needs explaining, otherwise null. */
   explanation: string | null;
 }
@@ -84,6 +113,7 @@ export interface Suspect {
   lineName: string | null;
   basis: Basis;
   traceIndex: number;
+  partIndex: number;
 }
 
 /** What has to be measured again with the line's own detector before it can be decided. */
@@ -94,6 +124,9 @@ export interface RemeasurePoint {
   lineName: string;
   boundDb: number;
   limitDb: number;
+  /** The trace and the sweep whose bound lies over the line: measure in its position. */
+  traceIndex: number;
+  partIndex: number;
 }
 
 /** A sweep held against one mask revision. */

@@ -115,6 +115,7 @@ export function findSuspects(
           lineName: line.name,
           basis,
           traceIndex,
+          partIndex: 0,
         };
       }
       if (found && found.marginDb <= marginDb) candidates.push(found);

@@ -76,6 +76,7 @@ export async function listReadings(
         .map(({ teamId: _team, readingId: _reading, tracePosition, ...suspect }) => ({
           ...suspect,
           traceIndex: tracePosition,
+          partIndex: 0,
         })),
     },
   }));

@@ -52,6 +52,7 @@ export function suspect(number: number, sampleHz: number, more: Partial<Suspect>
     lineName: "Quasi-peak",
     basis: "like-for-like",
     traceIndex: 0,
+    partIndex: 0,
     ...more,
   };
 }

@@ -39,7 +39,11 @@ class FieldReader {
 
   choice<T extends string>(from: Fields, key: string, at: string, choices: readonly T[]): T {
     const found = choices.find((choice) => choice === from[key]);
-    if (found === undefined) this.note(at + key, `"${key}" must be one of ${choices.join(", ")}.`);
+    if (found === undefined) {
+      const isMissing = from[key] === undefined || from[key] === "";
+      const what = isMissing ? "is missing: it must be" : "must be";
+      this.note(at + key, `"${key}" ${what} one of ${choices.join(", ")}.`);
+    }
     return found ?? (choices[0] as T);
   }
 

@@ -1,5 +1,7 @@
+import type { LevelUnit } from "../units/level-units";
+import { formatFrequency, formatLevel } from "../units/format";
 import type { Mask, MaskLine } from "./mask";
-import { segmentLimitAt } from "./limit-at";
+import { segmentCrossings, type Crossing } from "./segment-crossings";
 
 /** `path` names the field ("lines.0.segments.2.stopHz"), `text` is a sentence for a person. */
 export interface MaskProblem {
@@ -18,31 +20,33 @@ function segmentProblems(line: MaskLine, at: string): MaskProblem[] {
     else if (s.stopHz === s.startHz)
       problems.push({
         path: `${path}.stopHz`,
-        text: "The segment has no width: start and stop are the same frequency.",
+        text: `The segment has no width: it starts and ends at ${formatFrequency(s.startHz)}.`,
       });
     else if (s.stopHz < s.startHz)
       problems.push({
         path: `${path}.stopHz`,
-        text: "The segment is reversed: its stop lies below its start.",
+        text: `The segment is reversed: it ends at ${formatFrequency(s.stopHz, s.startHz - s.stopHz)}, below its start at ${formatFrequency(s.startHz, s.startHz - s.stopHz)}. Swap the two.`,
       });
   });
   return problems;
 }
 
-function crossingProblems(line: MaskLine, at: string): MaskProblem[] {
+/** "at 173.2 MHz, where both stand at 45.0 dBµV/m" */
+function placeOf({ hz, db }: Crossing, unit: LevelUnit): string {
+  return `at ${formatFrequency(hz)}, where both stand at ${formatLevel(db, unit)}`;
+}
+
+function crossingProblems(line: MaskLine, at: string, unit: LevelUnit): MaskProblem[] {
   const problems: MaskProblem[] = [];
   line.segments.forEach((a, i) => {
     line.segments.slice(i + 1).forEach((b, k) => {
-      const from = Math.max(a.startHz, b.startHz);
-      const to = Math.min(a.stopHz, b.stopHz);
-      if (!(to > from)) return;
-      const first = segmentLimitAt(a, from) - segmentLimitAt(b, from);
-      const last = segmentLimitAt(a, to) - segmentLimitAt(b, to);
-      if (first * last < 0)
-        problems.push({
-          path: `${at}.segments.${i + 1 + k}`,
-          text: `This segment crosses segment ${i + 1} between ${from} Hz and ${to} Hz. Split both where they cross, so that it is plain which limit applies.`,
-        });
+      const crossings = segmentCrossings(a, b);
+      if (crossings.length === 0) return;
+      const places = crossings.map((crossing) => placeOf(crossing, unit)).join(", and again ");
+      problems.push({
+        path: `${at}.segments.${i + 1 + k}`,
+        text: `This segment crosses segment ${i + 1} ${places}. Split both there, so that it is plain which limit applies.`,
+      });
     });
   });
   return problems;
@@ -78,7 +82,7 @@ export function validateMask(mask: Mask): MaskProblem[] {
         text: "This line has no segments: add at least one.",
       });
     const broken = segmentProblems(line, at);
-    problems.push(...broken, ...(broken.length === 0 ? crossingProblems(line, at) : []));
+    problems.push(...broken, ...(broken.length === 0 ? crossingProblems(line, at, mask.unit) : []));
   });
   return problems;
 }

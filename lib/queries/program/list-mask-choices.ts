@@ -17,7 +17,7 @@ export interface MaskChoice {
   isArchived: boolean;
 }
 
-/** Masks that a program can be held against, as their newest revision names them, by title. */
+/** Masks that a program can be held against, as their newest revision in force names them, by title. */
 export async function listMaskChoices(ctx: Context, programId: string): Promise<MaskChoice[]> {
   requirePermission(ctx, "mask.read");
   return inTeam(ctx.db, ctx.teamId, async (tx) => {
@@ -32,7 +32,7 @@ export async function listMaskChoices(ctx: Context, programId: string): Promise<
         provenance: sql<Provenance>`${content}->>'provenance'`.as("provenance"),
       })
       .from(maskRevisions)
-      .where(eq(maskRevisions.teamId, ctx.teamId))
+      .where(and(eq(maskRevisions.teamId, ctx.teamId), isNotNull(maskRevisions.inForceAt)))
       .orderBy(maskRevisions.maskId, desc(maskRevisions.revision))
       .as("newest");
     return tx

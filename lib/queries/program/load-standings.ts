@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, inArray, isNull } from "drizzle-orm";
+import { and, asc, desc, eq, inArray, isNotNull, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { builds, maskRevisions, masks, programMasks, sweeps } from "@/db/schema";
 import type { MaskStanding } from "../sweep/load-readings";
@@ -53,7 +53,11 @@ export async function loadProgramTrends(
     .innerJoin(masks, and(eq(masks.teamId, programMasks.teamId), eq(masks.id, programMasks.maskId)))
     .innerJoin(
       maskRevisions,
-      and(eq(maskRevisions.teamId, masks.teamId), eq(maskRevisions.maskId, masks.id)),
+      and(
+        eq(maskRevisions.teamId, masks.teamId),
+        eq(maskRevisions.maskId, masks.id),
+        isNotNull(maskRevisions.inForceAt),
+      ),
     )
     .where(and(eq(programMasks.teamId, teamId), inArray(programMasks.programId, programIds)))
     .orderBy(asc(masks.key), asc(programMasks.programId), desc(maskRevisions.revision));

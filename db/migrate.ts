@@ -2,11 +2,12 @@ import { fileURLToPath } from "node:url";
 import { drizzle } from "drizzle-orm/node-postgres";
 import { migrate } from "drizzle-orm/node-postgres/migrator";
 import { Client } from "pg";
+import { prepareQueues } from "@/lib/adapters/jobs/prepare-queues";
 import { openDatabase } from "./client";
 import { refreshReadings } from "./refresh-readings";
 import { updateShippedMasks } from "./update-shipped-masks";
 
-/** Creates the app's role when missing, sets its password, and applies what is new in `drizzle/`. */
+/** Creates the app's role when missing, sets its password, applies what is new in `drizzle/` and makes the job queues. */
 async function migrateDatabase(ownerUrl: string, appPassword: string): Promise<void> {
   const client = new Client({ connectionString: ownerUrl });
   await client.connect();
@@ -19,6 +20,7 @@ async function migrateDatabase(ownerUrl: string, appPassword: string): Promise<v
     await migrate(drizzle(client), {
       migrationsFolder: fileURLToPath(new URL("../drizzle", import.meta.url)),
     });
+    await prepareQueues(ownerUrl);
   } finally {
     await client.end();
   }

@@ -4,6 +4,7 @@ import type { Transaction } from "@/db/client";
 import { openDatabase } from "@/db/client";
 import { members, teams, users } from "@/db/schema";
 import { folderStore } from "@/lib/adapters/folder-store";
+import { bossQueue } from "@/lib/adapters/jobs/boss-queue";
 import type { Context } from "@/lib/auth/context";
 import { hashPassword } from "@/lib/auth/password";
 import type { Role } from "@/lib/auth/permissions";
@@ -34,7 +35,8 @@ async function seedTeam(
     const [user] = await tx.insert(users).values({ name, email, passwordHash }).returning();
     if (!user) throw new Error("A demo account was not stored.");
     await tx.insert(members).values({ teamId: team.id, userId: user.id, role });
-    contexts.set(role, { db: tx, files, teamId: team.id, userId: user.id, role });
+    const place = { db: tx, files, jobs: bossQueue };
+    contexts.set(role, { ...place, teamId: team.id, userId: user.id, role });
   }
   await addShippedMasks(tx, team.id, await readShippedMasks());
   return contexts;

@@ -1,4 +1,4 @@
-import type { Database } from "@/db/client";
+import type { Database, Transaction } from "@/db/client";
 import type { Permission, Role } from "./permissions";
 import { can } from "./permissions";
 
@@ -9,10 +9,17 @@ export interface FileStore {
   get: (key: string) => Promise<Uint8Array | null>;
 }
 
+/** Work that is done after the request, by a worker. */
+export interface JobQueue {
+  /** Keeps a job as part of the transaction: one that is rolled back leaves none. */
+  send: (tx: Transaction, name: string, data: Record<string, string>) => Promise<void>;
+}
+
 /** Who acts, for which team, on which database. Every command and query starts from one. */
 export interface Context {
   db: Database;
   files: FileStore;
+  jobs: JobQueue;
   teamId: string;
   userId: string;
   role: Role;

@@ -4,6 +4,7 @@ import { redirect } from "next/navigation";
 import { appDatabase } from "@/db/client";
 import type { Context } from "./context";
 import { folderStore } from "@/lib/adapters/folder-store";
+import { bossQueue } from "@/lib/adapters/jobs/boss-queue";
 import { authOptions } from "./options";
 import type { Member } from "./read-member";
 import { readMember } from "./read-member";
@@ -25,6 +26,7 @@ export const findCurrentMember = cache(async (): Promise<CurrentMember | null> =
     ctx: {
       db,
       files: folderStore(),
+      jobs: bossQueue,
       teamId: member.teamId,
       userId: member.userId,
       role: member.role,

@@ -4,6 +4,7 @@ import type { Database } from "@/db/client";
 import { openDatabase } from "@/db/client";
 import type { Context } from "@/lib/auth/context";
 import type { Role } from "@/lib/auth/permissions";
+import { bossQueue } from "@/lib/adapters/jobs/boss-queue";
 import { memoryFiles } from "./files";
 
 export interface TestDatabase {
@@ -11,6 +12,8 @@ export interface TestDatabase {
   app: Database;
   /** As the owner: sees every team; for arranging and for looking behind the policies. */
   owner: Client;
+  /** Where a worker connects, as the app. */
+  appUrl: string;
   close: () => Promise<void>;
 }
 
@@ -39,10 +42,12 @@ export async function openTestDatabase(): Promise<TestDatabase> {
     connectionString: at(ownerAddress.username, ownerAddress.password),
   });
   await owner.connect();
-  const { db, pool } = openDatabase(at("neap_app", need("NEAP_TEST_APP_PASSWORD")));
+  const appUrl = at("neap_app", need("NEAP_TEST_APP_PASSWORD"));
+  const { db, pool } = openDatabase(appUrl);
   return {
     app: db,
     owner,
+    appUrl,
     close: async () => {
       await pool.end();
       await owner.end();
@@ -75,5 +80,6 @@ export async function makeMember(
     user.rows[0].id,
     role,
   ]);
-  return { db: database.app, files: memoryFiles(), teamId: team, userId: user.rows[0].id, role };
+  const place = { db: database.app, files: memoryFiles(), jobs: bossQueue };
+  return { ...place, teamId: team, userId: user.rows[0].id, role };
 }

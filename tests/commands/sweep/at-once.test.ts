@@ -12,6 +12,7 @@ import { removeStep } from "@/lib/commands/ladder/remove-step";
 import { readLadder } from "@/lib/queries/ladder/read-ladder";
 import type { TestDatabase } from "../../support/database";
 import { makeMember, openTestDatabase } from "../../support/database";
+import { runJobs } from "../../support/jobs";
 import {
   csvOf,
   flatMask,
@@ -48,6 +49,7 @@ test("a mask revised while a sweep is stored: the sweep is held against both rev
   const importing = (): Promise<unknown> => importSweep(ctx, importInput(place, file()));
   const revising = () => reviseMask(ctx, { maskId, mask: flatMask(40) });
   expect(outcomes(await heldTogether(database, [importing, revising]))).toEqual(["done", "done"]);
+  await runJobs(database);
   const margins = (await readingRows(database, ctx.teamId)).map((row) => row.margin_db ?? 0);
   expect(margins).toHaveLength(2);
   expect((margins[0] ?? 0) - (margins[1] ?? 0)).toBeCloseTo(10, 9);
@@ -60,6 +62,7 @@ test("a sweep stored while its mask is revised is held against the new revision"
   const importing = (): Promise<unknown> => importSweep(ctx, importInput(place, file()));
   const revising = () => reviseMask(ctx, { maskId, mask: flatMask(40) });
   expect(outcomes(await heldTogether(database, [revising, importing]))).toEqual(["done", "done"]);
+  await runJobs(database);
   const revisions = (await readingRows(database, ctx.teamId)).map((row) => row.revision);
   expect(revisions).toEqual([2]);
 });
@@ -85,6 +88,7 @@ test("a mask revised while a sweep is fetched back: the sweep is held against th
   const restoring = (): Promise<unknown> => restoreSweep(ctx, { sweepId });
   const revising = () => reviseMask(ctx, { maskId, mask: flatMask(40) });
   expect(outcomes(await heldTogether(database, [restoring, revising]))).toEqual(["done", "done"]);
+  await runJobs(database);
   const revisions = (await readingRows(database, ctx.teamId)).map((row) => row.revision);
   expect(revisions).toEqual([1, 2]);
 });

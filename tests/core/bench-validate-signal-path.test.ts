@@ -33,7 +33,7 @@ describe("validateSignalPath", () => {
 
   it("wants names that are there and differ", () => {
     expect(paths(path(antenna({ name: "  " })))).toEqual(["transducers.0.name"]);
-    expect(paths(path(antenna(), antenna({ name: "Mast antenna " })))).toEqual([
+    expect(paths(path(antenna(), antenna({ name: "Mast antenna ", kind: "cable" })))).toEqual([
       "transducers.1.name",
     ]);
   });
@@ -92,7 +92,9 @@ describe("validateSignalPath", () => {
     ],
   ])("refuses %s, naming the row", (_, rows, word) => {
     const factors = rows.map(([frequencyHz, factorDb]) => ({ frequencyHz, factorDb }));
-    const problems = validateSignalPath(path(antenna(), antenna({ name: "Cable", factors })));
+    const problems = validateSignalPath(
+      path(antenna(), antenna({ name: "Cable", kind: "cable", factors })),
+    );
     expect(problems.map((p) => p.path)).toEqual(["transducers.1.factors"]);
     expect(problems[0]?.text).toContain(word);
   });
@@ -115,5 +117,27 @@ describe("validateSignalPath", () => {
     ]);
     expect(paths(path(antenna({ calibratedOn: "2026-02-01", dueOn: "2026-02-01" })))).toEqual([]);
     expect(paths(path(antenna({ calibratedOn: null, dueOn: null })))).toEqual([]);
+  });
+
+  it("takes a calibration of today and refuses one of tomorrow, where today is known", () => {
+    const tomorrow = path(antenna({ calibratedOn: "2026-12-02", dueOn: "2027-12-02" }));
+    expect(validateSignalPath(tomorrow, "2026-12-02")).toEqual([]);
+    expect(validateSignalPath(tomorrow)).toEqual([]);
+    const problems = validateSignalPath(tomorrow, "2026-12-01");
+    expect(problems.map((p) => p.path)).toEqual(["transducers.0.calibratedOn"]);
+    expect(problems[0]?.text).toContain("2026-12-01");
+  });
+
+  it("refuses a second pick-up, and takes one with cables and amplifiers around it", () => {
+    const named = (kind: Transducer["kind"]) => antenna({ name: kind, kind });
+    expect(
+      paths(path(named("attenuator"), named("lisn"), named("cable"), named("preamplifier"))),
+    ).toEqual([]);
+    for (const kind of ["antenna", "magnetic-loop", "lisn", "current-probe"] as const) {
+      const twice = path(named(kind), named("cable"), named("near-field-probe"));
+      expect(paths(twice)).toEqual(["transducers.2.kind"]);
+    }
+    const three = path(named("antenna"), named("lisn"), named("current-probe"));
+    expect(paths(three)).toEqual(["transducers.1.kind", "transducers.2.kind"]);
   });
 });

@@ -10,6 +10,15 @@ export const TRANSDUCER_KINDS = [
 ] as const;
 export type TransducerKind = (typeof TRANSDUCER_KINDS)[number];
 
+/** Kinds that turn a field, a current or a line's voltage into a level; a path has one of them. */
+export const PICK_UPS: readonly TransducerKind[] = [
+  "antenna",
+  "magnetic-loop",
+  "lisn",
+  "current-probe",
+  "near-field-probe",
+];
+
 /** Factor of a transducer in dB (dB/m for an antenna) at a frequency in Hz. */
 export interface FactorPoint {
   frequencyHz: number;
@@ -24,6 +33,8 @@ export interface Transducer {
   /** ISO dates or null. */
   calibratedOn: string | null;
   dueOn: string | null;
+  /** The piece of equipment that this is; null or left out: none is named. */
+  equipmentId?: string | null;
 }
 
 /** Ordered from the field to the instrument. A revision of it never changes. */

@@ -1,4 +1,6 @@
+import { isIsoDate } from "./iso-date";
 import type { FactorPoint, SignalPath, Transducer, TransducerKind } from "./signal-path";
+import { PICK_UPS } from "./signal-path";
 
 /** `path` names the field ("transducers.0.factors"), `text` is a sentence for a person. */
 export interface SignalPathProblem {
@@ -8,13 +10,6 @@ export interface SignalPathProblem {
 
 /** No transducer, amplifier or pad on a bench has a factor beyond this; a typing error has. */
 const MAX_FACTOR_DB = 200;
-
-/** True for a date of the form 2026-03-31 that exists in the calendar. */
-function isIsoDate(text: string): boolean {
-  if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return false;
-  const date = new Date(`${text}T00:00:00Z`);
-  return !Number.isNaN(date.getTime()) && date.toISOString().startsWith(text);
-}
 
 /** Kinds whose table is a loss or a gain, which Neap adds or subtracts by itself. */
 const AMOUNTS: Partial<Record<TransducerKind, string>> = {
@@ -55,7 +50,11 @@ function factorProblem(points: readonly FactorPoint[]): string | null {
   return null;
 }
 
-function dateProblems(transducer: Transducer, at: string): SignalPathProblem[] {
+function dateProblems(
+  transducer: Transducer,
+  at: string,
+  today: string | null,
+): SignalPathProblem[] {
   const { calibratedOn, dueOn } = transducer;
   const problems: SignalPathProblem[] = [];
   const text = "Write the date as year-month-day, for example 2026-03-31.";
@@ -63,6 +62,11 @@ function dateProblems(transducer: Transducer, at: string): SignalPathProblem[] {
   if (!fine(calibratedOn)) problems.push({ path: `${at}.calibratedOn`, text });
   if (!fine(dueOn)) problems.push({ path: `${at}.dueOn`, text });
   // Sound ISO dates compare as text.
+  if (today !== null && calibratedOn !== null && fine(calibratedOn) && calibratedOn > today)
+    problems.push({
+      path: `${at}.calibratedOn`,
+      text: `The calibration lies in the future: today is ${today}.`,
+    });
   if (problems.length === 0 && calibratedOn !== null && dueOn !== null && dueOn < calibratedOn)
     problems.push({ path: `${at}.dueOn`, text: "The due date lies before the calibration." });
   return problems;
@@ -72,14 +76,19 @@ function dateProblems(transducer: Transducer, at: string): SignalPathProblem[] {
  * Everything that keeps a signal path from being used; empty when it can be. Checked: an
  * impedance in Ω above 0, names that are there and differ, factor tables of two rows or more
  * with ascending frequencies in Hz and factors in dB, losses and gains that are not negative,
- * and dates (ISO) that exist and are in order.
+ * dates (ISO) that exist and are in order, no calibration after `today` (ISO) when it is given,
+ * and no second pick-up: two antennas in a row would add both factors to one level.
  * A path without transducers is sound: the level at the instrument's input is then the result.
  */
-export function validateSignalPath(path: SignalPath): SignalPathProblem[] {
+export function validateSignalPath(
+  path: SignalPath,
+  today: string | null = null,
+): SignalPathProblem[] {
   const problems: SignalPathProblem[] = [];
   if (!(path.impedanceOhm > 0 && Number.isFinite(path.impedanceOhm)))
     problems.push({ path: "impedanceOhm", text: "The impedance must be above 0 Ω." });
   const names = new Set<string>();
+  const pickUp = path.transducers.findIndex((t) => PICK_UPS.includes(t.kind));
   path.transducers.forEach((transducer, i) => {
     const at = `transducers.${i}`;
     const name = transducer.name.trim();
@@ -90,7 +99,12 @@ export function validateSignalPath(path: SignalPath): SignalPathProblem[] {
         text: `Two transducers are named "${name}": give each its own name.`,
       });
     names.add(name);
-    problems.push(...dateProblems(transducer, at));
+    problems.push(...dateProblems(transducer, at, today));
+    if (i > pickUp && PICK_UPS.includes(transducer.kind))
+      problems.push({
+        path: `${at}.kind`,
+        text: `A signal path has one pick-up, and "${path.transducers[pickUp]?.name.trim()}" is one already: an antenna, a loop, a LISN and a probe exclude each other.`,
+      });
     const text = factorProblem(transducer.factors) ?? signProblem(transducer);
     if (text !== null) problems.push({ path: `${at}.factors`, text });
   });

@@ -7,7 +7,9 @@ import { completeReadings } from "../sweep/complete-readings";
 
 /**
  * Brings a team's shipped masks up to date: adds those it lacks as revision 1, and a revision to
- * those whose content changed. Masks that are no longer shipped stay, since readings name them.
+ * those whose content changed. A mask whose newest revision the team confirmed stays as confirmed:
+ * what somebody compared with the document is not put aside by what Neap ships. Masks that are no
+ * longer shipped stay, since readings name them.
  * Not a command: it runs inside the caller's transaction, for the team of that transaction.
  */
 export async function addShippedMasks(
@@ -34,6 +36,7 @@ export async function addShippedMasks(
       maskId: maskRevisions.maskId,
       revision: maskRevisions.revision,
       content: maskRevisions.content,
+      source: maskRevisions.source,
     })
     .from(maskRevisions)
     .where(and(eq(maskRevisions.teamId, teamId), inArray(maskRevisions.maskId, ids)))
@@ -45,6 +48,7 @@ export async function addShippedMasks(
     if (row.origin !== "shipped")
       throw new Error(`The key ${row.key} of a shipped mask is taken by a mask of the team's own.`);
     const before = current.get(row.id);
+    if (before?.source === "confirmation") return [];
     if (before && isDeepStrictEqual(before.content, content)) return [];
     return [
       {

@@ -4,7 +4,10 @@ import { maskRevisions, masks } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 
-/** The team's mask with its current revision, locked until the transaction ends, or a refusal. */
+/**
+ * The team's mask with its newest revision, in force or not, locked until the transaction ends, or
+ * a refusal. The next revision is numbered and based on it.
+ */
 export async function lockMask(tx: Transaction, ctx: Context, maskId: string) {
   const [mask] = await tx
     .select()
@@ -13,7 +16,11 @@ export async function lockMask(tx: Transaction, ctx: Context, maskId: string) {
     .for("update");
   if (!mask) throw new CommandError("not-found", "This mask does not exist.");
   const [current] = await tx
-    .select({ revision: maskRevisions.revision, content: maskRevisions.content })
+    .select({
+      revision: maskRevisions.revision,
+      content: maskRevisions.content,
+      inForceAt: maskRevisions.inForceAt,
+    })
     .from(maskRevisions)
     .where(and(eq(maskRevisions.teamId, ctx.teamId), eq(maskRevisions.maskId, maskId)))
     .orderBy(desc(maskRevisions.revision))

@@ -84,7 +84,8 @@ function sourceProblems(mask: Mask): MaskProblem[] {
     : [];
 }
 
-function refuse(problems: readonly MaskProblem[]): never {
+/** Refuses a mask with its problems, each at its path. */
+export function refuseMask(problems: readonly MaskProblem[]): never {
   const fieldErrors: FieldErrors = {};
   for (const { path, text } of problems.slice(0, SHOWN_PROBLEMS)) {
     const before = fieldErrors[path];
@@ -97,14 +98,22 @@ function refuse(problems: readonly MaskProblem[]): never {
   throw new CommandError("invalid", message, fieldErrors);
 }
 
-/** A mask that can be stored, or every problem at the path of its field. */
-export function readMaskInput(json: unknown): Mask {
+/** A mask that can be stored, or all that keeps it from it, each with the path of its field. */
+export function checkMaskInput(
+  json: unknown,
+): { ok: true; mask: Mask } | { ok: false; problems: MaskProblem[] } {
   const size = sizeProblems(json);
-  if (size.length > 0) refuse(size);
+  if (size.length > 0) return { ok: false, problems: size };
   const read = maskFromJson(json);
-  if (!read.ok) refuse(read.problems);
+  if (!read.ok) return read;
   const { mask } = read;
   const problems = [...textProblems(mask), ...rangeProblems(mask), ...sourceProblems(mask)];
-  if (problems.length > 0) refuse(problems);
-  return mask;
+  return problems.length > 0 ? { ok: false, problems } : { ok: true, mask };
+}
+
+/** A mask that can be stored, or every problem at the path of its field. */
+export function readMaskInput(json: unknown): Mask {
+  const checked = checkMaskInput(json);
+  if (!checked.ok) refuseMask(checked.problems);
+  return checked.mask;
 }

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { importMask } from "@/lib/commands/mask/import-mask";
 import { maskToJson } from "@/lib/core/mask/mask-json";
+import { maskToCsv } from "@/lib/formats/mask-csv";
 import { listMasks } from "@/lib/queries/mask/list-masks";
 import { readMask } from "@/lib/queries/mask/read-mask";
 import { auditRows, withoutAudit } from "../../support/audit";
@@ -53,6 +54,8 @@ describe("importMask", () => {
 
   test.each([
     ["no text", undefined, "text"],
+    ["blank text", " \n", "text"],
+    ["a text that is neither JSON nor a table", "a mask, please", "text"],
     ["no JSON", "{ not json", "text"],
     ["a cut file", text.slice(0, -20), "text"],
     ["more than 1 MB", `"${"x".repeat(1_000_000)}"`, "text"],
@@ -68,6 +71,68 @@ describe("importMask", () => {
     await expect(importMask(ctx, { text: given })).rejects.toMatchObject({
       code: "invalid",
       fieldErrors: { [field]: expect.any(String) },
+    });
+    expect(await listMasks(ctx)).toEqual([]);
+  });
+
+  test("takes a CSV by its content, as it was exported and as a table with answers", async () => {
+    const ctx = await makeMember(database, "engineer");
+    const exported = await importMask(ctx, { text: `\uFEFF${maskToCsv(MASK)}`, answers: {} });
+    expect((await readMask(ctx, exported.maskId))?.current.content).toEqual({
+      ...MASK,
+      key: "team-wheelhouse-limit",
+    });
+    const typed = await importMask(ctx, {
+      text: "detector;start;stop;level\nQP;30;230;40,5\n",
+      answers: {
+        title: "Hull limit",
+        port: "radiated",
+        unit: "dBuV/m",
+        provenance: "from memory",
+        frequencyUnit: "MHz",
+      },
+    });
+    expect((await readMask(ctx, typed.maskId))?.current.content).toMatchObject({
+      title: "Hull limit",
+      provenance: "from memory",
+      lines: [{ detector: "quasi-peak", segments: [{ startHz: 30e6, startDb: 40.5 }] }],
+    });
+  });
+
+  test("names each problem of a CSV with its line, and each open question at its answer", async () => {
+    const ctx = await makeMember(database, "engineer");
+    const csv = [
+      "detector,start (MHz),stop (MHz),level start (dBuV/m),level stop (dBuV/m)",
+      "peak,30,1000,40,50",
+      "peak,30,1000,50,40",
+      "average,230,30,40,",
+      "average,1000,2000000,900,",
+    ].join("\n");
+    const answers = { title: "T", port: "radiated", provenance: "team" };
+    await expect(importMask(ctx, { text: csv, answers })).rejects.toMatchObject({
+      code: "invalid",
+      fieldErrors: {
+        "line.3": expect.stringMatching(/^Line 3: This segment crosses segment 1 at 173\.2 MHz/),
+        "line.4": expect.stringMatching(/^Line 4: The segment is reversed/),
+      },
+    });
+    const high = csv.split("\n").filter((_, i) => i !== 2 && i !== 3);
+    await expect(importMask(ctx, { text: high.join("\n"), answers })).rejects.toMatchObject({
+      fieldErrors: { "line.3": expect.stringMatching(/^Line 3: A limit beyond 400 dB.*1 THz/) },
+    });
+    const unanswered = { title: "", port: "", unit: "", provenance: "", frequencyUnit: "" };
+    await expect(importMask(ctx, { text: csv, answers: unanswered })).rejects.toMatchObject({
+      fieldErrors: {
+        title: expect.any(String),
+        port: expect.any(String),
+        provenance: expect.any(String),
+      },
+    });
+    const long = Array.from({ length: 1200 }, (_, i) => `peak,${i + 1},${i + 2},40,40`);
+    const text = [csv.split("\n")[0], ...long].join("\n");
+    await expect(importMask(ctx, { text, answers })).rejects.toMatchObject({
+      code: "invalid",
+      fieldErrors: { "line.2": expect.stringContaining("at most 300 segments") },
     });
     expect(await listMasks(ctx)).toEqual([]);
   });

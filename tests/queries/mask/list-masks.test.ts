@@ -44,6 +44,26 @@ describe("listMasks", () => {
   });
 });
 
+describe("a revision that is not in force yet", () => {
+  test("is told as pending, while the one before it stays the current one", async () => {
+    const ctx = await makeMember(database, "engineer");
+    const maskId = await maskOf(ctx);
+    await reviseMask(ctx, { maskId, mask: { ...MASK, title: "Newer limit" } });
+    await database.owner.query(
+      "update mask_revisions set in_force_at = null where mask_id = $1 and revision = 2",
+      [maskId],
+    );
+    expect(await listMasks(ctx)).toMatchObject([
+      { title: "Wheelhouse limit", revision: 1, pendingRevision: 2, confirmation: null },
+    ]);
+    const mask = await readMask(ctx, maskId);
+    expect(mask?.current).toMatchObject({ revision: 1, source: "team" });
+    expect(mask?.current.inForceAt).toBeInstanceOf(Date);
+    expect(mask?.pending).toMatchObject({ revision: 2, inForceAt: null });
+    expect(mask?.revisions).toHaveLength(2);
+  });
+});
+
 describe("readMask", () => {
   test("finds nothing under an address that is no id", async () => {
     const ctx = await makeMember(database, "engineer");

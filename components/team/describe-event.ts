@@ -9,6 +9,7 @@ const PAST: Record<string, string> = {
   archive: "archived",
   restore: "restored",
   revise: "revised",
+  confirm: "confirmed",
   issue: "issued",
   approve: "approved",
   withdraw: "withdrew",
@@ -28,6 +29,12 @@ const WHOLE: Record<string, string> = {
   "member.change-password": "changed the password of member",
   "bench.revise-signal-path": "revised the signal path of bench",
   "step.put-on-record": "put on record the step",
+  "bench-check.record": "recorded bench check",
+  "suspect.follow": "started to follow",
+  "suspect.edit": "edited",
+  "suspect.assign": "changed the owner of",
+  "suspect.set-state": "changed the state of",
+  "suspect.add-note": "added a note to",
 };
 
 const words = (text: string) => text.replaceAll("-", " ");

@@ -1,8 +1,9 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { compareSweeps } from "@/lib/core/delta/compare-sweeps";
+import { compareSides } from "@/lib/core/delta/compare-sides";
 import type { ComparedSweep, ComparedTrace } from "@/lib/core/delta/compared-sweep";
 import { pairSweeps } from "@/lib/core/delta/pair-sweeps";
+import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 
 const SETTINGS: MeasurementSettings = {
@@ -20,8 +21,23 @@ const SETTINGS: MeasurementSettings = {
   port: "radiated",
 };
 
+const NO_LINK: LinkSettings = {
+  bitRateHz: null,
+  payload: null,
+  patternBits: null,
+  scrambler: null,
+  scramblerPolynomial: null,
+  scramblerRestartBits: null,
+  coding: null,
+  spread: null,
+  spreadOff: null,
+  edgeTimeS: null,
+  cable: null,
+};
+
 const TRACE: ComparedTrace = {
   name: "Peak",
+  kind: "scan",
   detector: "peak",
   hold: "max-hold",
   unit: "dBuV/m",
@@ -45,6 +61,7 @@ function sweep(
     signalPathRevisionId: "path",
     signalPathRevision: 1,
     corrected: false,
+    link: NO_LINK,
     traces: [TRACE],
     readings: [],
     ...part,
@@ -55,10 +72,14 @@ function sweep(
 const reading = (marginDb: number, decidedBy: "peak" | "quasi-peak" = "peak") => ({
   maskRevisionId: "mask-1",
   maskTitle: "A mask",
-  lines: [{ name: "Quasi-peak", standing: "clear" as const, marginDb, decidedBy }],
+  lines: [{ name: "Quasi-peak", standing: "clear" as const, marginDb, decidedBy, bands: [] }],
+  suspects: [],
 });
 
-describe("compareSweeps", () => {
+const compareSweeps = (before: ComparedSweep, after: ComparedSweep) =>
+  compareSides([before], [after]);
+
+describe("compareSides, one sweep each", () => {
   test("takes after minus before for margin, peak, floor and band power", () => {
     const before = sweep({ readings: [reading(-3)] });
     const after = sweep({
@@ -156,7 +177,7 @@ describe("compareSweeps", () => {
 describe("pairSweeps", () => {
   const high = { ...TRACE, firstHz: 1e9, lastHz: 6e9 };
 
-  test("pairs by span, polarization and purpose, and of equals takes the later one", () => {
+  test("pairs by span, polarization and purpose, and takes repeats together", () => {
     const before = [
       sweep({ id: "low-h" }),
       sweep({ id: "low-v", settings: { polarization: "vertical" } }),
@@ -169,11 +190,12 @@ describe("pairSweeps", () => {
       sweep({ id: "2", traces: [high] }),
       sweep({ id: "3" }),
     ];
-    const pairs = pairSweeps(before, after).map((p) => [p.after.id, p.before.id]);
+    const ids = (side: readonly ComparedSweep[]) => side.map((one) => one.id).join(" ");
+    const pairs = pairSweeps(before, after).map((p) => [ids(p.after), ids(p.before)]);
     expect(pairs).toEqual([
       ["1", "low-v"],
       ["2", "high"],
-      ["3", "low-h-again"],
+      ["3", "low-h low-h-again"],
     ]);
   });
 

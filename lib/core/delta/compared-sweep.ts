@@ -1,10 +1,18 @@
+import type { LinkSettings } from "../link/link-settings";
 import type { Standing } from "../reading/reading";
-import type { Detector, Hold, MeasurementSettings, SweepPurpose } from "../sweep/settings";
+import type {
+  Detector,
+  Hold,
+  MeasurementSettings,
+  SweepPurpose,
+  TraceKind,
+} from "../sweep/settings";
 import type { LevelUnit } from "../units/level-units";
 
 /** A trace as a delta sees it; Hz and dB of `unit`. */
 export interface ComparedTrace {
   name: string;
+  kind: TraceKind;
   detector: Detector | null;
   hold: Hold;
   unit: LevelUnit;
@@ -16,21 +24,38 @@ export interface ComparedTrace {
   powerSumDb: number | null;
 }
 
-export interface ComparedLine {
+/** A margin and the detector of the trace that gave it. */
+export interface ComparedMargin {
+  marginDb: number | null;
+  decidedBy: Detector | null;
+}
+
+export interface ComparedBand extends ComparedMargin {
+  startHz: number;
+  stopHz: number;
+}
+
+export interface ComparedLine extends ComparedMargin {
   name: string;
   standing: Standing;
-  marginDb: number | null;
-  /** Detector of the trace that gave the margin. */
-  decidedBy: Detector | null;
+  bands: ComparedBand[];
+}
+
+export interface ComparedSuspect {
+  frequencyHz: number;
+  levelDb: number;
+  /** Index into the sweep's traces. */
+  traceIndex: number;
 }
 
 export interface ComparedReading {
   maskRevisionId: string;
   maskTitle: string;
   lines: ComparedLine[];
+  suspects: ComparedSuspect[];
 }
 
-/** All of a sweep that a delta depends on. */
+/** All of a sweep that a delta depends on, but for its levels. */
 export interface ComparedSweep {
   id: string;
   name: string;
@@ -41,6 +66,7 @@ export interface ComparedSweep {
   signalPathRevision: number;
   corrected: boolean;
   settings: MeasurementSettings;
+  link: LinkSettings;
   traces: ComparedTrace[];
   readings: ComparedReading[];
 }

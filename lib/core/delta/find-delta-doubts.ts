@@ -1,7 +1,7 @@
-import { HOLD_LABELS } from "../sweep/settings";
+import { DETECTOR_LABELS, HOLD_LABELS } from "../sweep/settings";
 import { formatFrequency } from "../units/format";
 import type { ComparedSweep } from "./compared-sweep";
-import { sharedTraces } from "./find-mismatches";
+import type { TracePair } from "./trace-pairs";
 
 function differs<T>(
   label: string,
@@ -14,10 +14,26 @@ function differs<T>(
   return [`${label} differs: ${said(before)} before, ${said(after)} after.`];
 }
 
+function traceDoubts(pairs: readonly TracePair[]): string[] {
+  return pairs.flatMap(({ detector, before, after }) => {
+    const about = pairs.length > 1 ? ` of the ${DETECTOR_LABELS[detector]} trace` : "";
+    const doubts = differs(`The hold${about}`, before.hold, after.hold, (v) => HOLD_LABELS[v]);
+    const [s, t] = [before.stepHz ?? 0, after.stepHz ?? 0];
+    if (before.kind === "scan" && Math.abs(s - t) > 0.01 * Math.max(s, t))
+      doubts.push(
+        `The frequency step${about} differs: ${formatFrequency(s)} before, ${formatFrequency(t)} after.`,
+      );
+    return doubts;
+  });
+}
+
 /** Differences that weaken a delta without forbidding it; whole sentences. */
-export function findDeltaDoubts(before: ComparedSweep, after: ComparedSweep): string[] {
+export function findDeltaDoubts(
+  before: ComparedSweep,
+  after: ComparedSweep,
+  pairs: readonly TracePair[],
+): string[] {
   const [a, b] = [before.settings, after.settings];
-  const shared = sharedTraces(before, after);
   const doubts = [
     ...differs("Attenuation", a.attenuationDb, b.attenuationDb, (v) => `${v} dB`),
     ...differs("The video bandwidth", a.vbwHz, b.vbwHz, (v) => formatFrequency(v)),
@@ -26,14 +42,5 @@ export function findDeltaDoubts(before: ComparedSweep, after: ComparedSweep): st
   ];
   if (a.rbwHz !== null && a.rbwKind !== b.rbwKind && (a.rbwKind === null || b.rbwKind === null))
     doubts.push("Only one side states whether its bandwidth is counted at 3 dB or 6 dB.");
-  if (shared) {
-    const { before: earlier, after: later } = shared;
-    doubts.push(...differs("The hold", earlier.hold, later.hold, (v) => HOLD_LABELS[v]));
-    const [s, t] = [earlier.stepHz ?? 0, later.stepHz ?? 0];
-    if (Math.abs(s - t) > 0.01 * Math.max(s, t))
-      doubts.push(
-        `The frequency step differs: ${formatFrequency(s)} before, ${formatFrequency(t)} after.`,
-      );
-  }
-  return doubts;
+  return [...doubts, ...traceDoubts(pairs)];
 }

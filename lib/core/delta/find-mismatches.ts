@@ -1,23 +1,8 @@
 import { DETECTOR_LABELS } from "../sweep/settings";
-import type { Detector } from "../sweep/settings";
 import { formatFrequency } from "../units/format";
-import { LEVEL_UNIT_LABELS } from "../units/level-units";
-import type { ComparedSweep, ComparedTrace } from "./compared-sweep";
-import type { Mismatch } from "./delta";
-
-/** The first two traces of one detector; null when the sweeps share none. */
-export function sharedTraces(
-  before: ComparedSweep,
-  after: ComparedSweep,
-): { detector: Detector; before: ComparedTrace; after: ComparedTrace } | null {
-  for (const earlier of before.traces) {
-    const { detector } = earlier;
-    if (detector === null) continue;
-    const later = after.traces.find((t) => t.detector === detector);
-    if (later) return { detector, before: earlier, after: later };
-  }
-  return null;
-}
+import type { ComparedSweep } from "./compared-sweep";
+import type { Mismatch, MismatchField } from "./delta";
+import { pairTraces, soundPairs } from "./trace-pairs";
 
 const detectorsOf = (sweep: ComparedSweep) =>
   sweep.traces.map((t) => (t.detector ? DETECTOR_LABELS[t.detector] : "not stated")).join(", ");
@@ -95,29 +80,26 @@ function bandwidthMismatches(before: ComparedSweep, after: ComparedSweep): Misma
   return [];
 }
 
-/** Every reason why two sweeps may not be compared; empty when they may. */
+/**
+ * Every reason why two sweeps may not be compared; empty when they may. Traces of a detector that
+ * only one side has, or whose unit or span differs, forbid nothing while another pair is sound.
+ */
 export function findMismatches(before: ComparedSweep, after: ComparedSweep): Mismatch[] {
   const found = [...arrangementMismatches(before, after), ...bandwidthMismatches(before, after)];
-  const shared = sharedTraces(before, after);
-  if (!shared) {
-    found.push({
-      field: "detector",
-      text: `No detector is in both: ${detectorsOf(before)} before, ${detectorsOf(after)} after.`,
-    });
-    return found;
-  }
-  const [a, b] = [shared.before, shared.after];
-  if (a.unit !== b.unit)
-    found.push({
-      field: "unit",
-      text: `The unit differs: ${LEVEL_UNIT_LABELS[a.unit]} before, ${LEVEL_UNIT_LABELS[b.unit]} after.`,
-    });
-  const tolerance = Math.max(a.stepHz ?? 0, b.stepHz ?? 0) / 2;
-  const off = (x: number, y: number) => Math.abs(x - y) > Math.max(tolerance, 1e-9 * x);
-  if (off(a.firstHz, b.firstHz) || off(a.lastHz, b.lastHz))
-    found.push({
-      field: "span",
-      text: `The span differs: ${formatFrequency(a.firstHz)} to ${formatFrequency(a.lastHz)} before, ${formatFrequency(b.firstHz)} to ${formatFrequency(b.lastHz)} after.`,
-    });
-  return found;
+  const pairs = pairTraces(before, after);
+  if (pairs.length === 0)
+    return [
+      ...found,
+      {
+        field: "detector",
+        text: `No detector is in both: ${detectorsOf(before)} before, ${detectorsOf(after)} after.`,
+      },
+    ];
+  if (soundPairs(pairs).length > 0) return found;
+  // Of several flawed pairs the one that could be accepted tells why.
+  const told = pairs.find((pair) => pair.flaws.every(({ field }) => field !== "unit")) ?? pairs[0];
+  return [...found, ...(told?.flaws ?? [])];
 }
+
+/** Mismatches that no reason makes comparable: the difference would not be a number of anything. */
+export const NEVER_ACCEPTED: ReadonlySet<MismatchField> = new Set(["unit", "purpose", "detector"]);

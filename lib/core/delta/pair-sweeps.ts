@@ -1,10 +1,14 @@
 import type { ComparedSweep } from "./compared-sweep";
 import { spanOf } from "./compared-sweep";
-import { sharedTraces } from "./find-mismatches";
+import { groupRepeats } from "./repeats";
+import { pairTraces } from "./trace-pairs";
+
+/** One sweep, or several that repeat each other, by the time of their import. */
+export type Repeats = readonly [ComparedSweep, ...ComparedSweep[]];
 
 export interface SweepPair {
-  before: ComparedSweep;
-  after: ComparedSweep;
+  before: Repeats;
+  after: Repeats;
 }
 
 /** Overlap of the spans on a log axis as a share of the wider one, 0…1. */
@@ -24,28 +28,31 @@ function fit(a: ComparedSweep, b: ComparedSweep): number {
     s.polarization === t.polarization,
     s.heightM === t.heightM,
     s.azimuthDeg === t.azimuthDeg,
-    sharedTraces(a, b) !== null,
+    pairTraces(a, b).length > 0,
     a.benchId === b.benchId,
   ];
   return same.filter(Boolean).length + overlap(a, b);
 }
 
 /**
- * Finds for each sweep of a step its counterpart in an earlier step: same purpose, overlapping
- * span, then the same port, polarization, position, detector and bench. Of equals the later one
- * in the list counts. What still differs is for `compareSweeps` to say.
+ * Finds for the sweeps of a step their counterparts in an earlier step, repeats taken together:
+ * same purpose, overlapping span, then the same port, polarization, position, detector and bench.
+ * Of equals the later one in the list counts. What still differs is for `compareSides` to say.
  */
 export function pairSweeps(
   before: readonly ComparedSweep[],
   after: readonly ComparedSweep[],
 ): SweepPair[] {
-  return after.flatMap((sweep) => {
-    let best: { fit: number; sweep: ComparedSweep } | null = null;
-    for (const candidate of before) {
-      if (candidate.purpose !== sweep.purpose || overlap(candidate, sweep) === 0) continue;
-      const value = fit(candidate, sweep);
-      if (!best || value >= best.fit) best = { fit: value, sweep: candidate };
+  const candidates = groupRepeats(before);
+  return groupRepeats(after).flatMap((group) => {
+    const [sweep] = group;
+    let best: { fit: number; group: Repeats } | null = null;
+    for (const candidate of candidates) {
+      const [first] = candidate;
+      if (first.purpose !== sweep.purpose || overlap(first, sweep) === 0) continue;
+      const value = fit(first, sweep);
+      if (!best || value >= best.fit) best = { fit: value, group: candidate };
     }
-    return best ? [{ before: best.sweep, after: sweep }] : [];
+    return best ? [{ before: best.group, after: group }] : [];
   });
 }

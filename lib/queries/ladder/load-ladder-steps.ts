@@ -1,12 +1,15 @@
-import { and, asc, eq, inArray, isNull } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull, max } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { builds, ladders, ladderSteps, programs, sweeps } from "@/db/schema";
+import { builds, clocks, ladders, ladderSteps, programs, sweeps } from "@/db/schema";
 import type { ComparedSweep } from "@/lib/core/delta/compared-sweep";
+import type { StepState } from "@/lib/core/delta/ladder-order";
+import { baseOfStep, lineOfSteps } from "@/lib/core/delta/ladder-order";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { HeldReading, MaskStanding } from "../sweep/load-readings";
 import { loadReadings, worstStanding } from "../sweep/load-readings";
-import { loadComparedSweeps } from "../sweep/load-compared";
+import { loadComparedSweeps, loadLevels } from "../sweep/load-compared";
+import { loadAcceptances } from "./load-acceptances";
 import type { StepDeltas } from "./step-deltas";
 import { stepDeltas } from "./step-deltas";
 
@@ -15,6 +18,13 @@ export interface LadderStep extends StepDeltas {
   position: number;
   name: string;
   description: string;
+  /** The step that this one starts from, where somebody said so. */
+  branchOfId: string | null;
+  state: StepState;
+  /** The step that it is held against; null for step 0. */
+  base: { id: string; position: number; name: string } | null;
+  /** Whether it led to the product as it stands: neither dropped nor left out by a branch. */
+  isOnLine: boolean;
   /** The mask under which the step's product sweeps together stand worst. */
   worst: MaskStanding | null;
   /** Of the step's newest product sweep; null without one. */
@@ -81,24 +91,47 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
     const own = new Set(placed.filter((s) => s.stepId === stepId).map((s) => s.id));
     return compared.filter((sweep) => own.has(sweep.id));
   };
-  const bySteps = rows.map((row) => sweepsOf(row.id));
-  const deltas = stepDeltas(bySteps);
-  const steps = rows.map(({ id, position, name, description }, i): LadderStep => {
+  const ordered = rows.map((row) => ({ ...row, sweeps: sweepsOf(row.id) }));
+  const products = compared.filter((sweep) => sweep.purpose === "product").map(({ id }) => id);
+  const deltas = stepDeltas(ordered, {
+    // Nothing is followed while there is only one step.
+    levels: await loadLevels(tx, teamId, rows.length > 1 ? products : []),
+    acceptances: await loadAcceptances(tx, teamId, products),
+    tolerancePpm: await largestTolerance(tx, teamId, ladder.buildId),
+  });
+  const line = new Set(lineOfSteps(rows).map((row) => row.id));
+  const steps = ordered.map((row, i): LadderStep => {
+    const { id, position, name, description, branchOfId, state } = row;
     const own = placed.filter((s) => s.stepId === id && s.purpose === "product");
+    const base = baseOfStep(rows, i);
     return {
       id,
       position,
       name,
       description,
+      branchOfId,
+      state,
+      base: base && { id: base.id, position: base.position, name: base.name },
+      isOnLine: line.has(id),
       link: own.at(-1)?.link ?? null,
       onRecord: own.some((sweep) => sweep.onRecord),
       worst: worstStanding(held.filter((row) => own.some((s) => s.id === row.sweepId))),
-      sweeps: bySteps[i] ?? [],
+      sweeps: row.sweeps,
       againstPrevious: deltas[i]?.againstPrevious ?? [],
       againstStart: deltas[i]?.againstStart ?? [],
+      unpaired: deltas[i]?.unpaired ?? [],
     };
   });
   return { ...ladder, steps, masks: masksOf(held) };
+}
+
+/** Largest stated tolerance of a build's clocks in ppm: which clock a line is of is not known. */
+async function largestTolerance(tx: Transaction, teamId: string, buildId: string): Promise<number> {
+  const [found] = await tx
+    .select({ ppm: max(clocks.tolerancePpm) })
+    .from(clocks)
+    .where(and(eq(clocks.teamId, teamId), eq(clocks.buildId, buildId)));
+  return found?.ppm ?? 0;
 }
 
 /** The masks that some sweep of the ladder reaches, each once. */

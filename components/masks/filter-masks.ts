@@ -1,5 +1,6 @@
 import type { Provenance } from "@/lib/core/mask/mask";
 import { DETECTOR_LABELS, type Detector, type Port, PORTS } from "@/lib/core/sweep/settings";
+import type { Confirmation } from "./mask-words";
 
 export interface LibraryMask {
   id: string;
@@ -15,6 +16,10 @@ export interface LibraryMask {
   revision: number;
   origin: "shipped" | "team";
   archived: boolean;
+  /** Of the revision in force. */
+  confirmation: Confirmation | null;
+  /** A newer revision that is still being put in force. */
+  pendingRevision: number | null;
 }
 
 export interface MaskFilter {

@@ -12,7 +12,11 @@ const PORT_OPTIONS = [
 ];
 const PROVENANCE_OPTIONS = [
   { value: "", label: "Every provenance" },
-  ...PROVENANCES.map((value) => ({ value, label: PROVENANCE_LABELS[value] })),
+  ...PROVENANCES.map((value) => ({
+    value,
+    // A mask that was confirmed is the team's word from then on.
+    label: value === "team" ? "the team's own, or confirmed by it" : PROVENANCE_LABELS[value],
+  })),
 ];
 
 /** A plain form that asks by its address, so that a filtered library can be linked to. */

@@ -9,12 +9,12 @@ import { ProvenanceMark } from "./provenance-mark";
 
 /** On a phone only the mask and its provenance; their widths are shared by the tables of all ports. */
 const HEADS = [
-  { head: "Mask", look: "lg:w-[28%]" },
-  { head: "Document", look: "max-sm:hidden lg:w-[20%]" },
-  { head: "Edition", look: "max-lg:hidden lg:w-[8.5%]" },
+  { head: "Mask", look: "lg:w-[27%]" },
+  { head: "Document", look: "max-sm:hidden lg:w-[18.5%]" },
+  { head: "Edition", look: "max-lg:hidden lg:w-[9%]" },
   { head: "Distance", look: "text-right max-lg:hidden lg:w-[7%]" },
-  { head: "Detectors", look: "max-sm:hidden lg:w-[18.5%]" },
-  { head: "Provenance", look: "lg:w-[11.5%]" },
+  { head: "Detectors", look: "max-sm:hidden lg:w-[16%]" },
+  { head: "Provenance", look: "lg:w-[16%]" },
   { head: "Revision", look: "text-right max-lg:hidden lg:w-[6.5%]" },
 ];
 const CELL = "px-2 py-1.5 first:pl-3 last:pr-3";
@@ -62,6 +62,9 @@ function MaskLine({ mask }: { mask: LibraryMask }) {
   const standing = [
     ...(mask.origin === "team" ? ["made by the team"] : []),
     ...(mask.archived ? ["archived"] : []),
+    ...(mask.pendingRevision === null
+      ? []
+      : [`revision ${mask.pendingRevision} is being put in force`]),
   ].join(", ");
   return (
     <tr className="border-b border-rule align-baseline last:border-0">
@@ -80,7 +83,7 @@ function MaskLine({ mask }: { mask: LibraryMask }) {
         {mask.detectors.map((d) => DETECTOR_LABELS[d]).join(", ")}
       </td>
       <td className={`${CELL} text-sm`}>
-        <ProvenanceMark provenance={mask.provenance} />
+        <ProvenanceMark provenance={mask.provenance} confirmation={mask.confirmation} />
       </td>
       <td className={`${CELL} text-right font-mono text-sm max-lg:hidden`}>{mask.revision}</td>
     </tr>

@@ -8,12 +8,13 @@ import { BANDWIDTH_KIND_LABELS, INTERPOLATION_LABELS } from "./mask-words";
 const MINUS = "\u2212";
 
 /** A limit with every decimal it has up to three, and at least one. */
-function levelText(db: number): string {
+export function levelText(db: number): string {
   const text = String(Number(Math.abs(db).toFixed(3)));
   return `${db < 0 ? MINUS : ""}${text.includes(".") ? text : `${text}.0`}`;
 }
 
-function bandwidthText({ rbwHz, rbwKind }: MaskLine): string {
+/** "resolution bandwidth 120 kHz, between 6 dB points" */
+export function bandwidthText({ rbwHz, rbwKind }: MaskLine): string {
   if (rbwHz === null) return "resolution bandwidth not stated";
   const kind = rbwKind === null ? "kind not stated" : BANDWIDTH_KIND_LABELS[rbwKind];
   return `resolution bandwidth ${writeFrequency(rbwHz)}, ${kind}`;

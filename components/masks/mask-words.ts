@@ -23,6 +23,18 @@ export const PROVENANCE_MARKS: Record<Provenance, string> = {
   team: "the team's own",
 };
 
+/** Who compared a mask with their own copy of the document, when, and with which copy. */
+export interface Confirmation {
+  by: string;
+  at: Date;
+  copy: string;
+}
+
+/** "Confirmed by Ida Rask on 2026-12-01 against: printed copy, licence 4711" */
+export function confirmationWords({ by, at, copy }: Confirmation): string {
+  return `Confirmed by ${by} on ${at.toISOString().slice(0, 10)} against: ${copy}`;
+}
+
 /** Shipped masks say "not stated" where their document does not say it. */
 const isStated = (text: string) => text !== "" && text !== "not stated";
 

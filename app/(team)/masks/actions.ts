@@ -3,6 +3,7 @@
 import { defineAction } from "@/lib/adapters/define-action";
 import { refreshed } from "@/lib/adapters/refreshed";
 import { archiveMask } from "@/lib/commands/mask/archive-mask";
+import { confirmMask } from "@/lib/commands/mask/confirm-mask";
 import { copyMask } from "@/lib/commands/mask/copy-mask";
 import { createMask } from "@/lib/commands/mask/create-mask";
 import { importMask } from "@/lib/commands/mask/import-mask";
@@ -10,6 +11,7 @@ import { restoreMask } from "@/lib/commands/mask/restore-mask";
 import { reviseMask } from "@/lib/commands/mask/revise-mask";
 
 const runCreateMask = defineAction(createMask);
+const runConfirmMask = defineAction(confirmMask);
 const runCopyMask = defineAction(copyMask);
 const runReviseMask = defineAction(reviseMask);
 const runImportMask = defineAction(importMask);
@@ -18,6 +20,10 @@ const runRestoreMask = defineAction(restoreMask);
 
 export async function addMask(input: unknown) {
   return refreshed(runCreateMask(input));
+}
+
+export async function confirmLimits(input: unknown) {
+  return refreshed(runConfirmMask(input));
 }
 
 export async function duplicateMask(input: unknown) {

@@ -38,7 +38,7 @@ export default async function MasksPage(props: { searchParams: Promise<SearchPar
         actions={
           mayWrite ? (
             <>
-              <ButtonLink href="/masks/import">Import JSON</ButtonLink>
+              <ButtonLink href="/masks/import">Import a file</ButtonLink>
               <ButtonLink look="primary" href="/masks/new">
                 New mask
               </ButtonLink>

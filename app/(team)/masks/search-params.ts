@@ -34,3 +34,14 @@ export function masksHref(filter: MaskFilter): string {
 export function readRevisionParam(text: string | string[] | null | undefined): number | null {
   return typeof text === "string" && /^[1-9]\d{0,8}$/.test(text) ? Number(text) : null;
 }
+
+/** The revision of a mask that a request's `?revision=` names, or the one in force. */
+export function revisionAsked<R extends { revision: number }>(
+  request: Request,
+  mask: { current: R; revisions: R[] },
+): R | undefined {
+  const asked = new URL(request.url).searchParams.get("revision");
+  if (asked === null) return mask.current;
+  const wanted = readRevisionParam(asked);
+  return mask.revisions.find(({ revision }) => revision === wanted);
+}

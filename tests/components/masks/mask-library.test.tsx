@@ -24,6 +24,8 @@ const mask = (change: Partial<LibraryMask>): LibraryMask => ({
   revision: 1,
   origin: "team",
   archived: false,
+  confirmation: null,
+  pendingRevision: null,
   ...change,
 });
 const NONE = { port: null, text: "", provenance: null, archived: false };
@@ -62,10 +64,27 @@ describe("the library", () => {
 
   test("says from memory in words and in the shoal tint, and only where it is so", () => {
     const html = renderToStaticMarkup(<MaskLibrary masks={masks.slice(1, 2)} />);
-    expect(html).toMatch(/text-shoal[^>]*>from memory</);
+    expect(html).toMatch(/text-shoal[^>]*>from memory, not confirmed</);
     expect(html).toMatch(/<td[^>]*>not stated</);
     expect(renderToStaticMarkup(<MaskLibrary masks={masks.slice(0, 1)} />)).not.toContain("shoal");
   });
+});
+
+test("the library says who confirmed a mask, against what, and what is being put in force", () => {
+  const html = renderToStaticMarkup(
+    <MaskLibrary
+      masks={[
+        mask({
+          confirmation: { by: "Ida Rask", at: new Date("2026-11-30T22:00:00Z"), copy: "Copy 4711" },
+          pendingRevision: 3,
+        }),
+      ]}
+    />,
+  );
+  expect(html).toContain("Confirmed by Ida Rask on 2026-11-30 against: Copy 4711");
+  expect(html).toContain("confirmed by Ida Rask, 2026-11-30");
+  expect(html).toContain("revision 3 is being put in force");
+  expect(html).not.toContain("shoal");
 });
 
 test("a mask's lines show every digit of a band's edge", () => {

@@ -1,9 +1,9 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
-import { RevisionList } from "@/components/benches/revision-list";
 import { MaskChart } from "@/components/charts/mask-chart";
 import { CopyMaskButton, MaskArchiveButton } from "@/components/masks/mask-actions";
 import { MaskLines } from "@/components/masks/mask-lines";
+import { MaskRevisionList } from "@/components/masks/mask-revision-list";
 import { PORT_LABELS } from "@/components/masks/mask-words";
 import { ProvenanceMark } from "@/components/masks/provenance-mark";
 import { ButtonLink } from "@/components/ui/button";
@@ -30,12 +30,14 @@ export default async function MaskPage(props: MaskPageProps) {
   const asked = readRevisionParam((await props.searchParams)["revision"]);
   const ctx = await currentContext();
   const found = await readMask(ctx, maskId);
-  const current = found?.revisions[0];
-  const shown = asked === null ? current : found?.revisions.find((r) => r.revision === asked);
-  if (!found || !current || !shown) notFound();
+  if (!found) notFound();
+  const { current, pending } = found;
+  const shown = asked === null ? current : found.revisions.find((r) => r.revision === asked);
+  if (!shown) notFound();
   const mask = shown.content;
   const mayWrite = isAllowed(ctx, "mask.write");
   const archived = found.archivedAt !== null;
+  const mayConfirm = mayWrite && !archived && pending === null && shown === current;
   return (
     <>
       <PageHead
@@ -46,7 +48,7 @@ export default async function MaskPage(props: MaskPageProps) {
           ...(shown === current
             ? []
             : [
-                `Revision ${shown.revision}, an earlier one; revision ${current.revision} is the current one.`,
+                `Revision ${shown.revision}, ${shown.inForceAt === null ? "which is still being put in force" : "an earlier one"}; revision ${current.revision} is the one in force.`,
               ]),
           found.origin === "shipped"
             ? "Shipped with Neap and never edited; copy it to change it."
@@ -57,14 +59,25 @@ export default async function MaskPage(props: MaskPageProps) {
             {mayWrite && found.origin === "team" && !archived ? (
               <ButtonLink href={`/masks/${found.id}/edit`}>Edit</ButtonLink>
             ) : null}
+            {mayConfirm ? (
+              <ButtonLink
+                href={`/masks/${found.id}/confirm`}
+                look={mask.provenance === "from memory" ? "primary" : "quiet"}
+              >
+                {current.confirmation ? "Confirm again" : "Confirm"}
+              </ButtonLink>
+            ) : null}
             {mayWrite ? <CopyMaskButton maskId={found.id} copy={duplicateMask} /> : null}
-            <a
-              href={`/masks/${found.id}/json?revision=${shown.revision}`}
-              download
-              className="order-first inline-flex min-h-10 items-center px-2 text-deep underline"
-            >
-              Download JSON
-            </a>
+            {(["json", "csv"] as const).map((format) => (
+              <a
+                key={format}
+                href={`/masks/${found.id}/${format}?revision=${shown.revision}`}
+                download
+                className="order-first inline-flex min-h-10 items-center px-2 text-deep underline"
+              >
+                Download {format.toUpperCase()}
+              </a>
+            ))}
             {mayWrite ? (
               <MaskArchiveButton
                 mask={{ id: found.id, title: mask.title, archived }}
@@ -75,11 +88,17 @@ export default async function MaskPage(props: MaskPageProps) {
           </>
         }
       />
+      {pending ? (
+        <p role="status" className="mb-6 border-l-4 border-l-deep bg-sheet px-3 py-2">
+          Revision {pending.revision} is being put in force: sweeps are being held against it. Until
+          that is done revision {current.revision} counts everywhere.
+        </p>
+      ) : null}
       {mask.provenance === "from memory" ? (
         <p className="mb-6 border-l-4 border-l-shoal bg-shoal-bed px-3 py-2 text-shoal">
-          These limits were written down from memory. Confirm them against your own copy of the
-          document before you lean on them
-          {found.origin === "shipped" ? ": copy the mask, check it, and say so in the copy" : ""}.
+          These limits were written down from memory, and nobody of the team has confirmed them.
+          Every reading under this mask says so until somebody compares it with their own copy of
+          the document.
         </p>
       ) : null}
       <MaskChart mask={mask} />
@@ -96,7 +115,15 @@ export default async function MaskPage(props: MaskPageProps) {
             { label: "Document", value: mask.document || null },
             { label: "Clause", value: mask.clause || null },
             { label: "Edition", value: mask.edition || null },
-            { label: "Provenance", value: <ProvenanceMark provenance={mask.provenance} /> },
+            {
+              label: "Provenance",
+              value: (
+                <ProvenanceMark provenance={mask.provenance} confirmation={shown.confirmation} />
+              ),
+            },
+            ...(shown.confirmation
+              ? [{ label: "Compared with", value: shown.confirmation.copy }]
+              : []),
             { label: "Note", value: mask.note || null },
           ]}
         />
@@ -111,12 +138,12 @@ export default async function MaskPage(props: MaskPageProps) {
         title="Revisions"
         lead="A reading names the revision it was made with; none is ever changed."
       >
-        <RevisionList
-          revisions={found.revisions.map(({ revision, createdAt, content }) => ({
-            revision,
-            createdAt,
-            summary: content.title,
+        <MaskRevisionList
+          revisions={found.revisions.map(({ content, ...revision }) => ({
+            ...revision,
+            title: content.title,
           }))}
+          current={current.revision}
           shown={shown.revision}
           href={(revision) => `/masks/${found.id}?revision=${revision}`}
         />

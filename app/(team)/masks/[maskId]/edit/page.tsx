@@ -14,6 +14,7 @@ export default async function EditMaskPage(props: { params: Promise<{ maskId: st
   const { maskId } = await props.params;
   const ctx = await currentContext();
   const found = await readMask(ctx, maskId);
+  // The newest, in force or not: what is saved next is based on it.
   const current = found?.revisions[0];
   if (!found || !current) notFound();
   return (

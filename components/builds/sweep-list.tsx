@@ -1,6 +1,7 @@
 import Link from "next/link";
+import { DOUBT_LABELS } from "@/components/readings/doubt-labels";
 import { StandingMark } from "@/components/readings/standing-mark";
-import type { Standing } from "@/lib/core/reading/reading";
+import type { DoubtCode, Standing } from "@/lib/core/reading/reading";
 import type { Detector, Polarization, SweepPurpose } from "@/lib/core/sweep/settings";
 import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { formatFrequency, formatMargin } from "@/lib/core/units/format";
@@ -21,6 +22,7 @@ interface SweepLine {
   detectors: (Detector | null)[];
   standing: Standing | null;
   marginDb: number | null;
+  doubts: DoubtCode[];
 }
 
 const detectorsOf = (sweep: SweepLine) =>
@@ -44,6 +46,7 @@ export function SweepList({ sweeps }: { sweeps: SweepLine[] }) {
             <th className="px-3 py-2 font-medium">Span and detectors</th>
             <th className="px-3 py-2 text-right font-medium">Worst margin</th>
             <th className="px-3 py-2 font-medium">Standing</th>
+            <th className="px-3 py-2 font-medium">Doubts</th>
           </tr>
         </thead>
         <tbody>
@@ -84,6 +87,9 @@ export function SweepList({ sweeps }: { sweeps: SweepLine[] }) {
                 ) : (
                   <span className="text-ink-soft">not held</span>
                 )}
+              </td>
+              <td className="min-w-44 px-3 py-2 text-sm text-ink-soft">
+                {sweep.doubts.map((code) => DOUBT_LABELS[code]).join(", ")}
               </td>
             </tr>
           ))}

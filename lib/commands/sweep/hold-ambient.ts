@@ -12,16 +12,12 @@ import {
 import type { AmbientSweep } from "@/lib/core/reading/comparable-ambient";
 import { holdAmbient } from "@/lib/core/reading/hold-ambient";
 import { restatementDb } from "@/lib/core/reading/restate-distance";
+import type { BenchDay } from "@/lib/queries/sweep/list-ambient";
 import { loadTraces } from "@/lib/queries/sweep/load-trace";
 
 /** An ambient sweep with all its levels. */
 export interface LoadedAmbient extends AmbientSweep {
   sweepId: string;
-}
-
-interface BenchDay {
-  benchId: string;
-  measuredOn: string | null;
 }
 
 /**

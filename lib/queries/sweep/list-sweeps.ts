@@ -3,10 +3,11 @@ import { and, asc, eq, isNull, sql } from "drizzle-orm";
 import { inTeam } from "@/db/client";
 import { benches, ladders, ladderSteps, sweeps, traces } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
-import type { Standing } from "@/lib/core/reading/reading";
+import type { DoubtCode, Standing } from "@/lib/core/reading/reading";
 import type { Detector, Polarization, SweepPurpose } from "@/lib/core/sweep/settings";
 import { requirePermission } from "@/lib/commands/run";
 import { isId } from "../is-id";
+import { listSweepDoubts } from "./list-doubts";
 import { loadReadings, worstStanding } from "./load-readings";
 
 export interface SweepRow {
@@ -29,6 +30,8 @@ export interface SweepRow {
   /** Over the readings against the program's masks; null for sweeps that are not held. */
   standing: Standing | null;
   marginDb: number | null;
+  /** Of its readings in force, each once. */
+  doubts: DoubtCode[];
 }
 
 async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
@@ -70,6 +73,7 @@ async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
       .groupBy(sweeps.teamId, sweeps.id, benches.name, ladders.id, ladderSteps.id)
       .orderBy(asc(ladderSteps.position), asc(sweeps.measuredOn), asc(sweeps.createdAt));
     const held = await loadReadings(tx, ctx.teamId, scope);
+    const doubts = await listSweepDoubts(tx, ctx.teamId, scope);
     return rows.map(({ settings, ...row }) => {
       const worst = worstStanding(held.filter((reading) => reading.sweepId === row.id));
       return {
@@ -77,6 +81,7 @@ async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
         polarization: settings.polarization,
         standing: worst?.standing ?? null,
         marginDb: worst?.marginDb ?? null,
+        doubts: doubts.get(row.id) ?? [],
       };
     });
   });

@@ -1,4 +1,4 @@
-import { and, asc, eq, sql } from "drizzle-orm";
+import { and, asc, eq } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import {
   benches,
@@ -11,8 +11,10 @@ import {
   storedFiles,
   sweeps,
   traces,
+  uncertaintyBudgets,
   users,
 } from "@/db/schema";
+import { listAmbientSweeps, listFloorSweeps } from "./list-ambient";
 import { listReadings } from "./list-readings";
 
 const DETAIL = {
@@ -25,6 +27,10 @@ const DETAIL = {
   settings: sweeps.settings,
   link: sweeps.link,
   guardDb: sweeps.guardDb,
+  /** As it was at the import; null: the bench named none. */
+  instrument: sweeps.instrument,
+  /** Uncertainty budget in force at the import; null: the bench had none. */
+  budget: uncertaintyBudgets.content,
   notes: sweeps.notes,
   onRecord: sweeps.onRecord,
   archivedAt: sweeps.archivedAt,
@@ -34,6 +40,7 @@ const DETAIL = {
   benchName: benches.name,
   benchSite: benches.site,
   benchInstrument: benches.instrument,
+  signalPathRevisionId: sweeps.signalPathRevisionId,
   pathRevision: signalPathRevisions.revision,
   path: signalPathRevisions.content,
   buildId: builds.id,
@@ -70,6 +77,10 @@ export async function loadSweepDetail(tx: Transaction, teamId: string, sweepId: 
     .innerJoin(builds, and(eq(builds.teamId, sweeps.teamId), eq(builds.id, sweeps.buildId)))
     .innerJoin(programs, and(eq(programs.teamId, builds.teamId), eq(programs.id, builds.programId)))
     .leftJoin(
+      uncertaintyBudgets,
+      and(eq(uncertaintyBudgets.teamId, sweeps.teamId), eq(uncertaintyBudgets.id, sweeps.budgetId)),
+    )
+    .leftJoin(
       ladderSteps,
       and(eq(ladderSteps.teamId, sweeps.teamId), eq(ladderSteps.id, sweeps.stepId)),
     )
@@ -84,19 +95,12 @@ export async function loadSweepDetail(tx: Transaction, teamId: string, sweepId: 
     .from(traces)
     .where(and(eq(traces.teamId, teamId), eq(traces.sweepId, sweepId)))
     .orderBy(asc(traces.position));
-  const ambient = await tx
-    .select({ id: sweeps.id, name: sweeps.name })
-    .from(sweeps)
-    .where(
-      and(
-        eq(sweeps.teamId, teamId),
-        eq(sweeps.benchId, sweep.benchId),
-        eq(sweeps.purpose, "ambient"),
-        sql`${sweeps.archivedAt} is null`,
-        sweep.measuredOn === null ? sql`false` : eq(sweeps.measuredOn, sweep.measuredOn),
-      ),
-    )
-    .orderBy(asc(sweeps.name));
+  const ambients = await listAmbientSweeps(tx, teamId, [sweep]);
+  const floor = await listFloorSweeps(tx, teamId, {
+    ...sweep,
+    sweepId,
+    detectors: traceRows.map((trace) => trace.detector),
+  });
   const clockRows = await tx
     .select({ name: clocks.name, frequencyHz: clocks.frequencyHz })
     .from(clocks)
@@ -105,10 +109,14 @@ export async function loadSweepDetail(tx: Transaction, teamId: string, sweepId: 
   const readings = await listReadings(tx, teamId, {
     sweepId,
     programId: sweep.programId,
-    ambientTaken: ambient.length > 0,
+    benchId: sweep.benchId,
+    measuredOn: sweep.measuredOn,
     port: sweep.settings.port,
+    ambients,
   });
-  return { ...sweep, traces: traceRows, ambient, clocks: clockRows, readings };
+  // An ambient sweep's own page names the others of its day.
+  const ambient = ambients.flatMap(({ id, name }) => (id === sweepId ? [] : [{ id, name }]));
+  return { ...sweep, traces: traceRows, ambient, floor, clocks: clockRows, readings };
 }
 
 export type SweepDetail = NonNullable<Awaited<ReturnType<typeof loadSweepDetail>>>;

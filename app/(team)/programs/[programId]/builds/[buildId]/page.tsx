@@ -1,9 +1,12 @@
 import type { Metadata } from "next";
 import Link from "next/link";
 import { notFound } from "next/navigation";
+import { countDoubts, filterByDoubt } from "@/components/builds/doubt-counts";
+import { DoubtFilter } from "@/components/builds/doubt-filter";
 import { SweepList } from "@/components/builds/sweep-list";
 import { LadderForm } from "@/components/ladders/ladder-form";
 import { BigMargin } from "@/components/readings/big-margin";
+import { DOUBT_LABELS } from "@/components/readings/doubt-labels";
 import { ButtonLink } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
 import { PageHead } from "@/components/ui/page-head";
@@ -16,19 +19,25 @@ import { readBuild } from "@/lib/queries/program/read-build";
 import type { SweepRow } from "@/lib/queries/sweep/list-sweeps";
 import { listBuildSweeps } from "@/lib/queries/sweep/list-sweeps";
 import { startLadder } from "../../../../ladders/actions";
+import type { SearchParams } from "./search-params";
+import { readDoubtParam } from "./search-params";
 
 export const metadata: Metadata = { title: "Build" };
 
 interface BuildPageProps {
   params: Promise<{ programId: string; buildId: string }>;
+  searchParams: Promise<SearchParams>;
 }
 
 export default async function BuildPage(props: BuildPageProps) {
   const { programId, buildId } = await props.params;
+  const doubt = readDoubtParam(await props.searchParams);
   const ctx = await currentContext();
   const build = await readBuild(ctx, buildId);
   if (!build || build.programId !== programId) notFound();
   const sweeps = await listBuildSweeps(ctx, buildId);
+  const shown = filterByDoubt(sweeps, doubt);
+  const href = `/programs/${programId}/builds/${buildId}`;
   const archived = build.archivedAt !== null || build.programArchivedAt !== null;
   const mayImport = isAllowed(ctx, "sweep.write") && !archived;
   return (
@@ -45,7 +54,7 @@ export default async function BuildPage(props: BuildPageProps) {
         actions={
           <>
             {isAllowed(ctx, "program.write") ? (
-              <ButtonLink href={`/programs/${programId}/builds/${buildId}/edit`}>Edit</ButtonLink>
+              <ButtonLink href={`${href}/edit`}>Edit</ButtonLink>
             ) : null}
             {isAllowed(ctx, "report.write") && !archived ? (
               <ButtonLink href={`/reports/new?build=${buildId}`}>New report</ButtonLink>
@@ -74,8 +83,21 @@ export default async function BuildPage(props: BuildPageProps) {
         ) : null}
       </Section>
       <Section title="Sweeps">
-        {sweeps.length > 0 ? (
-          <SweepList sweeps={sweeps} />
+        <DoubtFilter
+          href={href}
+          counts={countDoubts(sweeps)}
+          chosen={doubt}
+          total={sweeps.length}
+        />
+        {shown.length > 0 ? (
+          <SweepList sweeps={shown} />
+        ) : sweeps.length > 0 && doubt !== null ? (
+          <EmptyState>
+            No sweep of this build has the doubt &ldquo;{DOUBT_LABELS[doubt]}&rdquo;.{" "}
+            <Link href={href} scroll={false} className="text-deep underline">
+              Show all sweeps
+            </Link>
+          </EmptyState>
         ) : (
           <EmptyState>
             No sweeps yet.{" "}

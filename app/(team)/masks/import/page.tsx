@@ -14,7 +14,7 @@ export default async function ImportMaskPage() {
       <PageHead
         title="Import a mask"
         trail={[{ href: "/masks", label: "Masks" }]}
-        lead="A mask file as Neap writes it: JSON of the format neap-mask. It becomes a mask of the team's own and keeps its provenance."
+        lead="A mask file as Neap writes it, JSON or CSV, or a table with a row per segment. It becomes a mask of the team's own and keeps its provenance."
       />
       {isAllowed(ctx, "mask.write") ? (
         <ImportMaskForm action={takeMaskFile} />

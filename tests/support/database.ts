@@ -12,8 +12,9 @@ export interface TestDatabase {
   app: Database;
   /** As the owner: sees every team; for arranging and for looking behind the policies. */
   owner: Client;
-  /** Where a worker connects, as the app. */
+  /** Where a worker connects, as the app, and who prepares the database, as the owner. */
   appUrl: string;
+  ownerUrl: string;
   close: () => Promise<void>;
 }
 
@@ -38,9 +39,8 @@ export async function openTestDatabase(): Promise<TestDatabase> {
     return url.toString();
   };
   const ownerAddress = new URL(ownerUrl);
-  const owner = new Client({
-    connectionString: at(ownerAddress.username, ownerAddress.password),
-  });
+  const ownerOwnUrl = at(ownerAddress.username, ownerAddress.password);
+  const owner = new Client({ connectionString: ownerOwnUrl });
   await owner.connect();
   const appUrl = at("neap_app", need("NEAP_TEST_APP_PASSWORD"));
   const { db, pool } = openDatabase(appUrl);
@@ -48,6 +48,7 @@ export async function openTestDatabase(): Promise<TestDatabase> {
     app: db,
     owner,
     appUrl,
+    ownerUrl: ownerOwnUrl,
     close: async () => {
       await pool.end();
       await owner.end();

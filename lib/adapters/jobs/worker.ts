@@ -64,6 +64,7 @@ export function keepWorker(appUrl: string): Worker {
         if (!told) console.error("[jobs] No worker yet:", error);
         told = true;
       }
+      if (stopped) break;
       await new Promise<void>((resolve) => {
         wake = resolve;
         setTimeout(resolve, TRY_AGAIN_MS).unref();

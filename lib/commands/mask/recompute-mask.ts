@@ -21,17 +21,14 @@ export interface JobTools {
   mayGoOn: () => boolean;
 }
 
-/** The row of a job that is still to be done, held until the transaction ends; or null. */
-async function holdUnfinished(
-  tx: Transaction,
-  job: Job,
-): Promise<{ problem: string | null } | null> {
-  const [row] = await tx
-    .select({ problem: maskRecomputations.problem })
+/** Whether a job is still to be done; if so, its row is held until the transaction ends. */
+async function holdUnfinished(tx: Transaction, job: Job): Promise<boolean> {
+  const rows = await tx
+    .select({ total: maskRecomputations.total })
     .from(maskRecomputations)
     .where(and(ofJob(job), isNull(maskRecomputations.finishedAt)))
     .for("update");
-  return row ?? null;
+  return rows.length > 0;
 }
 
 const ofJob = (job: Job) =>
@@ -94,6 +91,13 @@ async function finish(tx: Transaction, revision: RevisionToRead): Promise<void> 
     .where(ofJob(revision));
 }
 
+async function tellProblem(tx: Transaction, job: Job, problem: string): Promise<void> {
+  await tx
+    .update(maskRecomputations)
+    .set({ problem })
+    .where(and(ofJob(job), isNull(maskRecomputations.finishedAt)));
+}
+
 /**
  * The job behind a new mask revision: makes the readings that are missing under it, a sweep per
  * transaction, and puts it in force when all are there. Not a command: a worker runs it, and it
@@ -125,12 +129,9 @@ export async function recomputeMask(tools: JobTools, data: unknown): Promise<voi
     doing = "The sweeps are read, but the revision could not be put in force";
     await inUnit((tx) => finish(tx, start.revision));
   } catch (error) {
-    const problem = `${doing}; the log of the worker says why.`;
-    await inUnit((tx) =>
-      tx
-        .update(maskRecomputations)
-        .set({ problem })
-        .where(and(ofJob(job), isNull(maskRecomputations.finishedAt))),
+    // Where the database itself is gone this cannot be told, and the job's own error counts.
+    await inUnit((tx) => tellProblem(tx, job, `${doing}; the log of the worker says why.`)).catch(
+      () => undefined,
     );
     throw error;
   }

@@ -1,14 +1,16 @@
-import { isDeepStrictEqual } from "node:util";
 import { maskRevisions } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
-import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
 import { lockMask } from "./lock-mask";
 import { readMaskInput } from "./read-mask-input";
+import { revisionContent } from "./revision-content";
 import { reviseMaskSchema } from "./schemas";
 import { startRecomputation } from "./start-recomputation";
 
-/** Adds the next revision of a team's mask; readings name the one they were made with. */
+/**
+ * Adds the next revision of a team's mask. It is in force once the sweeps that are here are read
+ * under it; until then the one before counts.
+ */
 export async function reviseMask(
   ctx: Context,
   input: unknown,
@@ -20,25 +22,7 @@ export async function reviseMask(
   return change(ctx, async (tx, audit) => {
     // The lock keeps two revisions saved at once from taking the same number.
     const { mask, current } = await lockMask(tx, ctx, maskId);
-    if (mask.origin === "shipped") {
-      throw new CommandError(
-        "conflict",
-        "Masks shipped with Neap are never edited. Copy it first, and edit the copy.",
-      );
-    }
-    if (mask.archivedAt !== null) {
-      throw new CommandError("conflict", "This mask is archived: restore it before changing it.");
-    }
-    if (basedOnRevision !== undefined && current.revision !== basedOnRevision) {
-      throw new CommandError(
-        "conflict",
-        `Revision ${current.revision} was saved while you were editing revision ${basedOnRevision}. Open the mask in another tab, compare, and carry your change over.`,
-      );
-    }
-    const content = { ...typed, key: mask.key };
-    if (isDeepStrictEqual(current.content, content)) {
-      throw new CommandError("conflict", "Nothing differs from the current revision.");
-    }
+    const content = revisionContent({ mask, current }, typed, basedOnRevision);
     const revision = current.revision + 1;
     const [row] = await tx
       .insert(maskRevisions)

@@ -14,9 +14,10 @@ export interface CheckOfDay {
 }
 
 /**
- * The newest check (not a reference) of a bench on one day (ISO date), or null: nobody checked the
- * bench that day, or the checks were archived. A later check of the day stands for the day: a
- * cable may have been tightened in between.
+ * The check (not a reference) that stands for a bench on one day (ISO date), or null: nobody checked
+ * the bench that day, or the checks were archived. Of each source the day's newest counts, since a
+ * cable may have been tightened in between; of several sources the one that drifted farthest, since
+ * one that is well says nothing of what the other one showed.
  */
 export async function checkOfDay(
   tx: Transaction,
@@ -24,8 +25,8 @@ export async function checkOfDay(
   benchId: string,
   day: string,
 ): Promise<CheckOfDay | null> {
-  const [row] = await tx
-    .select({
+  const rows = await tx
+    .selectDistinctOn([sql`lower(${benchChecks.source})`], {
       checkId: benchChecks.id,
       source: benchChecks.source,
       driftWorstDb: benchChecks.driftWorstDb,
@@ -46,8 +47,10 @@ export async function checkOfDay(
         isNull(benchChecks.archivedAt),
       ),
     )
-    .orderBy(desc(benchChecks.createdAt))
-    .limit(1);
-  if (!row || row.driftWorstDb === null) return null;
-  return { ...row, driftWorstDb: row.driftWorstDb };
+    .orderBy(sql`lower(${benchChecks.source})`, desc(benchChecks.createdAt));
+  return rows.reduce<CheckOfDay | null>((worst, { driftWorstDb, ...row }) => {
+    if (driftWorstDb === null) return worst;
+    if (worst && Math.abs(worst.driftWorstDb) >= Math.abs(driftWorstDb)) return worst;
+    return { ...row, driftWorstDb };
+  }, null);
 }

@@ -17,6 +17,7 @@ import { readBench } from "@/lib/queries/bench/read-bench";
 import { bringBenchBack, putBenchAway } from "../actions";
 import type { SearchParams } from "../search-params";
 import { readRevisionParam } from "../search-params";
+import { BenchCheckSection } from "./checks/bench-check-section";
 
 export const metadata: Metadata = { title: "Bench" };
 
@@ -104,6 +105,7 @@ export default async function BenchPage(props: BenchPageProps) {
           </EmptyState>
         )}
       </Section>
+      <BenchCheckSection ctx={ctx} benchId={bench.id} />
       <Section title="Before you connect anything">
         <BenchCautions kinds={transducers.map((t) => t.kind)} />
       </Section>

@@ -9,7 +9,8 @@ import { Field } from "@/components/ui/field";
 import { readNumber } from "@/components/ui/read-number";
 import { useActionForm } from "@/components/ui/use-action-form";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
-import { drawableTransducers, transducerInput } from "./transducer-draft";
+import { fillFromEquipment, type EquipmentToChoose } from "./fill-from-equipment";
+import { draftTransducer, drawableTransducers, transducerInput } from "./transducer-draft";
 import { TransducerFields } from "./transducer-fields";
 import type { ReadTable } from "./use-transducer-drafts";
 import { useTransducerDrafts } from "./use-transducer-drafts";
@@ -22,15 +23,19 @@ interface SignalPathEditorProps {
   benchId: string;
   revision: number;
   path: SignalPath;
+  equipment?: EquipmentToChoose[];
   save: (input: unknown) => Promise<Outcome>;
   readTable: ReadTable;
 }
 
 /** Edits a signal path as a whole; saving adds a revision and leaves the earlier ones alone. */
 export function SignalPathEditor(props: SignalPathEditorProps) {
-  const { benchId, revision, path, save, readTable } = props;
+  const { benchId, revision, path, equipment = [], save, readTable } = props;
   const router = useRouter();
-  const { drafts, patch, changeTable, add, move, remove } = useTransducerDrafts(path, readTable);
+  const { drafts, patch, changeTable, add, move, remove } = useTransducerDrafts(
+    path.transducers.map((t, i) => draftTransducer(i, t)),
+    readTable,
+  );
   // Errors name places; a transducer that is moved afterwards keeps its own.
   const [sentIds, setSentIds] = useState<number[]>([]);
   // What the server said of a field holds until that field is changed.
@@ -93,6 +98,12 @@ export function SignalPathEditor(props: SignalPathEditorProps) {
           onTable={(change) => {
             markChanged(draft.id, ["factors"]);
             changeTable(draft, change);
+          }}
+          equipment={equipment}
+          onEquipment={(equipmentId) => {
+            const change = fillFromEquipment(equipment.find((e) => e.id === equipmentId));
+            markChanged(draft.id, [...Object.keys(change), "factors"]);
+            patch(draft.id, change);
           }}
           onMove={(by) => move(draft.id, by)}
           onRemove={() => remove(draft.id)}

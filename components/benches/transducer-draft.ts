@@ -15,6 +15,8 @@ export interface TransducerDraft {
   kind: TransducerKind | "";
   calibratedOn: string;
   dueOn: string;
+  /** The piece of equipment that this is; empty when none is named. */
+  equipmentId: string;
   text: string;
   /** Hz per unit of the frequency column; empty when the table's header names it. */
   unit: string;
@@ -36,6 +38,7 @@ export function emptyTransducer(id: number): TransducerDraft {
     kind: "",
     calibratedOn: "",
     dueOn: "",
+    equipmentId: "",
     text: "",
     unit: "",
     table: { state: "empty" },
@@ -52,18 +55,28 @@ function unitOfTable(factors: readonly FactorPoint[]): number {
   return factors.every(survives) ? 1e6 : 1;
 }
 
-/** A stored transducer as a draft that reads back as the same table. */
+/** Stored factors as the part of a draft that reads back as the same table. */
+export function draftTable(
+  factors: FactorPoint[],
+): Pick<TransducerDraft, "text" | "unit" | "table"> {
+  const unitHz = unitOfTable(factors);
+  return {
+    text: factors.map((f) => `${f.frequencyHz / unitHz}\t${f.factorDb}`).join("\n"),
+    unit: String(unitHz),
+    table: { state: "read", factors },
+  };
+}
+
+/** A stored transducer as a draft. */
 export function draftTransducer(id: number, transducer: Transducer): TransducerDraft {
-  const unitHz = unitOfTable(transducer.factors);
   return {
     id,
     name: transducer.name,
     kind: transducer.kind,
     calibratedOn: transducer.calibratedOn ?? "",
     dueOn: transducer.dueOn ?? "",
-    text: transducer.factors.map((f) => `${f.frequencyHz / unitHz}\t${f.factorDb}`).join("\n"),
-    unit: String(unitHz),
-    table: { state: "read", factors: transducer.factors },
+    equipmentId: transducer.equipmentId ?? "",
+    ...draftTable(transducer.factors),
   };
 }
 
@@ -79,6 +92,7 @@ export function transducerInput(draft: TransducerDraft): unknown {
     kind: draft.kind,
     calibratedOn: draft.calibratedOn || null,
     dueOn: draft.dueOn || null,
+    equipmentId: draft.equipmentId || null,
     table: tableInput(draft),
   };
 }

@@ -4,6 +4,7 @@ import { Button } from "@/components/ui/button";
 import { Field } from "@/components/ui/field";
 import { SelectField } from "@/components/ui/select-field";
 import { TRANSDUCER_KINDS } from "@/lib/core/bench/signal-path";
+import { equipmentOptions, type EquipmentToChoose } from "./fill-from-equipment";
 import { FactorTableField } from "./factor-table-field";
 import type { TransducerDraft } from "./transducer-draft";
 import { FACTOR_MEANINGS, TRANSDUCER_KIND_LABELS } from "./transducer-kinds";
@@ -17,10 +18,13 @@ interface TransducerFieldsProps {
   draft: TransducerDraft;
   place: number;
   count: number;
+  equipment: readonly EquipmentToChoose[];
   /** Error of one field ("name", "dueOn", "factors"), as the server said it. */
   errorOf: (field: string) => string | undefined;
   onPatch: (change: Partial<TransducerDraft>) => void;
   onTable: (change: Partial<TransducerDraft>) => void;
+  /** A piece was chosen, or none: what is known of it is filled in. */
+  onEquipment: (equipmentId: string) => void;
   onMove: (by: -1 | 1) => void;
   onRemove: () => void;
 }
@@ -28,6 +32,7 @@ interface TransducerFieldsProps {
 /** One transducer of the path with its place, its dates and its factor table. */
 export function TransducerFields(props: TransducerFieldsProps) {
   const { draft, place, count, errorOf, onPatch, onTable, onMove, onRemove } = props;
+  const chosen = props.equipment.find((piece) => piece.id === draft.equipmentId);
   const at = `transducers.${place}`;
   const called = draft.name.trim() || `transducer ${place + 1}`;
   return (
@@ -58,6 +63,19 @@ export function TransducerFields(props: TransducerFieldsProps) {
       </div>
       <div className="grid gap-x-6 sm:grid-cols-2">
         <div>
+          <SelectField
+            label="Equipment"
+            name={`${at}.equipmentId`}
+            options={equipmentOptions(props.equipment, draft.equipmentId)}
+            value={draft.equipmentId}
+            hint={
+              chosen && chosen.factors === null
+                ? "Its newest calibration brings no factors: the table beside is as you typed it."
+                : "Fills in name, kind, dates and factors from its newest calibration."
+            }
+            onChange={(event) => props.onEquipment(event.target.value)}
+            error={errorOf("equipmentId")}
+          />
           <Field
             label="Name"
             name={`${at}.name`}

@@ -1,9 +1,9 @@
 "use client";
 
 import { useRef, useState } from "react";
-import type { FactorPoint, SignalPath } from "@/lib/core/bench/signal-path";
+import type { FactorPoint } from "@/lib/core/bench/signal-path";
 import type { TableState, TransducerDraft } from "./transducer-draft";
-import { draftTransducer, emptyTransducer, tableInput } from "./transducer-draft";
+import { emptyTransducer, tableInput } from "./transducer-draft";
 
 const TYPING_PAUSE_MS = 400;
 
@@ -26,9 +26,9 @@ async function readDraft(read: ReadTable, draft: TransducerDraft): Promise<Table
 }
 
 /** The transducers being edited; each table is read anew once its typing pauses. */
-export function useTransducerDrafts(path: SignalPath, read: ReadTable) {
-  const [drafts, setDrafts] = useState(() => path.transducers.map((t, i) => draftTransducer(i, t)));
-  const nextId = useRef(path.transducers.length);
+export function useTransducerDrafts(initial: readonly TransducerDraft[], read: ReadTable) {
+  const [drafts, setDrafts] = useState(initial);
+  const nextId = useRef(initial.length);
   const timers = useRef(new Map<number, ReturnType<typeof setTimeout>>());
 
   function patch(id: number, change: Partial<TransducerDraft>) {

@@ -2,6 +2,7 @@ import { benches, signalPathRevisions } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, isDuplicate, parseInput, requirePermission } from "../run";
+import { requireInstrument } from "./find-instrument";
 import { createBenchSchema } from "./schemas";
 
 /** Adds a bench; revision 1 of its signal path has the stated impedance and no transducers. */
@@ -10,6 +11,7 @@ export async function createBench(ctx: Context, input: unknown): Promise<{ bench
   const { impedanceOhm, ...values } = parseInput(createBenchSchema, input);
   try {
     return await change(ctx, async (tx, audit) => {
+      await requireInstrument(tx, ctx, values.instrumentId);
       const [row] = await tx
         .insert(benches)
         .values({ teamId: ctx.teamId, ...values })

@@ -1,7 +1,8 @@
 import { and, desc, eq, isNull, lte } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
-import { benches, calibrations, equipment, uncertaintyBudgets } from "@/db/schema";
+import { benches, calibrations, equipment } from "@/db/schema";
 import type { SweepInstrument } from "@/lib/core/bench/equipment";
+import { newestBudget } from "./newest-budget";
 
 /** What a sweep keeps of its bench's quality at the import. */
 export interface BenchQuality {
@@ -28,12 +29,7 @@ export async function loadBenchQuality(
       and(eq(equipment.teamId, benches.teamId), eq(equipment.id, benches.instrumentId)),
     )
     .where(and(eq(benches.teamId, teamId), eq(benches.id, benchId)));
-  const [budget] = await tx
-    .select({ id: uncertaintyBudgets.id })
-    .from(uncertaintyBudgets)
-    .where(and(eq(uncertaintyBudgets.teamId, teamId), eq(uncertaintyBudgets.benchId, benchId)))
-    .orderBy(desc(uncertaintyBudgets.revision))
-    .limit(1);
+  const budget = await newestBudget(tx, teamId, benchId);
   const budgetId = budget?.id ?? null;
   if (!found) return { instrument: null, budgetId };
   const [newest] = await tx

@@ -4,6 +4,8 @@ import { signalPathRevisions } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
+import { checkEquipment } from "./check-equipment";
+import { latestDay } from "./latest-day";
 import { lockOpenBench } from "./lock-bench";
 import { readSignalPath } from "./read-signal-path";
 import { reviseSignalPathSchema } from "./schemas";
@@ -15,11 +17,12 @@ export async function reviseSignalPath(
 ): Promise<{ benchId: string; revisionId: string; revision: number }> {
   requirePermission(ctx, "bench.write");
   const values = parseInput(reviseSignalPathSchema, input);
-  const content = readSignalPath(values);
   const { benchId, basedOnRevision } = values;
   return change(ctx, async (tx, audit) => {
     // The lock keeps two revisions saved at once from taking the same number.
     await lockOpenBench(tx, ctx, benchId);
+    const wrongEquipment = await checkEquipment(tx, ctx, values.transducers);
+    const content = readSignalPath(values, await latestDay(tx), wrongEquipment);
     const [last] = await tx
       .select({ revision: signalPathRevisions.revision, content: signalPathRevisions.content })
       .from(signalPathRevisions)
@@ -50,7 +53,11 @@ export async function reviseSignalPath(
       detail: {
         revision,
         impedanceOhm: content.impedanceOhm,
-        transducers: content.transducers.map(({ name, kind }) => ({ name, kind })),
+        transducers: content.transducers.map(({ name, kind, equipmentId }) => ({
+          name,
+          kind,
+          ...(equipmentId ? { equipmentId } : {}),
+        })),
       },
     });
     return { benchId, revisionId: row.id, revision };

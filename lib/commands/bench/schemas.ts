@@ -1,6 +1,22 @@
 import { z } from "zod";
+import { MAX_GUARD_DB } from "@/lib/core/bench/guard";
 import { TRANSDUCER_KINDS } from "@/lib/core/bench/signal-path";
+import {
+  DISTRIBUTIONS,
+  GUARD_RULES,
+  REFERENCE_UNCERTAINTIES,
+} from "@/lib/core/bench/uncertainty-budget";
 import { storable } from "../storable-text";
+
+const guardDb = z
+  .number("State the guard in dB; 0 means that there is none.")
+  .min(0, "The guard cannot lie below 0 dB.")
+  .max(MAX_GUARD_DB, `A guard above ${MAX_GUARD_DB} dB leaves no margin to read.`);
+
+const checkToleranceDb = z
+  .number("State the drift that a bench check may show, in dB.")
+  .positive("The drift allowed must be above 0 dB.")
+  .max(20, "A drift above 20 dB is no tolerance.");
 
 const benchFields = {
   name: storable.trim().min(1, "Give it a name.").max(80, "Keep the name under 80 characters."),
@@ -11,11 +27,10 @@ const benchFields = {
     .positive("The distance must be above 0 m.")
     .max(1000, "A distance above 1,000 m is no bench.")
     .nullable(),
-  guardDb: z
-    .number("State the guard in dB; 0 means that there is none.")
-    .min(0, "The guard cannot lie below 0 dB.")
-    .max(40, "A guard above 40 dB leaves no margin to read."),
   notes: storable.trim().max(4000, "Keep the notes under 4,000 characters."),
+  /** The instrument as a piece of equipment; null: none is named. */
+  instrumentId: z.uuid("Choose an instrument.").nullable(),
+  checkToleranceDb,
 };
 
 const impedanceOhm = z
@@ -25,9 +40,64 @@ const impedanceOhm = z
 
 const benchId = z.uuid("Choose a bench.");
 
-export const createBenchSchema = z.object({ ...benchFields, impedanceOhm });
+/** Drift that an ordinary check shows; common practice, no source. */
+const COMMON_TOLERANCE_DB = 2;
 
-export const editBenchSchema = z.object({ benchId, ...benchFields });
+export const createBenchSchema = z.object({
+  ...benchFields,
+  instrumentId: benchFields.instrumentId.default(null),
+  checkToleranceDb: checkToleranceDb.default(COMMON_TOLERANCE_DB),
+  guardDb,
+  impedanceOhm,
+});
+
+/** What is left out stays as it is. */
+export const editBenchSchema = z.object({
+  benchId,
+  ...benchFields,
+  instrumentId: benchFields.instrumentId.optional(),
+  checkToleranceDb: checkToleranceDb.optional(),
+  guardDb: guardDb.optional(),
+});
+
+export const setGuardRuleSchema = z
+  .object({
+    benchId,
+    guardRule: z.enum(GUARD_RULES, "Choose where the guard comes from."),
+    /** What counts when the rule is "stated". */
+    guardDb: guardDb.nullable(),
+  })
+  .refine(({ guardRule, guardDb: db }) => guardRule !== "stated" || db !== null, {
+    path: ["guardDb"],
+    message: "State the guard in dB; 0 means that there is none.",
+  });
+
+/** A number, or what a field held instead: the core says at which field that is a problem. */
+const typedNumber = z
+  .number()
+  .or(z.nan())
+  .or(z.literal([Infinity, -Infinity]))
+  .nullable();
+
+export const reviseBudgetSchema = z.object({
+  benchId,
+  /** The revision the editor started from, 0 for none; refused when a newer one came in between. */
+  basedOnRevision: z.number().int().optional(),
+  title: storable.trim().max(120, "Keep the title under 120 characters."),
+  lines: z
+    .array(
+      z.object({
+        name: storable.trim().max(120, "Keep the name under 120 characters."),
+        value: typedNumber,
+        distribution: z.enum(DISTRIBUTIONS, "Choose how the value is distributed.").nullable(),
+        sensitivity: typedNumber,
+        degreesOfFreedom: typedNumber,
+        observations: typedNumber,
+      }),
+    )
+    .max(60, "A budget holds at most 60 lines."),
+  reference: z.enum(REFERENCE_UNCERTAINTIES, "Choose a measurement of the list.").nullable(),
+});
 
 export const benchIdSchema = z.object({ benchId });
 
@@ -48,6 +118,7 @@ const transducerSchema = z
     kind: z.enum(TRANSDUCER_KINDS, "Choose what this is."),
     calibratedOn: z.string().max(40).nullable(),
     dueOn: z.string().max(40).nullable(),
+    equipmentId: z.uuid("Choose a piece of equipment.").nullable().optional(),
     factors: z
       .array(z.object({ frequencyHz: z.number(), factorDb: z.number() }))
       .max(MAX_FACTOR_ROWS, TOO_MANY_ROWS)

@@ -3,7 +3,9 @@ import { inTeam } from "@/db/client";
 import { benches, signalPathRevisions } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
+import type { GuardRule } from "@/lib/core/bench/uncertainty-budget";
 import { requirePermission } from "@/lib/commands/run";
+import { isId } from "../is-id";
 
 export interface SignalPathRevision {
   id: string;
@@ -19,6 +21,9 @@ export interface BenchDetail {
   instrument: string;
   distanceM: number | null;
   guardDb: number;
+  guardRule: GuardRule;
+  instrumentId: string | null;
+  checkToleranceDb: number;
   notes: string;
   archivedAt: Date | null;
   /** Newest first. */
@@ -28,7 +33,7 @@ export interface BenchDetail {
 /** One bench with every revision of its signal path; null when the team has none of this id. */
 export async function readBench(ctx: Context, benchId: string): Promise<BenchDetail | null> {
   requirePermission(ctx, "bench.read");
-  if (!/^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i.test(benchId)) return null;
+  if (!isId(benchId)) return null;
   return inTeam(ctx.db, ctx.teamId, async (tx) => {
     const [bench] = await tx
       .select({
@@ -38,6 +43,9 @@ export async function readBench(ctx: Context, benchId: string): Promise<BenchDet
         instrument: benches.instrument,
         distanceM: benches.distanceM,
         guardDb: benches.guardDb,
+        guardRule: benches.guardRule,
+        instrumentId: benches.instrumentId,
+        checkToleranceDb: benches.checkToleranceDb,
         notes: benches.notes,
         archivedAt: benches.archivedAt,
       })

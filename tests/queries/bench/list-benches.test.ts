@@ -19,7 +19,12 @@ describe("listBenches", () => {
     const ctx = await makeMember(database, "engineer");
     const { benchId } = await createBench(ctx, BENCH);
     await createBench(ctx, { ...BENCH, name: "Attic" });
-    const due = (name: string, dueOn: string | null) => ({ ...ANTENNA, name, dueOn });
+    const due = (name: string, dueOn: string | null) => ({
+      ...ANTENNA,
+      kind: "cable",
+      name,
+      dueOn,
+    });
     await reviseSignalPath(ctx, {
       benchId,
       impedanceOhm: 50,

@@ -1,6 +1,6 @@
 import { and, asc, eq, lt } from "drizzle-orm";
 import { completeReadings } from "@/lib/commands/sweep/complete-readings";
-import { ENGINE_VERSION } from "@/lib/core/reading/read-sweep";
+import { ENGINE_VERSION } from "@/lib/core/reading/read-together";
 import { isNewestRevision } from "@/lib/queries/sweep/newest-revision";
 import type { Database } from "./client";
 import { programs, readings, teams } from "./schema";

@@ -17,7 +17,7 @@ try {
     // First of all, while the database holds nothing but what this figure puts there.
     figures.push(...(await measureStoredBytes(place)));
     figures.push(...(await measureImport(place)));
-    figures.push(...(await measureReading(place)));
+    figures.push(...(await measureReading()));
     figures.push(...(await measureZoom(place)));
   } finally {
     await place.close();

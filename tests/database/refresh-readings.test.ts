@@ -2,7 +2,7 @@ import { drizzle } from "drizzle-orm/node-postgres";
 import { afterAll, beforeAll, expect, test } from "vitest";
 import { refreshReadings } from "@/db/refresh-readings";
 import * as schema from "@/db/schema";
-import { ENGINE_VERSION } from "@/lib/core/reading/read-sweep";
+import { ENGINE_VERSION } from "@/lib/core/reading/read-together";
 import { readSweepDetail } from "@/lib/queries/sweep/read-sweep";
 import type { TestDatabase } from "../support/database";
 import { makeMember, openTestDatabase } from "../support/database";

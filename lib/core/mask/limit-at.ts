@@ -10,7 +10,7 @@ export const EDGE_TOLERANCE = 1e-12;
 
 /** Limit of one segment at a frequency inside it, dB of the mask's unit. */
 export function segmentLimitAt(segment: MaskSegment, hz: number): number {
-  if (hz === segment.startHz) return segment.startDb;
+  if (hz === segment.startHz || segment.startDb === segment.stopDb) return segment.startDb;
   if (hz === segment.stopHz) return segment.stopDb;
   const share =
     segment.interpolation === "log"

@@ -1,3 +1,4 @@
+import { commonRanges, logWidth } from "./coverage";
 import { lineRanges } from "../mask/limit-at";
 import type { Mask, MaskLine } from "../mask/mask";
 import type { FrequencyRange, LineReading, MarginPoint, Reading, Standing } from "./reading";
@@ -26,30 +27,11 @@ export interface CombinedReading {
 
 const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
 
-/** What lies in every one of the lists; each is ascending and without overlaps. */
-export function commonRanges(lists: readonly FrequencyRange[][]): FrequencyRange[] {
-  const [first, ...rest] = lists;
-  return rest.reduce<FrequencyRange[]>(
-    (common, list) =>
-      common.flatMap((a) =>
-        list.flatMap((b) => {
-          const startHz = Math.max(a.startHz, b.startHz);
-          const stopHz = Math.min(a.stopHz, b.stopHz);
-          return stopHz > startHz ? [{ startHz, stopHz }] : [];
-        }),
-      ),
-    first ?? [],
-  );
-}
-
-const width = (ranges: readonly FrequencyRange[]) =>
-  ranges.reduce((sum, range) => sum + Math.log(range.stopHz / range.startHz), 0);
-
 function combineLine(line: MaskLine, held: readonly (LineReading | undefined)[]): CombinedLine {
   const whole = lineRanges(line);
   const gaps = commonRanges(held.map((reading) => reading?.coverage.gaps ?? whole));
-  const total = width(whole);
-  const coverage = gaps.length === 0 ? 1 : Math.max(0, 1 - width(gaps) / total);
+  const total = logWidth(whole);
+  const coverage = gaps.length === 0 ? 1 : Math.max(0, 1 - logWidth(gaps) / total);
   let source: number | null = null;
   let worst: MarginPoint | null = null;
   const isOver = held.some((reading) => reading?.standing === "over");

@@ -60,10 +60,15 @@ export function inRanges(ranges: readonly FrequencyRange[], hz: number): boolean
  * What a scan swept: broken at NaN and at spacings above twice the median step around them;
  * its first and last point reach half a step further. Spots cover nothing.
  */
-export function coveredRanges(trace: Trace): FrequencyRange[] {
+export function coveredRanges(trace: Trace, mayHaveGaps = true): FrequencyRange[] {
   const { axis, levelsDb } = trace;
   const count = Math.min(pointCount(axis), levelsDb.length);
   if (trace.kind === "spots" || count < 2) return [];
+  if (!mayHaveGaps && axis.kind === "regular") {
+    const reachHz = axis.stepHz / 2;
+    const stopHz = frequencyAt(axis, count - 1) + reachHz;
+    return [{ startHz: axis.startHz - reachHz, stopHz }];
+  }
   const covered = (i: number) => Number.isFinite(levelsDb[i]);
   const ranges: FrequencyRange[] = [];
   let startHz: number | null = null;
@@ -80,7 +85,7 @@ export function coveredRanges(trace: Trace): FrequencyRange[] {
 }
 
 /** Whether a finite sample of the trace falls into the range. */
-export function hasSample(trace: Trace, range: FrequencyRange): boolean {
+function hasSample(trace: Trace, range: FrequencyRange): boolean {
   const count = Math.min(pointCount(trace.axis), trace.levelsDb.length);
   for (let i = indexAtOrAfter(trace.axis, range.startHz); i < count; i += 1) {
     if (frequencyAt(trace.axis, i) > range.stopHz) return false;
@@ -89,22 +94,55 @@ export function hasSample(trace: Trace, range: FrequencyRange): boolean {
   return false;
 }
 
+/** What lies in every one of the lists; each is ascending and without overlaps. */
+export function commonRanges(lists: readonly FrequencyRange[][]): FrequencyRange[] {
+  const [first, ...rest] = lists;
+  return rest.reduce<FrequencyRange[]>(
+    (common, list) =>
+      common.flatMap((a) =>
+        list.flatMap((b) => {
+          const startHz = Math.max(a.startHz, b.startHz);
+          const stopHz = Math.min(a.stopHz, b.stopHz);
+          return stopHz > startHz ? [{ startHz, stopHz }] : [];
+        }),
+      ),
+    first ?? [],
+  );
+}
+
+/** Width in the logarithm of frequency. */
+export function logWidth(ranges: readonly FrequencyRange[]): number {
+  return ranges.reduce((sum, range) => sum + Math.log(range.stopHz / range.startHz), 0);
+}
+
+interface Swept {
+  trace: Trace;
+  covered: readonly FrequencyRange[];
+  /** Polarization of a radiated sweep; null: not stated, or of no meaning. */
+  polarization: string | null;
+}
+
+/** What the traces swept of one band, in every polarization that any of them states. */
+function sweptOf(band: FrequencyRange, traces: readonly Swept[]): FrequencyRange[] {
+  const here = traces.filter(({ trace }) => hasSample(trace, band));
+  const stated = [...new Set(traces.flatMap((t) => (t.polarization ? [t.polarization] : [])))];
+  const rangesOf = (own: readonly Swept[]) => mergeRanges(own.flatMap((t) => t.covered));
+  if (stated.length === 0) return rangesOf(here);
+  // A trace that does not state its polarization is not held against any of them.
+  return commonRanges(
+    stated.map((p) => rangesOf(here.filter((t) => t.polarization === p || !t.polarization))),
+  );
+}
+
 /** Share of the bands (in log frequency) that the traces swept, and the gaps left. */
-export function coverageOf(bands: readonly FrequencyRange[], traces: readonly Trace[]): Coverage {
-  const swept = traces.map((trace) => ({ trace, ranges: coveredRanges(trace) }));
+export function coverageOf(bands: readonly FrequencyRange[], traces: readonly Swept[]): Coverage {
   const gaps: FrequencyRange[] = [];
-  let whole = 0;
-  let missing = 0;
   for (const band of bands) {
-    whole += Math.log(band.stopHz / band.startHz);
-    const ranges = mergeRanges(swept.flatMap((s) => (hasSample(s.trace, band) ? s.ranges : [])));
     let at = band.startHz;
     const gap = (toHz: number) => {
-      if (toHz <= at) return;
-      gaps.push({ startHz: at, stopHz: toHz });
-      missing += Math.log(toHz / at);
+      if (toHz > at) gaps.push({ startHz: at, stopHz: toHz });
     };
-    for (const range of ranges) {
+    for (const range of sweptOf(band, traces)) {
       if (range.stopHz <= at) continue;
       if (range.startHz >= band.stopHz) break;
       gap(range.startHz);
@@ -112,6 +150,16 @@ export function coverageOf(bands: readonly FrequencyRange[], traces: readonly Tr
     }
     gap(band.stopHz);
   }
-  const fraction = whole > 0 ? Math.max(0, 1 - missing / whole) : 0;
-  return { fraction: gaps.length === 0 && whole > 0 ? 1 : fraction, gaps };
+  return { fraction: coveredShare(bands, gaps), gaps };
+}
+
+/** Share of the bands in log frequency that lies in none of the gaps; 1 only without a gap. */
+export function coveredShare(
+  bands: readonly FrequencyRange[],
+  gaps: readonly FrequencyRange[],
+): number {
+  const whole = logWidth(bands);
+  if (!(whole > 0)) return 0;
+  const missing = logWidth(commonRanges([[...bands], [...gaps]]));
+  return missing === 0 ? 1 : Math.max(0, 1 - missing / whole);
 }

@@ -1,47 +1,51 @@
-import { lineRanges } from "../mask/limit-at";
-import type { MaskLine } from "../mask/mask";
-import { frequencyAt, medianStepHz, pointCount } from "../sweep/axis";
-import type { Trace } from "../sweep/trace";
+import type { CompiledLine, LinePiece } from "../mask/compile-line";
+import { pieceLimitAt } from "../mask/compile-line";
+import { EDGE_TOLERANCE, limitAt } from "../mask/limit-at";
+import { frequencyAt, indexAfter, indexAtOrAfter } from "../sweep/axis";
 import { basisOf, tightness } from "./basis";
-import { coverageOf, coveredRanges, inRanges, mergeRanges } from "./coverage";
-import {
-  holdAgainst,
-  joinPoints,
-  lowestPoint,
-  mergeHighest,
-  overMaxima,
-  type MarginPoints,
-} from "./margin-points";
+import { coverageOf, coveredShare, inRanges, mergeRanges } from "./coverage";
+import type { HeldTrace } from "./held-trace";
+import type { Lowest } from "./lowest-margin";
+import { findLowest, heldLevelDb, keepLowest, nothingFound } from "./lowest-margin";
+import { speaksFor } from "./position";
+import { originOf } from "./prepare-parts";
 import type {
+  BandReading,
   Basis,
+  Coverage,
   FrequencyRange,
   LineReading,
   MarginPoint,
-  RemeasurePoint,
   Standing,
 } from "./reading";
 
-interface Usable {
-  trace: Trace;
-  traceIndex: number;
+/** A trace that can say something about a line, and where it is not heard. */
+export interface UsedTrace {
+  held: HeldTrace;
   basis: Basis;
   rank: number;
+  /** Where a tighter trace of the same position speaks; ascending. */
+  silent: FrequencyRange[];
 }
 
-/** Where tighter traces speak, so that a looser bound is not heard. */
-function tighterRanges(
-  used: Pick<Usable, "trace" | "rank">,
-  all: readonly Usable[],
-  rbwHz: number,
-): FrequencyRange[] {
-  const step = medianStepHz(used.trace.axis);
-  const reach = Math.max(rbwHz, Number.isFinite(step) ? step : 0);
+/** How far to both sides in Hz a spot speaks for a trace. */
+export function reachOf(held: HeldTrace): number {
+  return Math.max(held.part.settings.rbwHz ?? 0, Number.isFinite(held.stepHz) ? held.stepHz : 0);
+}
+
+/** Where tighter traces of the same position speak, so that a looser bound is not heard. */
+function silentRanges(used: Omit<UsedTrace, "silent">, all: readonly Omit<UsedTrace, "silent">[]) {
+  const reach = reachOf(used.held);
   return mergeRanges(
     all
-      .filter((other) => other.rank > used.rank)
-      .flatMap(({ trace }) => {
-        if (trace.kind === "scan") return coveredRanges(trace);
-        return Array.from({ length: pointCount(trace.axis) }, (_, i) => i)
+      .filter(
+        (other) =>
+          other.rank > used.rank && speaksFor(other.held.part.settings, used.held.part.settings),
+      )
+      .flatMap(({ held }) => {
+        const { trace, levels } = held;
+        if (trace.kind === "scan") return held.covered.map((range) => ({ ...range }));
+        return Array.from({ length: levels.count }, (_, i) => i)
           .filter((i) => Number.isFinite(trace.levelsDb[i]))
           .map((i) => frequencyAt(trace.axis, i))
           .map((hz) => ({ startHz: hz - reach, stopHz: hz + reach }));
@@ -49,13 +53,129 @@ function tighterRanges(
   );
 }
 
+/** The traces whose detector can say something about the line. */
+export function useTraces(line: CompiledLine, held: readonly HeldTrace[]): UsedTrace[] {
+  const usable = held
+    .map((one) => ({
+      held: one,
+      basis: basisOf(one.trace, line.line.detector),
+      rank: tightness(one.trace.detector),
+    }))
+    .filter((used) => used.basis !== "cannot-decide");
+  return usable.map((used) => ({
+    ...used,
+    silent: used.basis === "upper-bound" ? silentRanges(used, usable) : [],
+  }));
+}
+
+/** Calls `visit` with each run of samples of a trace inside a piece that is heard, edges left out. */
+export function eachHeardRun(
+  { held, silent }: UsedTrace,
+  piece: LinePiece,
+  visit: (from: number, to: number) => void,
+): void {
+  const { axis } = held.trace;
+  const from = indexAfter(axis, piece.startHz * (1 + EDGE_TOLERANCE));
+  const to = indexAtOrAfter(axis, piece.stopHz * (1 - EDGE_TOLERANCE));
+  let at = Math.max(from, held.from);
+  const end = Math.min(to, held.to);
+  for (const range of silent) {
+    if (at >= end) return;
+    if (range.stopHz < piece.startHz) continue;
+    if (range.startHz > piece.stopHz) break;
+    const stop = Math.min(end, indexAtOrAfter(axis, range.startHz));
+    if (stop > at) visit(at, stop);
+    at = Math.max(at, indexAfter(axis, range.stopHz));
+  }
+  if (at < end) visit(at, end);
+}
+
+/** Calls `visit` with each heard sample that lies on an edge of the line, and its limit. */
+export function eachHeardEdge(
+  { held, silent }: UsedTrace,
+  line: CompiledLine,
+  visit: (sample: number, limitDb: number, edgeHz: number) => void,
+): void {
+  const { axis } = held.trace;
+  for (const edgeHz of line.edgesHz) {
+    const lastHz = edgeHz * (1 + EDGE_TOLERANCE);
+    for (
+      let i = Math.max(held.from, indexAtOrAfter(axis, edgeHz * (1 - EDGE_TOLERANCE)));
+      i < held.to && frequencyAt(axis, i) <= lastHz;
+      i += 1
+    ) {
+      const hz = frequencyAt(axis, i);
+      const limitDb = limitAt(line.line, hz);
+      if (limitDb === null || Number.isNaN(heldLevelDb(held, i)) || inRanges(silent, hz)) continue;
+      visit(i, limitDb, edgeHz);
+    }
+  }
+}
+
+/** The piece that gives the limit at an edge; the lower one in frequency when both do. */
+function pieceOfEdge(line: CompiledLine, edgeHz: number, limitDb: number): number {
+  let nearest = -1;
+  let off = Number.POSITIVE_INFINITY;
+  line.pieces.forEach((piece, i) => {
+    if (piece.stopHz !== edgeHz && piece.startHz !== edgeHz) return;
+    const own = Math.abs(pieceLimitAt(piece, edgeHz) - limitDb);
+    if (own >= off) return;
+    off = own;
+    nearest = i;
+  });
+  return nearest;
+}
+
+/** Lowest margins of one trace, piece by piece. */
+function lowestByPiece(line: CompiledLine, used: UsedTrace): Lowest[] {
+  const found = line.pieces.map((piece) => {
+    const lowest = nothingFound();
+    eachHeardRun(used, piece, (from, to) => findLowest(used.held, piece, from, to, lowest));
+    return lowest;
+  });
+  eachHeardEdge(used, line, (sample, limitDb, edgeHz) => {
+    const lowest = found[pieceOfEdge(line, edgeHz, limitDb)];
+    if (lowest) keepLowest(lowest, sample, limitDb - heldLevelDb(used.held, sample), limitDb);
+  });
+  return found;
+}
+
+function pointOf(held: HeldTrace, { sample, marginDb, limitDb }: Lowest): MarginPoint | null {
+  if (sample < 0) return null;
+  const { partIndex, traceIndex } = originOf(held, sample);
+  return {
+    frequencyHz: frequencyAt(held.trace.axis, sample),
+    levelDb: heldLevelDb(held, sample),
+    limitDb,
+    marginDb,
+    traceIndex,
+    partIndex,
+  };
+}
+
+function lower(a: MarginPoint | null, b: MarginPoint | null): MarginPoint | null {
+  return b && (!a || b.marginDb < a.marginDb) ? b : a;
+}
+
+interface Worst {
+  own: MarginPoint | null;
+  bound: MarginPoint | null;
+}
+
+/** What is over by the line's own detector is known by that margin, not by a bound elsewhere. */
+function decide({ own, bound }: Worst): { worst: MarginPoint | null; basis: Basis } {
+  const isBound = bound !== null && !(own && (own.marginDb < 0 || own.marginDb <= bound.marginDb));
+  const worst = isBound ? bound : own;
+  return { worst, basis: worst ? (isBound ? "upper-bound" : "like-for-like") : "cannot-decide" };
+}
+
 function standingOf(
-  worstOwn: MarginPoint | null,
+  { own }: Worst,
   worst: MarginPoint | null,
   fraction: number,
-  guardDb: number,
+  isInside: boolean,
 ): { standing: Standing; explanation: string | null } {
-  if (worstOwn && worstOwn.marginDb < 0) return { standing: "over", explanation: null };
+  if (own && own.marginDb < 0) return { standing: "over", explanation: null };
   if (!worst)
     return {
       standing: "undecided",
@@ -67,84 +187,63 @@ function standingOf(
       explanation:
         "A looser detector reads over this line: measure these suspects with the line's own detector.",
     };
-  const inside = worst.marginDb < guardDb;
   if (fraction < 1) {
     // Floored, so that a mask which is not fully covered never reads 100 %.
     const percent = Math.min(99, Math.floor(fraction * 100));
-    const text = `${inside ? "Inside guard" : "Clear"} on ${percent} % of the mask; the rest was not swept.`;
+    const text = `${isInside ? "Inside guard" : "Clear"} on ${percent} % of the mask; the rest was not swept.`;
     return { standing: "undecided", explanation: text };
   }
-  return { standing: inside ? "inside-guard" : "clear", explanation: null };
+  return { standing: isInside ? "inside-guard" : "clear", explanation: null };
 }
 
-/**
- * Holds traces, already in the mask's unit, against one line. Levels, limits and guard in dB;
- * `rbwHz` is the sweep's, 0 when not stated.
- */
-export function readLine(
-  line: MaskLine,
-  lineIndex: number,
-  traces: readonly Trace[],
-  rbwHz: number,
-  guardDb: number,
-): { reading: LineReading; remeasure: RemeasurePoint[] } {
-  const usable = traces
-    .map((trace, traceIndex): Usable => {
-      const basis = basisOf(trace, line.detector);
-      return { trace, traceIndex, basis, rank: tightness(trace.detector) };
-    })
-    .filter((used) => used.basis !== "cannot-decide");
-  const own: MarginPoints[] = [];
-  const boundsByRank = new Map<number, MarginPoints>();
-  for (const { trace, traceIndex, basis, rank } of usable) {
-    if (basis === "like-for-like") {
-      own.push(holdAgainst(trace, traceIndex, line, () => true));
-      continue;
-    }
-    const silent = tighterRanges({ trace, rank }, usable, rbwHz);
-    const isHeard = (hz: number) => !inRanges(silent, hz);
-    const points = holdAgainst(trace, traceIndex, line, isHeard);
-    const known = boundsByRank.get(rank);
-    // The highest of bounds that are equally tight: two peak traces may be two polarizations or
-    // heights, and the line has to hold in the worse of them.
-    boundsByRank.set(rank, known ? mergeHighest(known, points) : points);
-  }
-  const bounds = joinPoints([...boundsByRank.values()]);
-  const worstOwn = lowestPoint(joinPoints(own));
-  const worstBound = lowestPoint(bounds);
-  // What is over by the line's own detector is known by that margin, not by a bound elsewhere.
-  const isBound =
-    worstBound !== null &&
-    !(worstOwn && (worstOwn.marginDb < 0 || worstOwn.marginDb <= worstBound.marginDb));
-  const worst = isBound ? worstBound : worstOwn;
-  const basis: Basis = isBound ? "upper-bound" : "like-for-like";
-  const coverage = coverageOf(
-    lineRanges(line),
-    usable.map((used) => used.trace),
-  );
-  const { standing, explanation } = standingOf(worstOwn, worst, coverage.fraction, guardDb);
-  const remeasure = overMaxima(bounds).map((i) => ({
-    frequencyHz: bounds.frequenciesHz[i] ?? Number.NaN,
-    detector: line.detector,
-    rbwHz: line.rbwHz,
-    lineName: line.name,
-    boundDb: bounds.levelsDb[i] ?? Number.NaN,
-    limitDb: bounds.limitsDb[i] ?? Number.NaN,
-    traceIndex: bounds.traceIndexes[i] ?? 0,
-    partIndex: 0,
+/** What the used traces swept of the line. */
+function coverageOfLine(line: CompiledLine, used: readonly UsedTrace[]): Coverage {
+  const swept = used.map(({ held: { trace, covered, part } }) => ({
+    trace,
+    covered,
+    polarization: part.settings.port === "radiated" ? part.settings.polarization : null,
   }));
+  return coverageOf(line.ranges, swept);
+}
+
+/** Holds traces against one line: margins in dB, frequencies in Hz. */
+export function readLine(
+  line: CompiledLine,
+  lineIndex: number,
+  used: readonly UsedTrace[],
+): LineReading {
+  const byPiece = line.pieces.map((): Worst => ({ own: null, bound: null }));
+  let isInside = false;
+  for (const one of used) {
+    lowestByPiece(line, one).forEach((lowest, i) => {
+      const worst = byPiece[i];
+      const point = pointOf(one.held, lowest);
+      if (!worst || !point) return;
+      if (one.basis === "like-for-like") worst.own = lower(worst.own, point);
+      else worst.bound = lower(worst.bound, point);
+      // Each bench keeps its own guard.
+      if (point.marginDb < one.held.part.guardDb) isInside = true;
+    });
+  }
+  const coverage = coverageOfLine(line, used);
+  const bands = line.pieces.map(({ startHz, stopHz }, i): BandReading => {
+    const decided = decide(byPiece[i] ?? { own: null, bound: null });
+    const share = coveredShare([{ startHz, stopHz }], coverage.gaps);
+    return { startHz, stopHz, ...decided, coverage: used.length > 0 ? share : 0 };
+  });
+  const whole = byPiece.reduce<Worst>(
+    (all, piece) => ({ own: lower(all.own, piece.own), bound: lower(all.bound, piece.bound) }),
+    { own: null, bound: null },
+  );
+  const { worst, basis } = decide(whole);
   return {
-    reading: {
-      lineIndex,
-      name: line.name,
-      detector: line.detector,
-      basis: worst ? basis : "cannot-decide",
-      standing,
-      worst,
-      coverage,
-      bands: [],
-      explanation,
-    },
-    remeasure,
+    lineIndex,
+    name: line.line.name,
+    detector: line.line.detector,
+    basis,
+    worst,
+    coverage,
+    bands,
+    ...standingOf(whole, worst, coverage.fraction, isInside),
   };
 }

@@ -51,6 +51,8 @@ export interface Doubt {
   code: DoubtCode;
   text: string;
   valueDb: number | null;
+  /** Which of the sweeps held together have it; left out when all do, or there is only one. */
+  partIndexes?: number[];
 }
 
 export interface FrequencyRange {
@@ -142,6 +144,8 @@ export interface Reading {
   coverage: Coverage;
   suspects: Suspect[];
   remeasure: RemeasurePoint[];
+  /** Points left out of `remeasure` because there are too many to measure one by one. */
+  remeasureOmitted: number;
   doubts: Doubt[];
   /** Why the sweep cannot be held against this mask at all (unit, distance); else null. */
   notComparable: string | null;

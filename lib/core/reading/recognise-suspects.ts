@@ -5,7 +5,7 @@ import type { FrequencyRange } from "./reading";
  * How far the same line may move from one product to the next with its clock, in parts per
  * million: a plain crystal with its temperature and ageing (common practice, no source).
  */
-export const CLOCK_PPM = 100;
+const CLOCK_PPM = 100;
 
 /** What of a sweep decides how exactly it tells a frequency; null means not stated. */
 export interface Resolution {
@@ -41,11 +41,12 @@ const depthHz = (frequencyHz: number, spread: SpreadSpectrum | null) =>
 
 /**
  * How near in Hz a suspect has to be to be taken for one that is followed from here on:
- * max(2·RBW, 2·step, depth·f, ppm·f). The whole depth of the spread counts whatever its direction,
+ * max(2·RBW, 2·step, depth·f, ppm·f), to the whole Hz and at least 1 Hz. The whole depth of the spread counts whatever its direction,
  * because the peak may have been seen at either end of the stretch that the line wanders over.
  */
 export function recognitionToleranceHz(frequencyHz: number, seenBy: Resolution): number {
-  return Math.max(sharpnessHz(frequencyHz, seenBy), depthHz(frequencyHz, seenBy.spread));
+  const most = Math.max(sharpnessHz(frequencyHz, seenBy), depthHz(frequencyHz, seenBy.spread));
+  return Math.max(1, Math.round(most));
 }
 
 /**

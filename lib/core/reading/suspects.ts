@@ -1,56 +1,30 @@
+import type { CompiledLine } from "../mask/compile-line";
+import { lowestPieceLimit } from "../mask/compile-line";
 import { limitAt } from "../mask/limit-at";
-import type { Mask, MaskLine } from "../mask/mask";
-import { frequencyAt, indexAtOrAfter, pointCount } from "../sweep/axis";
+import { frequencyAt, indexAtOrAfter } from "../sweep/axis";
+import { BLOCK, GROUP } from "../sweep/level-index";
+import type { PeakPlace, SampleRange } from "../sweep/prominent-peaks";
+import { prominentPeaksIn } from "../sweep/prominent-peaks";
 import type { Trace } from "../sweep/trace";
 import { basisOf } from "./basis";
-import type { Suspect } from "./reading";
+import type { HeldTrace } from "./held-trace";
+import { heldLevelDb } from "./lowest-margin";
+import { speaksFor } from "./position";
+import { originOf } from "./prepare-parts";
+import type { Basis, Suspect } from "./reading";
 
-/** Lowest level between each point and the next higher one on its left; NaN parts the trace. */
-function leftBases(levels: Float32Array): Float32Array {
-  const bases = new Float32Array(levels.length);
-  // The points that no later one has overtopped yet, by falling level.
-  const stack = new Uint32Array(levels.length);
-  let size = 0;
-  for (let i = 0; i < levels.length; i += 1) {
-    const level = levels[i] ?? Number.NaN;
-    if (Number.isNaN(level)) {
-      size = 0;
-      continue;
-    }
-    let base = level;
-    for (; size > 0; size -= 1) {
-      const top = stack[size - 1] ?? 0;
-      if ((levels[top] ?? Number.NaN) > level) break;
-      base = Math.min(base, bases[top] ?? base);
-    }
-    bases[i] = base;
-    stack[size] = i;
-    size += 1;
-  }
-  return bases;
+/** Room for the rounding of a bound; far below what a level can show. */
+const SLACK_DB = 1e-9;
+
+interface SuspectRules {
+  prominenceDb: number;
+  /** At most so far under the line. */
+  marginDb: number;
 }
 
-/** Local maxima (middle of a plateau) with prominence in dB of at least `minimumDb`. */
-export function prominentPeaks(
-  levels: Float32Array,
-  minimumDb: number,
-): { index: number; prominenceDb: number }[] {
-  const left = leftBases(levels);
-  const right = leftBases(levels.slice().reverse()).reverse();
-  const peaks: { index: number; prominenceDb: number }[] = [];
-  for (let i = 1; i + 1 < levels.length; i += 1) {
-    const level = levels[i] ?? Number.NaN;
-    if (!((levels[i - 1] ?? Number.NaN) < level)) continue;
-    let end = i;
-    while (levels[end + 1] === level) end += 1;
-    if ((levels[end + 1] ?? Number.NaN) < level) {
-      const index = (i + end) >> 1;
-      const prominenceDb = level - Math.max(left[index] ?? level, right[index] ?? level);
-      if (prominenceDb >= minimumDb) peaks.push({ index, prominenceDb });
-    }
-    i = end;
-  }
-  return peaks;
+interface HeldLine {
+  line: CompiledLine;
+  basis: Basis;
 }
 
 /** Top in Hz of a parabola in dB through a sample and its neighbours. */
@@ -66,72 +40,158 @@ function parabolicHz(trace: Trace, i: number): number {
   return Number.isFinite(shift) ? at + Math.max(-h1, Math.min(h2, shift)) : at;
 }
 
-/** Whether a trace of the line's own detector has a level at a frequency in Hz. */
-function isDecided(traces: readonly Trace[], line: MaskLine, hz: number): boolean {
-  return traces.some((trace) => {
+/** Whether the line's own detector was swept at a frequency in Hz, in the same position. */
+function isDecided(
+  held: readonly HeldTrace[],
+  loose: HeldTrace,
+  { line }: CompiledLine,
+  hz: number,
+): boolean {
+  return held.some(({ trace, part }) => {
     if (trace.kind === "spots" || basisOf(trace, line.detector) !== "like-for-like") return false;
+    if (!speaksFor(part.settings, loose.part.settings)) return false;
     const i = indexAtOrAfter(trace.axis, hz);
     const near = (k: number) => !Number.isNaN(trace.levelsDb[k] ?? Number.NaN);
     return frequencyAt(trace.axis, i) === hz ? near(i) : i > 0 && near(i - 1) && near(i);
   });
 }
 
-/**
- * Suspects of traces in the mask's unit, lowest margin first: maxima of the wanted prominence,
- * one RBW or more from one with a lower margin (by level alone, a peak trace far under its line
- * would hide the average trace that is over), at most `marginDb` under the line.
- * Where the line's own detector was swept, an upper bound of another one is no suspect.
- */
-export function findSuspects(
-  traces: readonly Trace[],
-  mask: Mask,
-  rbwHz: number,
-  prominenceDb: number,
-  marginDb: number,
-): Suspect[] {
-  const candidates: (Suspect & { marginDb: number })[] = [];
-  traces.forEach((trace, traceIndex) => {
-    const lines = mask.lines
-      .map((line) => ({ line, basis: basisOf(trace, line.detector) }))
-      .filter((l) => l.basis !== "cannot-decide");
-    const count = Math.min(pointCount(trace.axis), trace.levelsDb.length);
-    if (trace.kind === "spots" || lines.length === 0) return;
-    for (const peak of prominentPeaks(trace.levelsDb.subarray(0, count), prominenceDb)) {
-      const sampleHz = frequencyAt(trace.axis, peak.index);
-      const levelDb = trace.levelsDb[peak.index] ?? Number.NaN;
-      let found: (Suspect & { marginDb: number }) | null = null;
-      for (const { line, basis } of lines) {
-        const limitDb = limitAt(line, sampleHz);
-        if (basis === "upper-bound" && isDecided(traces, line, sampleHz)) continue;
-        if (limitDb === null || (found && found.marginDb <= limitDb - levelDb)) continue;
-        found = {
-          number: 0,
-          frequencyHz: parabolicHz(trace, peak.index),
-          sampleHz,
-          levelDb,
-          limitDb,
-          marginDb: limitDb - levelDb,
-          prominenceDb: peak.prominenceDb,
-          lineName: line.name,
-          basis,
-          traceIndex,
-          partIndex: 0,
-        };
-      }
-      if (found && found.marginDb <= marginDb) candidates.push(found);
+/** No limit of these lines between two frequencies in Hz lies below; +Infinity without a limit. */
+function lowestLimit(lines: readonly HeldLine[], fromHz: number, toHz: number): number {
+  let lowest = Number.POSITIVE_INFINITY;
+  for (const { line } of lines) {
+    for (const piece of line.pieces) {
+      // A little wider than the piece, for samples taken to lie on its edges.
+      if (piece.stopHz * (1 + 1e-9) < fromHz || piece.startHz * (1 - 1e-9) > toHz) continue;
+      const from = Math.min(piece.stopHz, Math.max(piece.startHz, fromHz));
+      const to = Math.max(piece.startHz, Math.min(piece.stopHz, toHz));
+      lowest = Math.min(lowest, lowestPieceLimit(piece, from, to));
     }
-  });
+  }
+  return lowest;
+}
+
+/**
+ * Blocks of samples that may hold a level at most `marginDb` under one of the lines, each with the
+ * least level that can.
+ */
+function nearRanges(held: HeldTrace, lines: readonly HeldLine[], marginDb: number): SampleRange[] {
+  const { axis } = held.trace;
+  const { blockHighDb, groupHighDb } = held.levels;
+  const ranges: SampleRange[] = [];
+  const leastDb = (from: number, to: number) =>
+    lowestLimit(lines, frequencyAt(axis, from), frequencyAt(axis, to - 1)) -
+    held.offsetDb -
+    marginDb -
+    SLACK_DB;
+  const size = BLOCK * GROUP;
+  for (let i = held.from; i < held.to;) {
+    const group = (i / size) | 0;
+    const groupEnd = Math.min(held.to, (group + 1) * size);
+    const groupLeast = leastDb(i, groupEnd);
+    const isNear = (groupHighDb[group] as number) >= groupLeast;
+    for (let k = i; isNear && k < groupEnd;) {
+      const block = (k / BLOCK) | 0;
+      const end = Math.min(groupEnd, (block + 1) * BLOCK);
+      const high = blockHighDb[block] as number;
+      // What is too low for the whole group is so for each of its blocks.
+      const least = high >= groupLeast ? leastDb(k, end) : Number.POSITIVE_INFINITY;
+      if (high >= least) ranges.push({ from: k, to: end, leastDb: least });
+      k = end;
+    }
+    i = groupEnd;
+  }
+  return ranges;
+}
+
+type Candidate = Suspect & { marginDb: number };
+
+/** The peak held against the line that it comes nearest to; null where none decides it. */
+function holdPeak(
+  all: readonly HeldTrace[],
+  held: HeldTrace,
+  lines: readonly HeldLine[],
+  peak: PeakPlace,
+): Candidate | null {
+  const sampleHz = frequencyAt(held.trace.axis, peak.index);
+  const levelDb = heldLevelDb(held, peak.index);
+  const { partIndex, traceIndex } = originOf(held, peak.index);
+  let found: Candidate | null = null;
+  for (const { line, basis } of lines) {
+    const limitDb = limitAt(line.line, sampleHz);
+    if (limitDb === null || (found && found.marginDb <= limitDb - levelDb)) continue;
+    if (basis === "upper-bound" && isDecided(all, held, line, sampleHz)) continue;
+    found = {
+      number: 0,
+      frequencyHz: parabolicHz(held.trace, peak.index),
+      sampleHz,
+      levelDb,
+      limitDb,
+      marginDb: limitDb - levelDb,
+      prominenceDb: peak.prominenceDb,
+      lineName: line.line.name,
+      basis,
+      traceIndex,
+      partIndex,
+    };
+  }
+  return found;
+}
+
+function candidatesOf(
+  all: readonly HeldTrace[],
+  held: HeldTrace,
+  lines: readonly CompiledLine[],
+  rules: SuspectRules,
+): Candidate[] {
+  const own = lines
+    .map((line): HeldLine => ({ line, basis: basisOf(held.trace, line.line.detector) }))
+    .filter(({ basis }) => basis !== "cannot-decide");
+  if (held.trace.kind === "spots" || own.length === 0) return [];
+  const isNear = (i: number) => {
+    const hz = frequencyAt(held.trace.axis, i);
+    return own.some(({ line }) => {
+      const limitDb = limitAt(line.line, hz);
+      return limitDb !== null && limitDb - heldLevelDb(held, i) <= rules.marginDb;
+    });
+  };
+  return nearRanges(held, own, rules.marginDb)
+    .flatMap((range) => prominentPeaksIn(held.levels, range, rules.prominenceDb, isNear))
+    .flatMap((peak) => {
+      const found = holdPeak(all, held, own, peak);
+      return found && found.marginDb <= rules.marginDb ? [found] : [];
+    });
+}
+
+/** Keeps those that no other of lower margin lies nearer to than one bandwidth in Hz. */
+function thinOut(candidates: readonly Candidate[], rbwHz: number): Candidate[] {
   const taken = new Map<number, number[]>();
   const cell = (hz: number) => (rbwHz > 0 ? Math.floor(hz / rbwHz) : hz);
   const reach = rbwHz > 0 ? [-1, 0, 1] : [0];
-  return candidates
-    .sort((a, b) => a.marginDb - b.marginDb || b.levelDb - a.levelDb)
-    .filter(({ sampleHz }) => {
-      const own = cell(sampleHz);
-      const near = reach.flatMap((d) => taken.get(own + d) ?? []);
-      if (near.some((hz) => hz === sampleHz || Math.abs(hz - sampleHz) < rbwHz)) return false;
-      taken.set(own, [...(taken.get(own) ?? []), sampleHz]);
-      return true;
-    })
-    .map((suspect, i) => ({ ...suspect, number: i + 1 }));
+  return candidates.filter(({ sampleHz }) => {
+    const own = cell(sampleHz);
+    const near = reach.flatMap((d) => taken.get(own + d) ?? []);
+    if (near.some((hz) => hz === sampleHz || Math.abs(hz - sampleHz) < rbwHz)) return false;
+    taken.set(own, [...(taken.get(own) ?? []), sampleHz]);
+    return true;
+  });
+}
+
+/**
+ * Suspects of the held traces, lowest margin first: maxima of the wanted prominence, one RBW or
+ * more from one with a lower margin (by level alone, a peak trace far under its line would hide
+ * the average trace that is over), at most `marginDb` under the line. Where the line's own
+ * detector was swept, an upper bound of another one is no suspect. `rbwHz` is the widest of the
+ * sweeps', 0 when none is stated.
+ */
+export function findSuspects(
+  held: readonly HeldTrace[],
+  lines: readonly CompiledLine[],
+  rbwHz: number,
+  rules: SuspectRules,
+): Suspect[] {
+  const candidates = held
+    .flatMap((one) => candidatesOf(held, one, lines, rules))
+    .sort((a, b) => a.marginDb - b.marginDb || b.levelDb - a.levelDb || a.sampleHz - b.sampleHz);
+  return thinOut(candidates, rbwHz).map((suspect, i) => ({ ...suspect, number: i + 1 }));
 }

@@ -36,6 +36,13 @@ export function indexAtOrAfter(axis: FrequencyAxis, hz: number): number {
   return low;
 }
 
+/** Index of the first point above a frequency; the count when there is none. */
+export function indexAfter(axis: FrequencyAxis, hz: number): number {
+  let i = indexAtOrAfter(axis, hz);
+  while (i < pointCount(axis) && frequencyAt(axis, i) <= hz) i += 1;
+  return i;
+}
+
 /** Median spacing in Hz; NaN with fewer than two points. */
 export function medianStepHz(axis: FrequencyAxis): number {
   if (axis.kind === "regular") return axis.count > 1 ? axis.stepHz : Number.NaN;

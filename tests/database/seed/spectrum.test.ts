@@ -5,7 +5,7 @@ import { makeRandom } from "@/db/seed/spectra/random";
 import type { SeedDetector, SpectrumSetup, Treatment } from "@/db/seed/spectra/setup";
 import { makeSpectrum } from "@/db/seed/spectra/spectrum";
 import { INPUT_ATTENUATOR, PREAMPLIFIER, SHORT_CABLE } from "@/db/seed/spectra/transducers";
-import { prominentPeaks } from "@/lib/core/reading/suspects";
+import { prominentPeaks } from "@/lib/core/sweep/prominent-peaks";
 import { AT_REST, FLAT_SETUP, highest } from "./flat-setup";
 
 const scrambling = scrambled(AT_REST, 1600);

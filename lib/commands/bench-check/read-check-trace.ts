@@ -3,6 +3,7 @@ import type { CheckLine } from "@/lib/core/bench/bench-check";
 import { CHECK_PROMINENCE_DB, findCheckLines } from "@/lib/core/bench/compare-check";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
 import type { Trace } from "@/lib/core/sweep/trace";
+import { formatFrequency } from "@/lib/core/units/format";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 import { parseSweepFile } from "@/lib/formats/parse-sweep-file";
 import { CommandError } from "../result";
@@ -23,6 +24,9 @@ export function readCheckTrace(values: RecordBenchCheckInput): Trace {
     const why = reason ?? questions.map((question) => question.why).join(" ");
     throw refuse("file", line === null ? why : `Line ${line}: ${why}`);
   }
+  const { rbwHz } = parsed.preview;
+  if (rbwHz !== null && Math.abs(rbwHz - values.rbwHz) > rbwHz / 100)
+    throw refuse("rbwHz", `The file itself states an RBW of ${formatFrequency(rbwHz)}.`);
   const { traces } = parsed;
   const names = traces.map(({ name }) => `"${name}"`).join(", ");
   if (traceIndex === null && traces.length > 1)

@@ -194,6 +194,16 @@ describe("recordBenchCheck", () => {
     expect(check?.content.lines.map((line) => line.frequencyHz)).toEqual([120e6]);
   });
 
+  test("refuses an RBW that the file itself contradicts, and takes one that it rounds", async () => {
+    const { ctx, benchId } = await makeLoft();
+    const stating = (rbw: string) => text(`RBW,${rbw}\n${new TextDecoder().decode(combOf())}`);
+    const error = await refusalOf(recordBenchCheck(ctx, referenceInput(benchId, stating("9 kHz"))));
+    expect(error.fieldErrors).toEqual({ rbwHz: "The file itself states an RBW of 9.000 kHz." });
+    expect(await counts(ctx.teamId)).toEqual({ checks: 0, files: 0 });
+    const rounded = recordBenchCheck(ctx, referenceInput(benchId, stating("119.9 kHz")));
+    await expect(rounded).resolves.toMatchObject({ driftWorstDb: null });
+  });
+
   test("asks which trace it is when the file has several", async () => {
     const { ctx, benchId } = await makeLoft();
     const rows = Array.from(

@@ -5,6 +5,7 @@ import { archiveBenchCheck } from "@/lib/commands/bench-check/archive-bench-chec
 import { recordBenchCheck } from "@/lib/commands/bench-check/record-bench-check";
 import { checkOfDay } from "@/lib/queries/bench-check/check-of-day";
 import { listBenchChecks } from "@/lib/queries/bench-check/list-bench-checks";
+import { readCheckFile } from "@/lib/queries/bench-check/read-check-file";
 import { readBenchCheck } from "@/lib/queries/bench-check/read-bench-check";
 import { checkInput, combOf, referenceInput } from "../../commands/bench-check/arrange";
 import type { TestDatabase } from "../../support/database";
@@ -101,6 +102,21 @@ describe("readBenchCheck", () => {
     const check = await readBenchCheck(ctx, benchId, checkId);
     expect(check?.cautions).toHaveLength(2);
     expect(check?.cautions[0]).toContain("The step of the check, 10.00 MHz");
+  });
+});
+
+describe("readCheckFile", () => {
+  test("hands out the file byte for byte, to the team alone, and never one that has changed", async () => {
+    const { ctx, reference } = await makeChecks();
+    const { checkId } = reference;
+    const file = await readCheckFile(ctx, checkId);
+    expect(file?.fileName).toBe("comb.csv");
+    expect(Buffer.from(file?.bytes ?? []).equals(Buffer.from(combOf()))).toBe(true);
+    const foreign = { ...(await makeMember(database, "engineer")), files: ctx.files };
+    expect(await readCheckFile(foreign, checkId)).toBeNull();
+    expect(await readCheckFile(ctx, "none")).toBeNull();
+    const rotten = { ...ctx, files: { ...ctx.files, get: async () => new Uint8Array([1]) } };
+    await expect(readCheckFile(rotten, checkId)).rejects.toThrow("has changed in storage");
   });
 });
 

@@ -6,6 +6,7 @@ import { MaskLines } from "@/components/masks/mask-lines";
 import { MaskRevisionList } from "@/components/masks/mask-revision-list";
 import { PORT_LABELS } from "@/components/masks/mask-words";
 import { ProvenanceMark } from "@/components/masks/provenance-mark";
+import { RecomputationProgress } from "@/components/masks/recomputation-progress";
 import { ButtonLink } from "@/components/ui/button";
 import { Facts } from "@/components/ui/facts";
 import { PageHead } from "@/components/ui/page-head";
@@ -14,7 +15,8 @@ import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 import { readMask } from "@/lib/queries/mask/read-mask";
-import { bringMaskBack, duplicateMask, putMaskAway } from "../actions";
+import { readRecomputation } from "@/lib/queries/mask/read-recomputation";
+import { bringMaskBack, duplicateMask, putInForceAgain, putMaskAway } from "../actions";
 import type { SearchParams } from "../search-params";
 import { readRevisionParam } from "../search-params";
 
@@ -30,6 +32,7 @@ export default async function MaskPage(props: MaskPageProps) {
   const asked = readRevisionParam((await props.searchParams)["revision"]);
   const ctx = await currentContext();
   const found = await readMask(ctx, maskId);
+  const recomputation = await readRecomputation(ctx, maskId);
   if (!found) notFound();
   const { current, pending } = found;
   const shown = asked === null ? current : found.revisions.find((r) => r.revision === asked);
@@ -88,11 +91,13 @@ export default async function MaskPage(props: MaskPageProps) {
           </>
         }
       />
-      {pending ? (
-        <p role="status" className="mb-6 border-l-4 border-l-deep bg-sheet px-3 py-2">
-          Revision {pending.revision} is being put in force: sweeps are being held against it. Until
-          that is done revision {current.revision} counts everywhere.
-        </p>
+      {recomputation ? (
+        <RecomputationProgress
+          maskId={found.id}
+          initial={recomputation}
+          inForceRevision={current.revision}
+          tryAgain={mayWrite ? putInForceAgain : undefined}
+        />
       ) : null}
       {mask.provenance === "from memory" ? (
         <p className="mb-6 border-l-4 border-l-shoal bg-shoal-bed px-3 py-2 text-shoal">

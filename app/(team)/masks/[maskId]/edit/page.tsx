@@ -6,7 +6,7 @@ import { PageHead } from "@/components/ui/page-head";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { readMask } from "@/lib/queries/mask/read-mask";
-import { duplicateMask, saveMask } from "../../actions";
+import { duplicateMask, foreseeRevision, saveMask } from "../../actions";
 
 export const metadata: Metadata = { title: "Edit mask" };
 
@@ -40,6 +40,7 @@ export default async function EditMaskPage(props: { params: Promise<{ maskId: st
       ) : (
         <MaskEditor
           save={saveMask}
+          foresee={foreseeRevision}
           edited={{ maskId: found.id, revision: current.revision, mask: current.content }}
         />
       )}

@@ -1,92 +1,90 @@
 "use client";
 
 import { useMemo } from "react";
-import { BASIS_LABELS } from "@/components/readings/basis-labels";
-import type { DataColumn } from "@/components/ui/data-table";
+import type { ShownSuspect, SuspectTableFilter } from "@/components/suspects/filter-suspects";
+import type { Act } from "@/components/suspects/outcome";
+import { SuspectTableFilterBar } from "@/components/suspects/suspect-table-filter";
+import { ActionButton } from "@/components/ui/action-button";
 import { DataTable } from "@/components/ui/data-table";
 import { EmptyState } from "@/components/ui/empty-state";
 import { Section } from "@/components/ui/section";
-import type { Suspect } from "@/lib/core/reading/reading";
-import { formatFrequency, formatLevel, formatMargin } from "@/lib/core/units/format";
 import type { LevelUnit } from "@/lib/core/units/level-units";
-import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
+import { ambientColumns, followColumn, readingColumns } from "./suspect-columns";
 
 interface SuspectTableProps {
-  suspects: Suspect[];
+  /** Every suspect of the reading, and those that the filter leaves. */
+  all: ShownSuspect[];
+  shown: ShownSuspect[];
+  filter: SuspectTableFilter;
+  onFilter: (filter: SuspectTableFilter) => void;
   stepHz: number | null;
   unit: LevelUnit;
   exportName: string;
   highlighted: number | null;
   onHighlight: (number: number | null) => void;
-}
-
-function columnsFor(unit: LevelUnit, stepHz: number | null): DataColumn<Suspect>[] {
-  return [
-    { id: "number", header: "No.", mono: true, align: "right", value: (s) => s.number },
-    {
-      id: "frequency",
-      header: "Frequency",
-      mono: true,
-      align: "right",
-      value: (s) => s.frequencyHz,
-      cell: (s) => formatFrequency(s.frequencyHz, stepHz ?? undefined),
-    },
-    {
-      id: "level",
-      header: `Level, ${LEVEL_UNIT_LABELS[unit]}`,
-      align: "right",
-      mono: true,
-      value: (s) => Number(s.levelDb.toFixed(2)),
-      cell: (s) => formatLevel(s.levelDb, unit).split(" ")[0],
-    },
-    {
-      id: "limit",
-      header: `Limit, ${LEVEL_UNIT_LABELS[unit]}`,
-      align: "right",
-      mono: true,
-      value: (s) => (s.limitDb === null ? null : Number(s.limitDb.toFixed(2))),
-      cell: (s) => (s.limitDb === null ? "" : formatLevel(s.limitDb, unit).split(" ")[0]),
-    },
-    {
-      id: "margin",
-      header: "Margin",
-      align: "right",
-      mono: true,
-      value: (s) => (s.marginDb === null ? null : Number(s.marginDb.toFixed(2))),
-      cell: (s) => (
-        <span className={(s.marginDb ?? 0) < 0 ? "text-aground" : ""}>
-          {formatMargin(s.marginDb)}
-        </span>
-      ),
-    },
-    { id: "line", header: "Mask line", value: (s) => s.lineName },
-    { id: "basis", header: "Basis", value: (s) => BASIS_LABELS[s.basis] },
-  ];
+  /** The ambient of the day was held beside the reading. */
+  hasAmbient: boolean;
+  /** It is known which suspects the program follows. */
+  hasFollowed: boolean;
+  /** Left out when the reader may not follow suspects. */
+  follow?: ((number: number) => ReturnType<Act>) | undefined;
+  followNear?: Act | undefined;
 }
 
 /** Peaks worth following, the lowest margin first. */
 export function SuspectTable(props: SuspectTableProps) {
-  const { suspects, stepHz, unit, exportName, highlighted, onHighlight } = props;
-  const columns = useMemo(() => columnsFor(unit, stepHz), [unit, stepHz]);
+  const { all, shown, stepHz, unit, exportName, highlighted, onHighlight } = props;
+  const { hasAmbient, hasFollowed, follow, followNear } = props;
+  const columns = useMemo(
+    () => [
+      ...readingColumns(unit, stepHz),
+      ...(hasAmbient ? ambientColumns(unit) : []),
+      ...(hasFollowed || follow ? [followColumn(follow)] : []),
+    ],
+    [unit, stepHz, hasAmbient, hasFollowed, follow],
+  );
   return (
     <Section
       title="Suspects"
       lead="Peaks that stand 6 dB or more out of their surroundings, at most 20 dB under the mask."
+      actions={
+        followNear && all.length > 0 ? (
+          <ActionButton action={followNear}>Follow all over or inside guard</ActionButton>
+        ) : undefined
+      }
     >
-      {suspects.length === 0 ? (
+      {all.length === 0 ? (
         <EmptyState>No peak stands out within 20 dB of this mask.</EmptyState>
       ) : (
-        <div className="max-h-[36rem] overflow-y-auto">
-          <DataTable
-            label="Suspects"
-            columns={columns}
-            rows={suspects}
-            rowKey={(suspect) => String(suspect.number)}
-            exportName={exportName}
-            highlighted={highlighted === null ? null : String(highlighted)}
-            onHighlight={(key) => onHighlight(key === null ? null : Number(key))}
+        <>
+          <SuspectTableFilterBar
+            {...{ all, shown }}
+            filter={props.filter}
+            onFilter={props.onFilter}
           />
-        </div>
+          {shown.length === 0 ? (
+            <EmptyState>No suspect matches.</EmptyState>
+          ) : (
+            <div className="max-h-[36rem] overflow-y-auto">
+              <DataTable
+                label="Suspects"
+                columns={columns}
+                rows={shown}
+                rowKey={(suspect) => String(suspect.number)}
+                exportName={exportName}
+                highlighted={highlighted === null ? null : String(highlighted)}
+                onHighlight={(key) => onHighlight(key === null ? null : Number(key))}
+              />
+            </div>
+          )}
+          {hasAmbient ? (
+            <p className="mt-2 text-sm text-ink-soft">
+              Likely ambient: the ambient lies within 3 dB of the suspect. Without ambient is 10
+              log₁₀(10^(T/10) − 10^(A/10)), an estimate for noise-like signals that changes no
+              margin; it stays empty where the ambient is as high as the suspect.
+            </p>
+          ) : null}
+        </>
       )}
     </Section>
   );

@@ -2,7 +2,11 @@
 
 import { useMemo, useState } from "react";
 import { CoastChart } from "@/components/charts/coast-chart";
+import type { SuspectFollowMark, SuspectTableFilter } from "@/components/suspects/filter-suspects";
+import { filterSuspects, joinSuspects } from "@/components/suspects/filter-suspects";
+import type { Act } from "@/components/suspects/outcome";
 import type { Mask } from "@/lib/core/mask/mask";
+import type { SuspectAmbient } from "@/lib/core/reading/ambient-check";
 import type { Suspect } from "@/lib/core/reading/reading";
 import type { KnownClock } from "./clock-harmonics";
 import { harmonicsIn } from "./clock-harmonics";
@@ -21,6 +25,14 @@ interface SweepChartProps {
   guardDb: number;
   /** Known clocks of the build; their harmonics are marked when switched on. */
   clocks: KnownClock[];
+  /** What the ambient sweeps of the day say beside each suspect; left out without any. */
+  ambient?: SuspectAmbient[] | undefined;
+  /** Which suspects the program follows; left out where nothing is followed. */
+  followed?: SuspectFollowMark[] | undefined;
+  /** Follows one suspect by its number; left out when the reader may not. */
+  follow?: ((number: number) => ReturnType<Act>) | undefined;
+  /** Follows every suspect over or inside guard; left out when the reader may not. */
+  followNear?: Act | undefined;
 }
 
 /** So many of the worst suspects in view carry a buoy; zooming in shows the next ones. */
@@ -42,12 +54,19 @@ export function SweepChart(props: SweepChartProps) {
   const all = props.traces;
   const shown = useMemo(() => all.filter((t) => !hidden.includes(idOf(t))), [all, hidden]);
   const { traces, state } = useTraceViews(shown, view, extent);
+  const [filter, setFilter] = useState<SuspectTableFilter>({ text: "", hidesAmbient: false });
+  const listed = useMemo(
+    () => joinSuspects(suspects, props.ambient, props.followed),
+    [suspects, props.ambient, props.followed],
+  );
+  // What the table hides has no buoy either, so that the two show the same numbers.
+  const left = useMemo(() => filterSuspects(listed, filter, stepHz), [listed, filter, stepHz]);
   const marked = useMemo(
     () =>
-      suspects
+      left
         .filter((s) => s.frequencyHz >= view.fromHz && s.frequencyHz <= view.toHz)
         .slice(0, MOST_BUOYS),
-    [suspects, view],
+    [left, view],
   );
   return (
     <>
@@ -100,12 +119,19 @@ export function SweepChart(props: SweepChartProps) {
       />
       {mask ? (
         <SuspectTable
-          suspects={suspects}
+          all={listed}
+          shown={left}
+          filter={filter}
+          onFilter={setFilter}
           stepHz={stepHz}
           unit={mask.unit}
           exportName={`${name} suspects`}
           highlighted={highlighted}
           onHighlight={setHighlighted}
+          hasAmbient={(props.ambient ?? []).length > 0}
+          hasFollowed={props.followed !== undefined}
+          follow={props.follow}
+          followNear={props.followNear}
         />
       ) : null}
     </>

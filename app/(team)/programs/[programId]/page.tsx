@@ -5,6 +5,7 @@ import { TrendChart } from "@/components/charts/trend-chart";
 import { BuildForm } from "@/components/programs/build-form";
 import { BuildList } from "@/components/programs/build-list";
 import { BigMargin } from "@/components/readings/big-margin";
+import { SuspectList } from "@/components/suspects/suspect-list";
 import { ButtonLink } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
 import { PageHead } from "@/components/ui/page-head";
@@ -17,6 +18,9 @@ import { newestStanding, unreachedMasks } from "@/lib/queries/program/load-stand
 import type { MaskStanding } from "@/lib/queries/sweep/load-readings";
 import type { ProgramDetail } from "@/lib/queries/program/read-program";
 import { readProgram } from "@/lib/queries/program/read-program";
+import type { SuspectSummary } from "@/lib/queries/suspect/list-suspects";
+import { listOpenSuspects } from "@/lib/queries/suspect/list-suspects";
+import { suspectRows } from "../../suspects/prepare-rows";
 import { addBuild } from "../actions";
 
 export const metadata: Metadata = { title: "Program" };
@@ -26,6 +30,7 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
   const ctx = await currentContext();
   const program = await readProgram(ctx, programId);
   if (!program) notFound();
+  const open = await listOpenSuspects(ctx, programId);
   const { trend } = program;
   const newest = newestStanding(trend);
   const missing = newest ? unreachedMasks(trend, newest.build) : [];
@@ -93,6 +98,7 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
           <EmptyState>No builds yet.</EmptyState>
         )}
       </Section>
+      <OpenSuspects program={program} suspects={open} />
       <MilestoneList program={program} />
       {mayWrite ? (
         <Section title="Add a build">
@@ -135,6 +141,38 @@ function seriesOf({ id: programId, trend }: ProgramDetail) {
       ];
     }),
   }));
+}
+
+const MOST_OPEN = 8;
+
+function OpenSuspects(props: { program: ProgramDetail; suspects: SuspectSummary[] }) {
+  const { program, suspects } = props;
+  const hasMore = suspects.length > MOST_OPEN;
+  return (
+    <Section
+      title="Suspects still open"
+      lead="The worst margin of the newest build that was swept there comes first."
+      actions={
+        <Link
+          href={`/suspects?program=${program.id}${hasMore ? "&state=open" : ""}`}
+          className="text-deep underline"
+        >
+          {hasMore ? `All ${suspects.length} that are open` : "All followed suspects"}
+        </Link>
+      }
+    >
+      {suspects.length > 0 ? (
+        <SuspectList
+          rows={suspectRows(suspects.slice(0, MOST_OPEN))}
+          exportName={`${program.name} open suspects`}
+        />
+      ) : (
+        <EmptyState>
+          No suspect is followed that is still open. Follow one from the table of a sweep.
+        </EmptyState>
+      )}
+    </Section>
+  );
 }
 
 function MilestoneList({ program }: { program: ProgramDetail }) {

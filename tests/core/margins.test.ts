@@ -1,161 +1,182 @@
 import fc from "fast-check";
-import { describe, expect, it } from "vitest";
-import type { Mask, MaskSegment } from "../../lib/core/mask/mask";
-import { readSweep } from "../../lib/core/reading/read-sweep";
-import type { MeasurementSettings } from "../../lib/core/sweep/settings";
-import type { FrequencyAxis, Trace } from "../../lib/core/sweep/trace";
-import { randomFrom } from "../support/traces";
-import { readByHand } from "./margins-by-hand";
-import { makeMarginCase } from "./margins-cases";
+import { describe, expect, test } from "vitest";
+import type { Mask } from "@/lib/core/mask/mask";
+import { readSweep } from "@/lib/core/reading/read-sweep";
+import { readTogether } from "@/lib/core/reading/read-together";
+import type { Reading, Standing } from "@/lib/core/reading/reading";
+import type { SweepPart } from "@/lib/core/reading/sweep-part";
+import type { FrequencyAxis, Trace } from "@/lib/core/sweep/trace";
+import { listed, maskLine, maskOf, scan, segment, SETTINGS } from "./hand-worked/case";
+import { anyCase } from "./margins-arbitraries";
+import { isInPosition, readByHand, type LineByHand } from "./margins-by-hand";
 
-const settings = {
-  rbwHz: 9e3,
-  rbwKind: "6dB",
-  distanceM: null,
-  port: "mains",
-} as Partial<MeasurementSettings> as MeasurementSettings;
+const firstHz = (axis: FrequencyAxis) =>
+  axis.kind === "regular" ? axis.startHz : axis.frequenciesHz[0]!;
+const lastHz = (axis: FrequencyAxis) =>
+  axis.kind === "regular"
+    ? axis.startHz + (axis.count - 1) * axis.stepHz
+    : axis.frequenciesHz.at(-1)!;
 
-const level = fc.double({ min: -20, max: 120, noNaN: true });
-const segment = fc
-  .tuple(
-    fc.double({ min: 1e5, max: 9e5, noNaN: true }),
-    fc.double({ min: 1.1, max: 3, noNaN: true }),
-    level,
-    level,
-  )
-  .map(([startHz, ratio, startDb, stopDb]) => ({
-    startHz,
-    stopHz: startHz * ratio,
-    startDb,
-    stopDb,
-    interpolation: "log" as const,
-  }));
-const pair = fc.record({
-  segments: fc.array(segment, { minLength: 1, maxLength: 4 }),
-  levels: fc.array(level, { minLength: 2, maxLength: 60 }),
-});
-
-function read(
-  segments: MaskSegment[],
-  levels: number[],
-  guardDb = 0,
-  axis: FrequencyAxis = { kind: "regular", startHz: 1e5, stepHz: 4e4, count: levels.length },
-) {
-  const line = { name: "l", detector: "peak" as const, rbwHz: null, rbwKind: null, segments };
-  const mask = {
-    port: "mains",
-    unit: "dBuV",
-    distanceM: null,
-    provenance: "team",
-    lines: [line],
-  } as Partial<Mask> as Mask;
-  const trace: Trace = {
-    name: "t",
-    kind: "scan",
-    detector: "peak",
-    hold: "none",
-    unit: "dBuV",
-    axis,
-    levelsDb: Float32Array.from(levels),
-  };
-  return readSweep({ traces: [trace], settings, mask, guardDb }).lines[0];
+/** Whether one scan goes on where another ends, which counts as one sweep and is tested apart. */
+function touches(traces: readonly Trace[]): boolean {
+  return traces.some((a) =>
+    traces.some((b) => {
+      const gap = firstHz(b.axis) - lastHz(a.axis);
+      return a !== b && gap > 0 && gap <= 120e3;
+    }),
+  );
 }
 
-it("agrees with margins worked out by hand on 1,000 random pairs of sweep and mask", () => {
-  const random = randomFrom(2026);
-  const seen = { none: 0, own: 0, bound: 0, over: 0, boundOver: 0, restated: 0, ownBesideBound: 0 };
-  for (let i = 0; i < 1000; i += 1) {
-    const input = makeMarginCase(random);
-    const reading = readSweep(input);
-    expect(reading.notComparable, `pair ${i}`).toBeNull();
-    const byHand = readByHand(input);
-    byHand.forEach((expected, k) => {
-      const at = `pair ${i}, line ${k + 1}`;
-      const found = reading.lines[k];
-      if (!expected) {
-        expect(found?.worst, at).toBeNull();
-        expect(found?.standing, at).toBe("undecided");
-        seen.none += 1;
-        return;
+function standingByHand({ worst, isOver, isInside, coverage }: LineByHand): Standing {
+  if (isOver) return "over";
+  if (!worst || worst.marginDb < 0 || coverage < 1 - 1e-12) return "undecided";
+  return isInside ? "inside-guard" : "clear";
+}
+
+const seen = { none: 0, own: 0, bound: 0, over: 0, boundOver: 0, clear: 0, partly: 0, inside: 0 };
+
+function compare(reading: Reading, parts: SweepPart[], mask: Mask): void {
+  expect(reading.notComparable).toBeNull();
+  readByHand(parts, mask).forEach((expected, k) => {
+    const found = reading.lines[k]!;
+    const { worst } = expected;
+    expect(found.standing).toBe(standingByHand(expected));
+    expect(found.coverage.fraction).toBeCloseTo(expected.coverage, 9);
+    expect(found.basis).toBe(worst?.basis ?? "cannot-decide");
+    if (!worst) expect(found.worst).toBeNull();
+    else {
+      expect(Math.abs(found.worst!.marginDb - worst.marginDb)).toBeLessThan(1e-6);
+      expect(found.worst!.frequencyHz).toBe(worst.frequencyHz);
+    }
+    // A spot at the points listed, in their positions, would speak for every bound over the line.
+    const listedHz = reading.remeasure.filter((r) => r.lineName === found.name);
+    for (const point of listedHz)
+      expect(expected.boundsOver.map((b) => b.hz)).toContain(point.frequencyHz);
+    if (reading.remeasureOmitted === 0)
+      for (const { hz, reachHz, part } of expected.boundsOver) {
+        const near = listedHz.filter((r) => Math.abs(r.frequencyHz - hz) <= reachHz);
+        expect(near.some((r) => isInPosition(parts[r.partIndex]!, part))).toBe(true);
       }
-      expect(Math.abs((found?.worst?.marginDb ?? NaN) - expected.marginDb), at).toBeLessThan(1e-6);
-      expect(found?.worst?.frequencyHz, at).toBe(expected.frequencyHz);
-      expect(found?.basis, at).toBe(expected.basis);
-      expect(found?.standing === "over", at).toBe(expected.isOver);
-      const isBound = expected.basis === "upper-bound";
-      if (isBound && expected.marginDb < 0) expect(found?.standing, at).toBe("undecided");
-      seen[isBound ? "bound" : "own"] += 1;
-      if (expected.isOver) seen.over += 1;
-      if (isBound && expected.marginDb < 0) seen.boundOver += 1;
-      if (input.traces[0]?.unit !== input.mask.unit) seen.restated += 1;
-      if (!isBound && input.traces.some((t) => t.detector !== found?.detector))
-        seen.ownBesideBound += 1;
+    seen[worst ? (worst.basis === "like-for-like" ? "own" : "bound") : "none"] += 1;
+    if (expected.isOver) seen.over += 1;
+    if (expected.boundsOver.length > 0) seen.boundOver += 1;
+    if (found.standing === "clear") seen.clear += 1;
+    if (found.standing === "inside-guard") seen.inside += 1;
+    if (expected.coverage > 0 && expected.coverage < 1) seen.partly += 1;
+  });
+}
+
+describe("against loops over every sample and segment (measurement.md §4)", () => {
+  test("one sweep: margin, frequency, basis, standing, coverage and what to measure again", () => {
+    fc.assert(
+      fc.property(anyCase(), (input) => {
+        fc.pre(!touches(input.traces));
+        compare(readSweep(input), [input], input.mask);
+      }),
+      { numRuns: 500, seed: 2026 },
+    );
+    // Every kind of line was among them, and not just once or twice.
+    for (const [kind, count] of Object.entries(seen)) expect(count, kind).toBeGreaterThan(2);
+  });
+
+  test("several sweeps in positions of their own, each with its own guard and bandwidth", () => {
+    const position = fc.record({
+      polarization: fc.constantFrom("horizontal" as const, "vertical" as const),
+      heightM: fc.constantFrom(null, 1, 2),
+      azimuthDeg: fc.constantFrom(null, 0, 90),
+      guardDb: fc.constantFrom(0, 2, 6),
     });
-  }
-  // Every kind of pair was among them, not once or twice.
-  for (const [kind, count] of Object.entries(seen)) expect(count, kind).toBeGreaterThan(100);
+    fc.assert(
+      fc.property(
+        anyCase({ isOneUnit: true }),
+        fc.array(position, { minLength: 3, maxLength: 3 }),
+        fc.boolean(),
+        (input, positions, isRadiated) => {
+          fc.pre(!touches(input.traces));
+          const port = isRadiated ? ("radiated" as const) : ("mains" as const);
+          const parts = input.traces.map((trace, i): SweepPart => {
+            const { guardDb, polarization, ...place } = positions[i]!;
+            const settings = { ...input.settings, ...place, port };
+            return {
+              traces: [trace],
+              guardDb,
+              settings: { ...settings, polarization: isRadiated ? polarization : null },
+            };
+          });
+          const mask = { ...input.mask, port };
+          compare(readTogether(parts, mask), parts, mask);
+        },
+      ),
+      { numRuns: 400, seed: 2027 },
+    );
+  });
+
+  test("sweeps of some ten thousand points, where a fast reading leaves most of them out", () => {
+    fc.assert(
+      fc.property(
+        fc.integer({ min: 8000, max: 13_000 }),
+        fc.array(fc.tuple(fc.nat({ max: 7999 }), fc.integer({ min: 0, max: 400 })), {
+          minLength: 1,
+          maxLength: 12,
+        }),
+        fc.array(fc.nat({ max: 7999 }), { maxLength: 3 }),
+        (count, spikes, missing) => {
+          const levels = Float32Array.from({ length: count }, (_, i) => 10 + ((i * 7919) % 64) / 8);
+          for (const [i, eighths] of spikes) levels[i] = 20 + eighths / 8;
+          for (const i of missing) levels[i] = Number.NaN;
+          const axis = { kind: "regular" as const, startHz: 150e3, stepHz: 2e3, count };
+          const trace = { ...scan([0, 1, 1], 0, []), axis, levelsDb: levels };
+          const segments = [
+            segment(150e3, 500e3, 66, 56),
+            segment(500e3, 5e6, 56),
+            segment(5e6, 15e6, 40, 60),
+          ];
+          const mask = maskOf([maskLine("quasi-peak", segments), maskLine("average", segments)]);
+          const part = { traces: [trace], settings: SETTINGS, guardDb: 2 };
+          compare(readTogether([part], mask), [part], mask);
+        },
+      ),
+      { numRuns: 4, seed: 2028 },
+    );
+  });
 });
 
 describe("samples on an edge of the mask", () => {
-  const flat = (startHz: number, stopHz: number, db: number) => ({
-    startHz,
-    stopHz,
-    startDb: db,
-    stopDb: db,
-    interpolation: "log" as const,
+  const read = (trace: Trace, mask: Mask) =>
+    readSweep({ traces: [trace], settings: SETTINGS, mask, guardDb: 0 }).lines[0]?.worst;
+  /** Regular axis whose frequencies are worked out as start + i·step. */
+  const regular = (startHz: number, stepHz: number, levels: number[]): Trace => ({
+    ...listed(levels.map((db, i) => [i, db])),
+    axis: { kind: "regular", startHz, stepHz, count: levels.length },
   });
-  function readRegular(segments: MaskSegment[], startHz: number, stepHz: number, levels: number[]) {
-    return read(segments, levels, 0, { kind: "regular", startHz, stepHz, count: levels.length });
-  }
 
-  it("take the lower limit, even where start + i·step comes out a hair above the edge", () => {
+  test("take the lower limit, even where start + i·step comes out a hair above the edge", () => {
     // 30 MHz to 1 GHz in 1650 points: point 340 is 230 MHz, worked out as 230.00000000000003 MHz.
     const stepHz = 970e6 / 1649;
     const index = Math.round(200e6 / stepHz);
     const levels = Array.from({ length: 1650 }, (_, i) => (i === index ? 38 : -200));
-    const segments = [flat(30e6, 230e6, 30), flat(230e6, 1e9, 37)];
+    const segments = [segment(30e6, 230e6, 30), segment(230e6, 1e9, 37)];
     expect(30e6 + index * stepHz).toBeGreaterThan(230e6);
-    expect(readRegular(segments, 30e6, stepHz, levels)?.worst).toMatchObject({
-      limitDb: 30,
-      marginDb: -8,
-    });
+    expect(
+      read(regular(30e6, stepHz, levels), maskOf([maskLine("quasi-peak", segments)])),
+    ).toMatchObject({ limitDb: 30, marginDb: -8 });
   });
 
-  it("are held against the mask at its first and last frequency, however many points there are", () => {
+  test("are held against its first and last frequency, however many points there are", () => {
     let [above, below] = [0, 0];
     for (let count = 101; count < 700; count += 1) {
       const stepHz = 970e6 / (count - 1);
-      const lastHz = 30e6 + (count - 1) * stepHz;
-      if (lastHz > 1e9) above += 1;
-      if (lastHz < 1e9) below += 1;
+      const last = 30e6 + (count - 1) * stepHz;
+      if (last > 1e9) above += 1;
+      if (last < 1e9) below += 1;
       const levels = Array.from({ length: count }, (_, i) => (i === count - 1 ? 50 : -200));
-      const atEnd = readRegular([flat(30e6, 1e9, 40)], 30e6, stepHz, levels);
-      expect(atEnd?.worst?.marginDb, `end, ${count} points`).toBe(-10);
-      const atStart = readRegular([flat(1e9, 6e9, 40)], 30e6, stepHz, levels);
-      expect(atStart?.worst?.marginDb, `start, ${count} points`).toBe(-10);
+      const trace = regular(30e6, stepHz, levels);
+      const ending = maskOf([maskLine("quasi-peak", [segment(30e6, 1e9, 40)])]);
+      const beginning = maskOf([maskLine("quasi-peak", [segment(1e9, 6e9, 40)])]);
+      expect(read(trace, ending)?.marginDb, `end, ${count} points`).toBe(-10);
+      expect(read(trace, beginning)?.marginDb, `start, ${count} points`).toBe(-10);
     }
     expect(above).toBeGreaterThan(0);
     expect(below).toBeGreaterThan(0);
   });
-
-  it("have no limit 1 Hz outside", () => {
-    const segments = [flat(30e6, 1e9, 40)];
-    expect(readRegular(segments, 30e6 - 1, 970e6 + 2, [90, 90])?.worst).toBeNull();
-    expect(readRegular(segments, 30e6, 970e6, [30, 31])?.worst?.marginDb).toBe(9);
-  });
-});
-
-it("never gains margin when a mask is tightened", () => {
-  fc.assert(
-    fc.property(pair, fc.double({ min: 0, max: 30, noNaN: true }), ({ segments, levels }, db) => {
-      const tight = segments.map((s) => ({
-        ...s,
-        startDb: s.startDb - db,
-        stopDb: s.stopDb - db,
-      }));
-      const before = read(segments, levels)?.worst?.marginDb ?? 0;
-      const after = read(tight, levels)?.worst?.marginDb ?? 0;
-      expect(after).toBeLessThanOrEqual(before + 1e-9);
-    }),
-  );
 });

@@ -59,6 +59,11 @@ export function isBlankSegment(segment: SegmentDraft): boolean {
   );
 }
 
+/** A line that nobody has typed anything into. */
+export function isBlankLine({ name, detector, rbw, segments }: LineDraft): boolean {
+  return name.trim() === "" && detector === "" && rbw === "" && segments.every(isBlankSegment);
+}
+
 export function emptySegment(id: number, start = ""): SegmentDraft {
   return { id, start, stop: "", startDb: "", stopDb: "", interpolation: "log" };
 }

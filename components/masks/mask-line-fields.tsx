@@ -4,14 +4,15 @@ import { useState } from "react";
 import { Button } from "@/components/ui/button";
 import { Field } from "@/components/ui/field";
 import { SelectField } from "@/components/ui/select-field";
+import type { LevelUnit } from "@/lib/core/units/level-units";
 import { BANDWIDTH_KINDS, DETECTOR_LABELS, DETECTORS } from "@/lib/core/sweep/settings";
 import type { LineDraft } from "./mask-draft";
 import { settleFrequency } from "./mask-draft";
 import type { DraftProblem } from "./mask-problems";
 import { problemAt, problemsOfRow } from "./mask-problems";
 import { BANDWIDTH_KIND_LABELS } from "./mask-words";
-import { PasteSegments } from "./paste-segments";
-import { readPastedSegments } from "./read-pasted-segments";
+import { PasteTable } from "./paste-table";
+import type { PastedLine } from "./read-pasted-table";
 import { SegmentRow } from "./segment-row";
 import type { LineChanges } from "./use-mask-draft";
 
@@ -29,25 +30,41 @@ interface MaskLineFieldsProps {
   line: LineDraft;
   place: number;
   frequencyUnit: string;
+  /** Unit of the mask's limit, as far as it is chosen. */
+  unit: LevelUnit | "";
   problems: readonly DraftProblem[];
   changes: LineChanges;
 }
 
 /** One limit line: its detector, its bandwidth and its segments as a table. */
 export function MaskLineFields(props: MaskLineFieldsProps) {
-  const { line, place, frequencyUnit, problems, changes } = props;
+  const { line, place, frequencyUnit, unit, problems, changes } = props;
   const [pasted, setPasted] = useState("");
-  const [pasteProblems, setPasteProblems] = useState<string[]>([]);
+  // Where rows pasted into a cell go once they are looked at; at the end without one.
+  const [pasteAt, setPasteAt] = useState<number | null>(null);
+  const [pastes, setPastes] = useState(0);
   const at = `lines.${place}`;
   const called = line.name.trim() || `line ${place + 1}`;
   const errorAt = (field: string) => problemAt(problems, `${at}.${field}`);
 
-  /** What cannot be read is kept in the text area, to be mended there. */
-  function paste(at: number | null, text: string) {
-    const read = readPastedSegments(text, frequencyUnit);
-    setPasteProblems(read.ok ? [] : read.problems);
-    setPasted(read.ok ? "" : text);
-    if (read.ok) changes.insertSegments(at, read.rows);
+  /** A table pasted into a cell is shown first; what was waiting there already stays above it. */
+  function paste(rowId: number, text: string) {
+    setPasted((waiting) => (waiting.trim() === "" ? text : `${waiting.trimEnd()}\n${text}`));
+    setPasteAt(rowId);
+    setPastes((count) => count + 1);
+  }
+
+  function add([only]: PastedLine[]) {
+    if (!only) return;
+    const isStillThere = line.segments.some(({ id }) => id === pasteAt);
+    changes.insertSegments(isStillThere ? pasteAt : null, only.rows);
+    changes.patch({
+      detector: line.detector || (only.detector ?? ""),
+      rbw: line.rbw || only.rbw,
+      name: line.name || only.name,
+    });
+    setPasted("");
+    setPasteAt(null);
   }
 
   return (
@@ -139,11 +156,15 @@ export function MaskLineFields(props: MaskLineFieldsProps) {
           Remove line
         </Button>
       </div>
-      <PasteSegments
+      <PasteTable
+        summary="Paste segments from a spreadsheet"
         text={pasted}
-        problems={pasteProblems}
         onText={setPasted}
-        onAdd={() => paste(null, pasted)}
+        frequencyUnit={frequencyUnit}
+        unit={unit}
+        line={line}
+        pastes={pastes}
+        onAdd={add}
       />
     </fieldset>
   );

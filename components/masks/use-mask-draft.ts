@@ -3,7 +3,16 @@
 import { useState } from "react";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { LineDraft, MaskDraft, SegmentDraft } from "./mask-draft";
-import { draftMask, emptyLine, emptyMask, emptySegment, isBlankSegment } from "./mask-draft";
+import type { LevelUnit } from "@/lib/core/units/level-units";
+import {
+  draftMask,
+  emptyLine,
+  emptyMask,
+  emptySegment,
+  isBlankLine,
+  isBlankSegment,
+} from "./mask-draft";
+import type { PastedLine } from "./read-pasted-table";
 
 interface Held {
   draft: MaskDraft;
@@ -43,6 +52,23 @@ export function useMaskDraft(mask: Mask | null) {
   const addLine = () =>
     change((now, nextId) => ({ ...now, lines: [...now.lines, emptyLine(nextId)] }));
 
+  /** Each pasted line becomes a line after those that are there; a blank one gives way. */
+  const addPasted = (pasted: readonly PastedLine[], unit: LevelUnit | null) =>
+    change((now, nextId) => ({
+      ...now,
+      unit: now.unit || (unit ?? ""),
+      lines: [
+        ...now.lines.filter((line) => !isBlankLine(line)),
+        ...pasted.map(({ detector, rbw, name, rows }) => ({
+          ...emptyLine(nextId),
+          name,
+          detector: detector ?? ("" as const),
+          rbw,
+          segments: rows.map((row) => ({ ...row, id: nextId() })),
+        })),
+      ],
+    }));
+
   function changesOf(lineId: number): LineChanges {
     const onLine = (work: (line: LineDraft, nextId: () => number) => LineDraft) =>
       change((now, nextId) => ({
@@ -76,5 +102,5 @@ export function useMaskDraft(mask: Mask | null) {
     };
   }
 
-  return { draft, patch, addLine, changesOf };
+  return { draft, patch, addLine, addPasted, changesOf };
 }

@@ -8,7 +8,6 @@ import {
   settleFrequency,
 } from "@/components/masks/mask-draft";
 import { draftProblems } from "@/components/masks/mask-problems";
-import { readPastedSegments } from "@/components/masks/read-pasted-segments";
 import { readShippedMasks } from "@/lib/formats/shipped-masks";
 import { CROSSING, MASK } from "../../commands/mask/arrange";
 
@@ -84,37 +83,5 @@ describe("a mask as it is typed", () => {
     expect(draftProblems(draft)).toEqual([
       { path: "lines.0.segments.1.stopHz", text: expect.stringContaining("1,000"), blank: false },
     ]);
-  });
-});
-
-describe("segments pasted from a spreadsheet", () => {
-  test("take their unit from the header, else from the choice, and show it", () => {
-    const read = readPastedSegments("Start (kHz)\tEnd (kHz)\tLimit\n150\t500\t66\n", "MHz");
-    expect(read).toEqual({
-      ok: true,
-      rows: [
-        { start: "150 kHz", stop: "500 kHz", startDb: "66", stopDb: "66", interpolation: "log" },
-      ],
-    });
-    expect(readPastedSegments("0,15\t0,5\t66\t56\tlinear", "MHz")).toEqual({
-      ok: true,
-      rows: [
-        { start: "150 kHz", stop: "500 kHz", startDb: "66", stopDb: "56", interpolation: "linear" },
-      ],
-    });
-    expect(readPastedSegments("30;230;40,5\r\n230;1000;47\r\n", "MHz")).toMatchObject({
-      rows: [{ startDb: "40.5" }, { stop: "1 GHz" }],
-    });
-  });
-
-  test("are taken as a whole or not at all, and name the line", () => {
-    expect(readPastedSegments("30\t230\t40\n230\tlots\t47\n1\n", "MHz")).toEqual({
-      ok: false,
-      problems: [
-        expect.stringMatching(/^Line 2: "lots" is no frequency/),
-        expect.stringMatching(/^Line 3: three to five columns/),
-      ],
-    });
-    expect(readPastedSegments("nothing here", "MHz").ok).toBe(false);
   });
 });

@@ -106,6 +106,7 @@ test("every cell of the editor's table is labelled, and a crossing row says so w
       line={draft.lines[0]!}
       place={0}
       frequencyUnit="MHz"
+      unit="dBuV/m"
       problems={draftProblems(draft)}
       changes={{
         patch: nothing,

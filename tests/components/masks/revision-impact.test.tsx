@@ -1,4 +1,5 @@
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
+import type { ComponentProps } from "react";
 import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, test, vi } from "vitest";
 import { RecomputationProgress } from "@/components/masks/recomputation-progress";
@@ -116,9 +117,17 @@ describe("the dialog before a revision is saved", () => {
   });
 });
 
+type ProgressState = ComponentProps<typeof RecomputationProgress>["initial"];
+
 describe("the progress of a revision", () => {
-  const state = { revision: 4, isInForce: false, total: 26, done: 12, problem: null };
-  const render = (change: Partial<typeof state> & { problem?: string | null }, mayTry = true) =>
+  const state: ProgressState = {
+    revision: 4,
+    isInForce: false,
+    total: 26,
+    done: 12,
+    problem: null,
+  };
+  const render = (change: Partial<ProgressState>, mayTry = true) =>
     renderToStaticMarkup(
       <QueryClientProvider client={new QueryClient()}>
         <RecomputationProgress

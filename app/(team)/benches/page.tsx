@@ -2,12 +2,15 @@ import type { Metadata } from "next";
 import Link from "next/link";
 import { BenchAnswer } from "@/components/benches/bench-answer";
 import { BenchTable } from "@/components/benches/bench-table";
+import { OverdueNote } from "@/components/equipment/overdue-note";
 import { ButtonLink } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
 import { PageHead } from "@/components/ui/page-head";
+import { today } from "@/lib/adapters/clock";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { listBenches } from "@/lib/queries/bench/list-benches";
+import { listEquipment } from "@/lib/queries/equipment/list-equipment";
 import type { SearchParams } from "./search-params";
 import { showsArchived } from "./search-params";
 
@@ -17,7 +20,9 @@ export default async function BenchesPage(props: { searchParams: Promise<SearchP
   const withArchived = showsArchived(await props.searchParams);
   const ctx = await currentContext();
   const mayWrite = isAllowed(ctx, "bench.write");
-  const all = await listBenches(ctx, new Date().toISOString().slice(0, 10));
+  const day = today();
+  const all = await listBenches(ctx, day);
+  const equipment = (await listEquipment(ctx, day)).filter((piece) => !piece.archived);
   const open = all.filter((bench) => !bench.archived);
   const archived = all.length - open.length;
   const shown = withArchived ? all : open;
@@ -27,14 +32,18 @@ export default async function BenchesPage(props: { searchParams: Promise<SearchP
         title="Benches"
         lead="Can I trust this arrangement?"
         actions={
-          mayWrite ? (
-            <ButtonLink look="primary" href="/benches/new">
-              New bench
-            </ButtonLink>
-          ) : undefined
+          <>
+            <ButtonLink href="/benches/equipment">Equipment</ButtonLink>
+            {mayWrite ? (
+              <ButtonLink look="primary" href="/benches/new">
+                New bench
+              </ButtonLink>
+            ) : null}
+          </>
         }
       />
       <BenchAnswer benches={open} />
+      <OverdueNote equipment={equipment} />
       {shown.length > 0 ? (
         <BenchTable benches={shown} />
       ) : (

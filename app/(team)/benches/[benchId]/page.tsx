@@ -2,6 +2,9 @@ import type { Metadata } from "next";
 import { notFound } from "next/navigation";
 import { BenchArchiveButton } from "@/components/benches/bench-archive-button";
 import { BenchCautions } from "@/components/benches/bench-cautions";
+import { BudgetSection } from "@/components/benches/budget-section";
+import { GapNote } from "@/components/benches/gap-note";
+import { InstrumentState } from "@/components/benches/instrument-state";
 import { PathAnswer } from "@/components/benches/path-answer";
 import { RevisionList } from "@/components/benches/revision-list";
 import { SignalPathTable } from "@/components/benches/signal-path-table";
@@ -11,9 +14,11 @@ import { EmptyState } from "@/components/ui/empty-state";
 import { Facts } from "@/components/ui/facts";
 import { PageHead } from "@/components/ui/page-head";
 import { Section } from "@/components/ui/section";
+import { today } from "@/lib/adapters/clock";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { readBench } from "@/lib/queries/bench/read-bench";
+import { readBenchQuality } from "@/lib/queries/bench/read-bench-quality";
 import { bringBenchBack, putBenchAway } from "../actions";
 import type { SearchParams } from "../search-params";
 import { readRevisionParam } from "../search-params";
@@ -34,7 +39,9 @@ export default async function BenchPage(props: BenchPageProps) {
   const current = bench?.revisions[0];
   const shown = asked === null ? current : bench?.revisions.find((r) => r.revision === asked);
   if (!bench || !current || !shown) notFound();
-  const today = new Date().toISOString().slice(0, 10);
+  const quality = await readBenchQuality(ctx, bench.id, current.content);
+  if (!quality) notFound();
+  const day = today();
   const { transducers, impedanceOhm } = shown.content;
   const mayWrite = isAllowed(ctx, "bench.write");
   const archived = bench.archivedAt !== null;
@@ -59,11 +66,20 @@ export default async function BenchPage(props: BenchPageProps) {
           ) : undefined
         }
       />
-      <PathAnswer transducers={current.content.transducers} today={today} />
+      <PathAnswer transducers={current.content.transducers} today={day} />
       <Facts
         items={[
           { label: "Site", value: bench.site || null },
-          { label: "Instrument", value: bench.instrument || null },
+          {
+            label: "Instrument",
+            value: (
+              <InstrumentState
+                instrument={quality.instrument}
+                words={bench.instrument}
+                today={day}
+              />
+            ),
+          },
           {
             label: "Distance",
             value: bench.distanceM === null ? null : `${bench.distanceM} m`,
@@ -74,6 +90,7 @@ export default async function BenchPage(props: BenchPageProps) {
             value: bench.guardDb === 0 ? "none" : `${bench.guardDb} dB`,
             mono: bench.guardDb !== 0,
           },
+          { label: "Drift allowed in a check", value: `${bench.checkToleranceDb} dB`, mono: true },
           { label: "Impedance", value: <Ohms value={impedanceOhm} /> },
           { label: "Notes", value: bench.notes || null },
         ]}
@@ -91,9 +108,13 @@ export default async function BenchPage(props: BenchPageProps) {
           ) : undefined
         }
       >
+        <GapNote
+          gaps={quality.gaps}
+          href={mayWrite && !archived ? `/benches/${bench.id}/signal-path?newest=1` : null}
+        />
         {transducers.length > 0 ? (
           <>
-            <SignalPathTable path={shown.content} today={today} />
+            <SignalPathTable path={shown.content} today={day} />
             <div className="mt-6">
               <FactorChart transducers={transducers} />
             </div>
@@ -106,6 +127,12 @@ export default async function BenchPage(props: BenchPageProps) {
         )}
       </Section>
       <BenchCheckSection ctx={ctx} benchId={bench.id} />
+      <BudgetSection
+        rule={quality.guardRule}
+        guardDb={quality.guardDb}
+        newest={quality.budgets[0] ?? null}
+        href={mayWrite && !archived ? `/benches/${bench.id}/budget` : null}
+      />
       <Section title="Before you connect anything">
         <BenchCautions kinds={transducers.map((t) => t.kind)} />
       </Section>

@@ -5,6 +5,7 @@ import { PageHead } from "@/components/ui/page-head";
 import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { readBench } from "@/lib/queries/bench/read-bench";
+import { listEquipmentChoices } from "@/lib/queries/equipment/list-equipment-choices";
 import { changeBench } from "../../actions";
 
 export const metadata: Metadata = { title: "Edit bench" };
@@ -12,9 +13,11 @@ export const metadata: Metadata = { title: "Edit bench" };
 export default async function EditBenchPage(props: { params: Promise<{ benchId: string }> }) {
   const { benchId } = await props.params;
   const ctx = await currentContext();
+  const instruments = (await listEquipmentChoices(ctx)).filter((e) => e.kind === "instrument");
   const bench = await readBench(ctx, benchId);
   if (!bench) notFound();
-  const { id, name, site, instrument, distanceM, guardDb, notes } = bench;
+  const { id, name, site, instrument, instrumentId, distanceM, notes } = bench;
+  const { guardDb, guardRule, checkToleranceDb } = bench;
   return (
     <>
       <PageHead
@@ -31,7 +34,19 @@ export default async function EditBenchPage(props: { params: Promise<{ benchId: 
       ) : (
         <BenchForm
           action={changeBench}
-          bench={{ id, name, site, instrument, distanceM, guardDb, notes }}
+          instruments={instruments}
+          bench={{
+            id,
+            name,
+            site,
+            instrument,
+            instrumentId,
+            distanceM,
+            guardDb,
+            guardRule,
+            checkToleranceDb,
+            notes,
+          }}
         />
       )}
     </>

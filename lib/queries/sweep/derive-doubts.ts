@@ -8,7 +8,7 @@ import type { Doubt, Reading } from "@/lib/core/reading/reading";
 import type { Port } from "@/lib/core/sweep/settings";
 
 /** What was there on a sweep's day, which may change after its readings were made. */
-export interface Surroundings {
+interface Surroundings {
   port: Port;
   ambients: readonly HeldAmbient[];
   /** The bench check that stands for the day; null: none was made. */

@@ -83,7 +83,7 @@ export async function loadHeldAmbients(
     }));
 }
 
-export interface FloorLink {
+interface FloorLink {
   id: string;
   name: string;
   measuredOn: string;

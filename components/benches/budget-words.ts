@@ -43,7 +43,7 @@ export const inDb = (db: number) => `${db.toFixed(2)} dB`;
 
 /** Degrees of freedom as people read them: truncated, as GUM G.4.1 has it for tables. */
 export function degreesWords(degrees: number): string {
-  return Number.isFinite(degrees) ? (Math.floor(degrees * 10) / 10).toFixed(1) : "unlimited";
+  return Number.isFinite(degrees) ? (Math.floor(degrees * 10 + 1e-6) / 10).toFixed(1) : "unlimited";
 }
 
 /** Where the guard in force comes from, in one sentence. */

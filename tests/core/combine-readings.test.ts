@@ -1,54 +1,16 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import type { Mask } from "@/lib/core/mask/mask";
-import { combineReadings, commonRanges, reachesMask } from "@/lib/core/reading/combine-readings";
+import { combineReadings, reachesMask } from "@/lib/core/reading/combine-readings";
+import { commonRanges } from "@/lib/core/reading/coverage";
 import { readSweep } from "@/lib/core/reading/read-sweep";
-import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { makeTrace, randomFrom } from "../support/traces";
-
-const SETTINGS: MeasurementSettings = {
-  rbwHz: 120e3,
-  rbwKind: "6dB",
-  vbwHz: null,
-  sweepTimeS: null,
-  attenuationDb: null,
-  preamplifier: null,
-  referenceLevelDb: null,
-  polarization: null,
-  heightM: null,
-  azimuthDeg: null,
-  distanceM: 3,
-  port: "radiated",
-};
+import { maskLine, maskOf, segment, SETTINGS } from "./hand-worked/case";
 
 /** 47 CFR 15.109(a), class B at 3 m, up to 216 MHz. */
-const MASK: Mask = {
-  format: "neap-mask",
-  version: 1,
-  key: "a",
-  title: "A mask",
-  port: "radiated",
-  unit: "dBuV/m",
-  distanceM: 3,
-  document: "",
-  clause: "",
-  edition: "",
-  provenance: "team",
-  note: "",
-  lines: [
-    {
-      name: "Quasi-peak",
-      detector: "quasi-peak",
-      rbwHz: 120e3,
-      rbwKind: "6dB",
-      segments: [
-        { startHz: 30e6, stopHz: 88e6, startDb: 40, stopDb: 40, interpolation: "log" },
-        { startHz: 88e6, stopHz: 216e6, startDb: 43.5, stopDb: 43.5, interpolation: "log" },
-      ],
-    },
-  ],
-};
+const MASK = maskOf([
+  maskLine("quasi-peak", [segment(30e6, 88e6, 40), segment(88e6, 216e6, 43.5)]),
+]);
 
 const STEP = 50e3;
 const COUNT = 3721;

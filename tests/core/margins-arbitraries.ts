@@ -26,7 +26,7 @@ const stepUnits = fc.oneof(
   { weight: 1, arbitrary: fc.integer({ min: 3, max: 30 }) },
 );
 
-export const listedAxis = fc
+const listedAxis = fc
   .tuple(kilohertz(100, 400), kilohertz(1, 20), fc.array(stepUnits, { maxLength: 90 }))
   .map(([startHz, unitHz, steps]): FrequencyAxis => {
     const frequenciesHz = new Float64Array(steps.length + 1).fill(startHz);
@@ -103,7 +103,7 @@ export const segments = fc
     return isReversed ? list.reverse() : list;
   });
 
-export const lineOf = (detector: Detector, list: MaskSegment[], i = 0): MaskLine => ({
+const lineOf = (detector: Detector, list: MaskSegment[], i = 0): MaskLine => ({
   name: `Line ${i + 1}`,
   detector,
   rbwHz: 9e3,
@@ -118,7 +118,7 @@ const PAIRS: [trace: LevelUnit, mask: LevelUnit, roughDb: number][] = [
   ["dBuV", "dBm", -107],
 ];
 
-export interface CaseRules {
+interface CaseRules {
   /** One detector for every trace and line, so that nothing is a bound. */
   isOneDetector?: boolean;
   /** Traces in the mask's own unit. */

@@ -1,4 +1,6 @@
+import { expect } from "vitest";
 import type { MaskSegment } from "@/lib/core/mask/mask";
+import type { Reading } from "@/lib/core/reading/reading";
 import type { FrequencyAxis, Trace } from "@/lib/core/sweep/trace";
 
 /** The frequencies of an axis, one by one. */
@@ -61,4 +63,30 @@ export function splitSegment(s: MaskSegment, share: number): MaskSegment[] {
     { ...s, stopHz: middleHz, stopDb: middleDb },
     { ...s, startHz: middleHz, startDb: middleDb },
   ];
+}
+
+/** Everything that must not change when the same thing is said in another way. */
+export function sameReading(a: Reading, b: Reading, within: { db: number; share: number }): void {
+  const near = (x: number | undefined, y: number | undefined, by: number) =>
+    x === y || expect(Math.abs((x ?? NaN) - (y ?? NaN))).toBeLessThanOrEqual(by);
+  const nearHz = (x: number | undefined, y: number | undefined) =>
+    near(x, y, within.share * (x ?? NaN));
+  expect(b.notComparable).toBe(a.notComparable);
+  expect(b.standing).toBe(a.standing);
+  expect(b.lines).toHaveLength(a.lines.length);
+  a.lines.forEach((line, i) => {
+    const other = b.lines[i]!;
+    expect([other.standing, other.basis]).toEqual([line.standing, line.basis]);
+    near(line.worst?.marginDb, other.worst?.marginDb, within.db);
+    nearHz(line.worst?.frequencyHz, other.worst?.frequencyHz);
+    near(line.coverage.fraction, other.coverage.fraction, 1e-9);
+  });
+  expect(b.remeasure).toHaveLength(a.remeasure.length);
+  a.remeasure.forEach((point, i) => nearHz(point.frequencyHz, b.remeasure[i]?.frequencyHz));
+  expect(b.suspects).toHaveLength(a.suspects.length);
+  a.suspects.forEach((suspect, i) => {
+    near(suspect.marginDb ?? NaN, b.suspects[i]?.marginDb ?? NaN, within.db);
+    near(suspect.prominenceDb, b.suspects[i]?.prominenceDb, within.db);
+    nearHz(suspect.sampleHz, b.suspects[i]?.sampleHz);
+  });
 }

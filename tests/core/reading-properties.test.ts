@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import type { Mask, MaskSegment } from "@/lib/core/mask/mask";
+import type { MaskSegment } from "@/lib/core/mask/mask";
 import { readSweep, type ReadSweepInput } from "@/lib/core/reading/read-sweep";
 import { readTogether } from "@/lib/core/reading/read-together";
 import type { Reading } from "@/lib/core/reading/reading";
@@ -8,37 +8,11 @@ import type { SweepPart } from "@/lib/core/reading/sweep-part";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { maskLine, maskOf, segment } from "./hand-worked/case";
 import { anyAxis, anyCase, segments } from "./margins-arbitraries";
-import { cutTrace, frequenciesOf, inMegahertz, splitSegment } from "./reading-changes";
+import { cutTrace, frequenciesOf, inMegahertz, sameReading, splitSegment } from "./reading-changes";
 
 const RUNS = { numRuns: 120, seed: 15 };
 const WORST_FIRST = ["over", "undecided", "inside-guard", "clear"];
 const marginOf = (reading: Reading, i: number) => reading.lines[i]?.worst?.marginDb ?? Infinity;
-
-/** Everything that must not change when the same thing is said in another way. */
-function sameReading(a: Reading, b: Reading, within: { db: number; share: number }): void {
-  const near = (x: number | undefined, y: number | undefined, by: number) =>
-    x === y || expect(Math.abs((x ?? NaN) - (y ?? NaN))).toBeLessThanOrEqual(by);
-  const nearHz = (x: number | undefined, y: number | undefined) =>
-    near(x, y, within.share * (x ?? NaN));
-  expect(b.notComparable).toBe(a.notComparable);
-  expect(b.standing).toBe(a.standing);
-  expect(b.lines).toHaveLength(a.lines.length);
-  a.lines.forEach((line, i) => {
-    const other = b.lines[i]!;
-    expect([other.standing, other.basis]).toEqual([line.standing, line.basis]);
-    near(line.worst?.marginDb, other.worst?.marginDb, within.db);
-    nearHz(line.worst?.frequencyHz, other.worst?.frequencyHz);
-    near(line.coverage.fraction, other.coverage.fraction, 1e-9);
-  });
-  expect(b.remeasure).toHaveLength(a.remeasure.length);
-  a.remeasure.forEach((point, i) => nearHz(point.frequencyHz, b.remeasure[i]?.frequencyHz));
-  expect(b.suspects).toHaveLength(a.suspects.length);
-  a.suspects.forEach((suspect, i) => {
-    near(suspect.marginDb ?? NaN, b.suspects[i]?.marginDb ?? NaN, within.db);
-    near(suspect.prominenceDb, b.suspects[i]?.prominenceDb, within.db);
-    nearHz(suspect.sampleHz, b.suspects[i]?.sampleHz);
-  });
-}
 
 const EXACT = { db: 1e-9, share: 0 };
 

@@ -1,37 +1,16 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import type { Mask, MaskLine } from "@/lib/core/mask/mask";
-import { findSuspects, prominentPeaks } from "@/lib/core/reading/suspects";
+import { readSweep } from "@/lib/core/reading/read-sweep";
 import type { Detector } from "@/lib/core/sweep/settings";
-import { hasNumpy, runPython } from "../support/numpy";
+import type { Trace } from "@/lib/core/sweep/trace";
 import { makeTrace, randomFrom } from "../support/traces";
-
-const line = (name: string, detector: Detector, limitDb: number): MaskLine => ({
-  name,
-  detector,
-  rbwHz: 1e6,
-  rbwKind: null,
-  segments: [
-    { startHz: 1e9, stopHz: 6e9, startDb: limitDb, stopDb: limitDb, interpolation: "log" },
-  ],
-});
+import { maskLine, maskOf, segment, SETTINGS } from "./hand-worked/case";
 
 /** CISPR 32 class B above 1 GHz at 3 m, lower band: average 50, peak 70 dBµV/m. */
-const MASK: Mask = {
-  format: "neap-mask",
-  version: 1,
-  key: "a",
-  title: "A mask",
-  port: "radiated",
-  unit: "dBuV/m",
-  distanceM: 3,
-  document: "",
-  clause: "",
-  edition: "",
-  provenance: "team",
-  note: "",
-  lines: [line("Average", "average", 50), line("Peak", "peak", 70)],
-};
+const MASK = maskOf([
+  maskLine("average", [segment(1e9, 6e9, 50)], { name: "Average", rbwHz: 1e6, rbwKind: null }),
+  maskLine("peak", [segment(1e9, 6e9, 70)], { name: "Peak", rbwHz: 1e6, rbwKind: null }),
+]);
 
 const COUNT = 2001;
 const axis = { kind: "regular" as const, startHz: 1e9, stepHz: 500e3, count: COUNT };
@@ -41,11 +20,16 @@ function trace(detector: Detector, floorDb: number, lines: Record<number, number
   return makeTrace(levels, { detector, axis });
 }
 
-describe("findSuspects", () => {
+function suspectsOf(traces: Trace[], suspectMarginDb = 20) {
+  const settings = { ...SETTINGS, rbwHz: 1e6 };
+  return readSweep({ traces, settings, mask: MASK, guardDb: 0, suspectMarginDb }).suspects;
+}
+
+describe("the suspects of a reading", () => {
   test("shows the average trace that is over, not the higher peak trace far under its own line", () => {
     const peak = trace("peak", 35, { 1000: 58.3 });
     const average = trace("average", 25, { 1000: 58 });
-    const [first, ...rest] = findSuspects([peak, average], MASK, 1e6, 6, 20);
+    const [first, ...rest] = suspectsOf([peak, average]);
     expect(rest).toEqual([]);
     expect(first).toMatchObject({ lineName: "Average", marginDb: -8, basis: "like-for-like" });
     expect(first!.traceIndex).toBe(1);
@@ -55,11 +39,30 @@ describe("findSuspects", () => {
     const peak = trace("peak", 35, { 500: 55, 1500: 60 });
     const average = trace("average", 25, { 500: 40 });
     const gap = Float32Array.from(average.levelsDb, (l, i) => (i > 1400 ? Number.NaN : l));
-    const found = findSuspects([peak, { ...average, levelsDb: gap }], MASK, 1e6, 6, 20);
+    const found = suspectsOf([peak, { ...average, levelsDb: gap }]);
     expect(found.map((s) => [s.sampleHz, s.lineName, s.basis, s.marginDb])).toEqual([
       [1.75e9, "Average", "upper-bound", -10],
       [1.25e9, "Average", "like-for-like", 10],
     ]);
+  });
+
+  test("have the frequency of a parabola through three points in dB, and the sample's own margin", () => {
+    // Three points 37, 40, 39 dB: top at (37 − 39)/(2·(37 − 2·40 + 39)) = +0.25 of a step.
+    const average = trace("average", 20, { 999: 37, 1000: 40, 1001: 39 });
+    expect(suspectsOf([average])[0]).toMatchObject({
+      frequencyHz: 1.5e9 + 0.25 * 500e3,
+      sampleHz: 1.5e9,
+      levelDb: 40,
+      marginDb: 10,
+      prominenceDb: 20,
+    });
+  });
+
+  test("are those within 20 dB of the line, with 6 dB of prominence", () => {
+    const average = trace("average", 20, { 400: 30, 800: 29.875, 1200: 25.875, 1600: 31 });
+    expect(suspectsOf([average]).map((s) => s.sampleHz)).toEqual([1.8e9, 1.2e9]);
+    // 60 dB of room: the one with 5.875 dB of prominence is still none.
+    expect(suspectsOf([average], 60).map((s) => s.sampleHz)).toEqual([1.8e9, 1.2e9, 1.4e9]);
   });
 
   test("the first suspect is never better than any peak that stands out", () => {
@@ -73,7 +76,7 @@ describe("findSuspects", () => {
           ]),
         );
         const average = trace("average", 25, spikes);
-        const found = findSuspects([average], MASK, 1e6, 6, 100);
+        const found = suspectsOf([average], 100);
         const highest = Math.max(...average.levelsDb);
         expect(found[0]!.marginDb).toBeCloseTo(50 - highest, 4);
         found.forEach((suspect, i) => {
@@ -85,35 +88,5 @@ describe("findSuspects", () => {
       }),
       { numRuns: 60 },
     );
-  });
-});
-
-describe("prominentPeaks against scipy.signal.find_peaks, a Debian package", () => {
-  const sweeps = Array.from({ length: 200 }, (_, k) => {
-    const random = randomFrom(500 + k);
-    // Whole decibels now and then, so that plateaus come up.
-    return Array.from({ length: 400 }, () =>
-      Math.fround(k % 3 === 0 ? Math.round(30 * random()) : 30 * random()),
-    );
-  });
-
-  test.skipIf(!hasNumpy)("finds the same peaks with the same prominence in 200 sweeps", () => {
-    const outside = runPython<{ peaks: number[]; prominences: number[] }[]>(
-      `import json, sys, numpy as np
-from scipy.signal import find_peaks
-out = []
-for levels in json.load(sys.stdin):
-    p, q = find_peaks(np.array(levels, dtype=float), prominence=6)
-    out.append({"peaks": p.tolist(), "prominences": q["prominences"].tolist()})
-print(json.dumps(out))`,
-      sweeps,
-    );
-    sweeps.forEach((levels, k) => {
-      const found = prominentPeaks(Float32Array.from(levels), 6);
-      expect(found.map((peak) => peak.index)).toEqual(outside[k]!.peaks);
-      found.forEach((peak, i) =>
-        expect(peak.prominenceDb).toBeCloseTo(outside[k]!.prominences[i]!, 6),
-      );
-    });
   });
 });

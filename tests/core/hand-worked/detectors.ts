@@ -213,4 +213,14 @@ export const detectorCases: HandWorkedCase[] = [
       remeasureHz: [31e6, 31.5e6],
     },
   },
+  ...([30.5e6, 31.5e6] as const).map((firstHz): HandWorkedCase => ({
+    // 40 − 35 = 5 twice: which file came first must not move the frequency that is named.
+    name: `of two traces with equal margins the lower frequency is named, ${firstHz / 1e6} MHz first`,
+    mask: LOW_BAND,
+    traces: [scan(SPAN, 20, [[firstHz, 35]]), scan(SPAN, 20, [[62e6 - firstHz, 35]])],
+    expected: {
+      standing: "clear",
+      lines: [{ standing: "clear", basis: "like-for-like", worst: [5, 30.5e6], coverage: 1 }],
+    },
+  })),
 ];

@@ -2,65 +2,39 @@
 
 import Link from "next/link";
 import { useState } from "react";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { LinkFacts } from "@/components/sweeps/sweep-facts";
 import { ActionButton } from "@/components/ui/action-button";
 import { ButtonLink } from "@/components/ui/button";
-import type { SweepDelta } from "@/lib/core/delta/delta";
-import type { LinkSettings } from "@/lib/core/link/link-settings";
-import type { Standing } from "@/lib/core/reading/reading";
 import { formatMargin } from "@/lib/core/units/format";
 import { StandingMark } from "../readings/standing-mark";
-import { DeltaTable } from "./delta-table";
-import { DeltaValue } from "./delta-value";
+import { RungDeltas } from "./rung-deltas";
+import type { RungActions, RungStep } from "./rung-types";
 import { StepForm } from "./step-form";
-
-export interface RungStep {
-  id: string;
-  position: number;
-  name: string;
-  description: string;
-  link: LinkSettings | null;
-  onRecord: boolean;
-  sweeps: { id: string; name: string; purpose: string }[];
-  worst: {
-    marginDb: number | null;
-    standing: Standing;
-    lineName: string | null;
-    maskTitle: string;
-  } | null;
-  againstPrevious: SweepDelta[];
-  againstStart: SweepDelta[];
-}
-
-type ActionResult = { ok: true } | { ok: false; message: string };
-
-export interface RungActions {
-  edit: (
-    input: unknown,
-  ) => Promise<
-    | { ok: true; data: { stepId: string } }
-    | { ok: false; message: string; fieldErrors: Record<string, string> }
-  >;
-  remove: (stepId: string) => Promise<ActionResult>;
-  record: (stepId: string) => Promise<ActionResult>;
-}
+import { StepOrder } from "./step-order";
 
 interface RungProps {
   step: RungStep;
+  /** All steps of the ladder in their order. */
+  steps: { id: string; position: number; name: string; branchOfId: string | null }[];
   buildId: string;
-  isLast: boolean;
   mayWrite: boolean;
   actions: RungActions;
+  /** Mask revisions that nobody confirmed. */
+  fromMemory: readonly string[];
 }
 
 /** A step of the ladder: where it stands, what it changed, its sweeps and its link settings. */
-export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
+export function Rung({ step, steps, buildId, mayWrite, actions, fromMemory }: RungProps) {
   const [editing, setEditing] = useState(false);
+  const isLast = steps.at(-1)?.id === step.id;
   return (
-    <li className="relative border-l-2 border-deep pb-8 pl-8 last:pb-2">
+    <li
+      className={`relative border-l-2 pb-8 pl-8 last:pb-2 ${step.isOnLine ? "border-deep" : "border-dashed border-ink-soft"}`}
+    >
       <span
         aria-hidden
-        className="absolute top-0 -left-4 flex h-8 w-8 items-center justify-center rounded-full border-2 border-deep bg-paper font-mono text-sm"
+        className={`absolute top-0 -left-4 flex h-8 w-8 items-center justify-center rounded-full border-2 ${step.isOnLine ? "border-deep" : "border-dashed border-ink-soft"} bg-paper font-mono text-sm`}
       >
         {step.position}
       </span>
@@ -74,6 +48,7 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
             {step.description}
             {step.onRecord ? `${step.description ? " · " : ""}on the line of record` : ""}
           </p>
+          <p className="text-sm">{placeOf(step)}</p>
         </div>
         {step.worst ? (
           <div className="sm:text-right">
@@ -84,7 +59,8 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
               <StandingMark standing={step.worst.standing} />
             </p>
             <p className="text-sm text-ink-soft">
-              {step.worst.lineName} line of {step.worst.maskTitle}
+              {step.worst.lineName} line of {step.worst.maskTitle}{" "}
+              <UnconfirmedMark provenance={step.worst.provenance} />
             </p>
           </div>
         ) : null}
@@ -95,6 +71,7 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
             action={actions.edit}
             about={{ stepId: step.id }}
             values={step}
+            earlier={steps.slice(0, step.position)}
             label="Save step"
             onDone={() => setEditing(false)}
           />
@@ -117,7 +94,7 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
             ))}
           </p>
         )}
-        {step.position > 0 ? <Deltas step={step} /> : null}
+        <RungDeltas step={step} actions={mayWrite ? actions : null} fromMemory={fromMemory} />
         {step.link ? (
           <details>
             <summary className="cursor-pointer text-sm text-deep underline">Link settings</summary>
@@ -144,6 +121,14 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
             >
               {editing ? "Close" : "Edit step"}
             </ActionButton>
+            {step.position > 0 ? (
+              <ActionButton
+                action={() => actions.mark(step.id, step.state === "kept" ? "dropped" : "kept")}
+              >
+                {step.state === "kept" ? "Mark as dropped" : "Mark as kept"}
+              </ActionButton>
+            ) : null}
+            <StepOrder step={step} steps={steps} reorder={actions.reorder} />
             {isLast && step.position > 0 && step.sweeps.length === 0 ? (
               <ActionButton action={() => actions.remove(step.id)}>Take step away</ActionButton>
             ) : null}
@@ -154,77 +139,10 @@ export function Rung({ step, buildId, isLast, mayWrite, actions }: RungProps) {
   );
 }
 
-function Deltas({ step }: { step: RungStep }) {
-  if (step.sweeps.length === 0) return null;
-  if (step.againstPrevious.length === 0 && step.againstStart.length === 0)
-    return (
-      <p className="text-ink-soft">
-        No delta: no earlier sweep has the same purpose and an overlapping span.
-      </p>
-    );
-  return (
-    <>
-      <DeltaGroup title={`Against step ${step.position - 1}`} deltas={step.againstPrevious} />
-      {step.position > 1 ? (
-        <details>
-          <summary className="cursor-pointer text-sm text-deep underline">Against step 0</summary>
-          <div className="mt-3">
-            <DeltaGroup title="Against step 0" deltas={step.againstStart} />
-          </div>
-        </details>
-      ) : null}
-    </>
-  );
-}
-
-function DeltaGroup({ title, deltas }: { title: string; deltas: SweepDelta[] }) {
-  if (deltas.length === 0) return null;
-  return (
-    <div className="border border-rule bg-sheet px-4 py-3">
-      <h4 className="mb-2 font-medium">{title}</h4>
-      <div className="space-y-4">
-        {deltas.map((delta) => (
-          <div key={`${delta.beforeName} ${delta.afterName}`}>
-            {deltas.length > 1 ? <p className="text-sm text-ink-soft">{delta.afterName}</p> : null}
-            <DeltaSummary delta={delta} />
-          </div>
-        ))}
-      </div>
-    </div>
-  );
-}
-
-/** The sentence and the changes of margin; the numbers behind them on request. */
-function DeltaSummary({ delta }: { delta: SweepDelta }) {
-  const { changes } = delta;
-  if (!changes) return <DeltaTable delta={delta} />;
-  const told = changes.margins.filter(
-    (margin) => margin.beforeDb !== null || margin.afterDb !== null,
-  );
-  return (
-    <>
-      <p>{changes.sentence}</p>
-      <ul className="mt-1 flex flex-wrap gap-x-6 gap-y-1">
-        {told.map((margin) => (
-          <li
-            key={`${margin.maskRevisionId} ${margin.lineName}`}
-            className="flex items-baseline gap-2"
-          >
-            <span className="text-sm text-ink-soft">{margin.lineName} margin</span>
-            {margin.note ? (
-              <span className="text-sm text-shoal">not comparable</span>
-            ) : (
-              <DeltaValue changeDb={margin.changeDb} better="up" />
-            )}
-          </li>
-        ))}
-      </ul>
-      <details className="mt-2">
-        <summary className="cursor-pointer text-sm text-deep underline">All numbers</summary>
-        <div className="mt-3">
-          <DeltaTable delta={delta} />
-        </div>
-      </details>
-    </>
-  );
+/** What the step starts from when that goes without saying only in the plain case, and its state. */
+function placeOf(step: RungStep): string {
+  if (!step.base) return "";
+  const branch = step.branchOfId ? `Starts from step ${step.base.position}. ` : "";
+  if (step.state === "dropped") return `${branch}Dropped: its change was taken out again.`;
+  return step.isOnLine ? branch : `${branch}Kept, but left out by a later branch.`;
 }

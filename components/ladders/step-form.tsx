@@ -4,6 +4,7 @@ import { useRef } from "react";
 import { Button } from "@/components/ui/button";
 import { ErrorNote } from "@/components/ui/error-note";
 import { Field } from "@/components/ui/field";
+import { SelectField } from "@/components/ui/select-field";
 import { useActionForm } from "@/components/ui/use-action-form";
 
 type Outcome =
@@ -14,12 +15,14 @@ interface StepFormProps {
   action: (input: unknown) => Promise<Outcome>;
   /** What goes with the typed values: the ladder of a new step, or the step that is edited. */
   about: { ladderId: string } | { stepId: string };
-  values?: { name: string; description: string };
+  values?: { name: string; description: string; branchOfId: string | null };
+  /** Steps that this one may start from; none for step 0. */
+  earlier: readonly { id: string; position: number; name: string }[];
   label: string;
   onDone?: () => void;
 }
 
-export function StepForm({ action, about, values, label, onDone }: StepFormProps) {
+export function StepForm({ action, about, values, earlier, label, onDone }: StepFormProps) {
   const element = useRef<HTMLFormElement>(null);
   const form = useActionForm({
     action,
@@ -27,6 +30,7 @@ export function StepForm({ action, about, values, label, onDone }: StepFormProps
       ...about,
       name: data.get("name"),
       description: data.get("description"),
+      ...(earlier.length > 0 ? { branchOfId: data.get("branchOfId") || null } : {}),
     }),
     onDone: () => {
       if (!values) element.current?.reset();
@@ -50,6 +54,22 @@ export function StepForm({ action, about, values, label, onDone }: StepFormProps
         defaultValue={values?.description}
         error={fieldErrors.description}
       />
+      {earlier.length > 0 ? (
+        <SelectField
+          label="Starts from"
+          name="branchOfId"
+          hint="Choose a step for a branch, for example without the ferrite. Its delta is held against that step."
+          defaultValue={values?.branchOfId ?? ""}
+          error={fieldErrors.branchOfId}
+          options={[
+            { value: "", label: "The last kept step before it" },
+            ...earlier.map((step) => ({
+              value: step.id,
+              label: `Step ${step.position}: ${step.name}`,
+            })),
+          ]}
+        />
+      ) : null}
       <Button type="submit" disabled={form.pending}>
         {label}
       </Button>

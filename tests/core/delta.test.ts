@@ -1,80 +1,9 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { compareSides } from "@/lib/core/delta/compare-sides";
-import type { ComparedSweep, ComparedTrace } from "@/lib/core/delta/compared-sweep";
+import type { ComparedSweep } from "@/lib/core/delta/compared-sweep";
 import { pairSweeps } from "@/lib/core/delta/pair-sweeps";
-import type { LinkSettings } from "@/lib/core/link/link-settings";
-import type { MeasurementSettings } from "@/lib/core/sweep/settings";
-
-const SETTINGS: MeasurementSettings = {
-  rbwHz: 120e3,
-  rbwKind: "6dB",
-  vbwHz: null,
-  sweepTimeS: 1,
-  attenuationDb: 10,
-  preamplifier: false,
-  referenceLevelDb: null,
-  polarization: "horizontal",
-  heightM: 1,
-  azimuthDeg: 0,
-  distanceM: 3,
-  port: "radiated",
-};
-
-const NO_LINK: LinkSettings = {
-  bitRateHz: null,
-  payload: null,
-  patternBits: null,
-  scrambler: null,
-  scramblerPolynomial: null,
-  scramblerRestartBits: null,
-  coding: null,
-  spread: null,
-  spreadOff: null,
-  edgeTimeS: null,
-  cable: null,
-};
-
-const TRACE: ComparedTrace = {
-  name: "Peak",
-  kind: "scan",
-  detector: "peak",
-  hold: "max-hold",
-  unit: "dBuV/m",
-  firstHz: 30e6,
-  lastHz: 1e9,
-  stepHz: 60e3,
-  maxDb: 50,
-  floorDb: 20,
-  powerSumDb: 120,
-};
-
-function sweep(
-  part: Partial<Omit<ComparedSweep, "settings">> & { settings?: Partial<MeasurementSettings> } = {},
-): ComparedSweep {
-  return {
-    id: "a",
-    name: "Step 0",
-    purpose: "product",
-    benchId: "bench",
-    benchName: "Bench",
-    signalPathRevisionId: "path",
-    signalPathRevision: 1,
-    corrected: false,
-    link: NO_LINK,
-    traces: [TRACE],
-    readings: [],
-    ...part,
-    settings: { ...SETTINGS, ...part.settings },
-  };
-}
-
-const reading = (marginDb: number, decidedBy: "peak" | "quasi-peak" = "peak") => ({
-  maskRevisionId: "mask-1",
-  maskTitle: "A mask",
-  lines: [{ name: "Quasi-peak", standing: "clear" as const, marginDb, decidedBy, bands: [] }],
-  suspects: [],
-});
+import { reading, sweep, TRACE } from "./delta-fixtures";
 
 const compareSweeps = (before: ComparedSweep, after: ComparedSweep) =>
   compareSides([before], [after]);

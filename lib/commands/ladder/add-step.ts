@@ -1,8 +1,8 @@
-import { and, eq, max } from "drizzle-orm";
 import { ladderSteps } from "@/db/schema";
 import type { Context } from "@/lib/auth/context";
 import { change, parseInput, requirePermission } from "../run";
-import { lockOpenLadder } from "./lock-ladder";
+import { checkBranch } from "./check-branch";
+import { listSteps, lockOpenLadder } from "./lock-ladder";
 import { addStepSchema } from "./schemas";
 
 /** Adds a step after the last one of its ladder. */
@@ -13,11 +13,9 @@ export async function addStep(ctx: Context, input: unknown): Promise<{ stepId: s
   return change(ctx, async (tx, audit) => {
     // The lock keeps two steps added at once from taking the same place.
     const ladder = await lockOpenLadder(tx, teamId, values.ladderId);
-    const [last] = await tx
-      .select({ position: max(ladderSteps.position) })
-      .from(ladderSteps)
-      .where(and(eq(ladderSteps.teamId, teamId), eq(ladderSteps.ladderId, ladder.id)));
-    const position = (last?.position ?? -1) + 1;
+    const steps = await listSteps(tx, teamId, ladder.id);
+    const position = (steps.at(-1)?.position ?? -1) + 1;
+    checkBranch(steps, values.branchOfId, position);
     const [row] = await tx
       .insert(ladderSteps)
       .values({ teamId, position, ...values })

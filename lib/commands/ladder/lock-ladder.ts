@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { and, asc, eq } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { ladders, ladderSteps } from "@/db/schema";
 import { CommandError } from "../result";
@@ -21,6 +21,15 @@ export async function lockOpenLadder(tx: Transaction, teamId: string, ladderId: 
     throw new CommandError("conflict", "This ladder is archived: restore it first.");
   }
   return ladder;
+}
+
+/** Steps of a ladder in their order. */
+export function listSteps(tx: Transaction, teamId: string, ladderId: string) {
+  return tx
+    .select()
+    .from(ladderSteps)
+    .where(and(eq(ladderSteps.teamId, teamId), eq(ladderSteps.ladderId, ladderId)))
+    .orderBy(asc(ladderSteps.position));
 }
 
 /** A step of a ladder that is not archived; the ladder is locked, so its steps stay in order. */

@@ -20,6 +20,12 @@ export async function removeStep(ctx: Context, input: unknown): Promise<{ stepId
     if (held && held.sweeps > 0) {
       throw new CommandError("conflict", "This step has sweeps, and a sweep keeps its step.");
     }
+    const [branch] = await tx
+      .select({ name: ladderSteps.name })
+      .from(ladderSteps)
+      .where(and(eq(ladderSteps.teamId, teamId), eq(ladderSteps.branchOfId, stepId)))
+      .limit(1);
+    if (branch) throw new CommandError("conflict", `“${branch.name}” starts from this step.`);
     const [later] = await tx
       .select({ id: ladderSteps.id })
       .from(ladderSteps)

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { STEP_STATES } from "@/lib/core/delta/ladder-order";
 import { storable } from "../storable-text";
 
 const name = storable
@@ -21,8 +22,33 @@ export const editLadderSchema = z.object({ ladderId: z.uuid(), name, notes });
 
 export const ladderIdSchema = z.object({ ladderId: z.uuid() });
 
-export const addStepSchema = z.object({ ladderId: z.uuid(), name, description });
+const branchOfId = z.uuid("Choose a step of this ladder to start from.").nullable();
 
-export const editStepSchema = z.object({ stepId: z.uuid(), name, description });
+export const addStepSchema = z.object({
+  ladderId: z.uuid(),
+  name,
+  description,
+  /** The step that it starts from; null: the last kept one before it. */
+  branchOfId: branchOfId.default(null),
+});
+
+export const editStepSchema = z.object({
+  stepId: z.uuid(),
+  name,
+  description,
+  /** Left out: stays as it is. */
+  branchOfId: branchOfId.optional(),
+});
 
 export const stepIdSchema = z.object({ stepId: z.uuid() });
+
+export const stepStateSchema = z.object({
+  stepId: z.uuid(),
+  state: z.enum(STEP_STATES, "Choose kept or dropped."),
+});
+
+export const reorderStepsSchema = z.object({
+  ladderId: z.uuid(),
+  /** Every step of the ladder once, in the wanted order. */
+  stepIds: z.array(z.uuid()).min(1).max(1000),
+});

@@ -51,6 +51,8 @@ export interface ComparedSuspect {
 export interface ComparedReading {
   maskRevisionId: string;
   maskTitle: string;
+  /** Guard that the sweep was read with, dB. */
+  guardDb: number;
   lines: ComparedLine[];
   suspects: ComparedSuspect[];
 }

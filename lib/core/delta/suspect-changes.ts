@@ -70,14 +70,19 @@ function followPair(
   const afterTraces = after.map((sweep) => levels.get(sweep.id)?.[pair.afterIndex]);
 
   const taken = new Map<string, { of: Set<keyof SuspectChanges>; change: SuspectChange }>();
+  const told = new Set<Candidate>();
   const take = (own: Candidate, others: readonly Candidate[], alone: "fresh" | "gone") => {
+    // It is what became of a stronger suspect on the other side, and told there.
+    if (told.has(own)) return;
+    const same = others.filter((other) => isSame(own, other));
+    for (const other of same) told.add(other);
     const found = measured(beforeTraces, own.window);
     const next = measured(afterTraces, own.window);
     const beforeAtHz = strongestHz(found);
     const afterAtHz = strongestHz(next);
     // Two suspects in whose windows the same samples stand highest are told as one.
     const key = `${beforeAtHz} ${afterAtHz}`;
-    const kind = others.some((other) => isSame(own, other)) ? "followed" : alone;
+    const kind = same.length > 0 ? "followed" : alone;
     const known = taken.get(key);
     if (known) {
       known.of.add(kind);

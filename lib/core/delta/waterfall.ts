@@ -143,6 +143,8 @@ export interface WaterfallLine {
   maskRevisionId: string;
   maskTitle: string;
   lineName: string;
+  /** The largest guard that a sweep of the ladder was read with, dB. */
+  guardDb: number;
   bands: { startHz: number; stopHz: number }[];
 }
 
@@ -151,11 +153,13 @@ export function linesOfLadder(steps: readonly WaterfallStep[]): WaterfallLine[] 
   const lines = new Map<string, WaterfallLine>();
   for (const sweep of steps.flatMap((step) => step.sweeps)) {
     if (sweep.purpose !== "product") continue;
-    for (const { maskRevisionId, maskTitle, lines: own } of sweep.readings)
+    for (const { maskRevisionId, maskTitle, guardDb, lines: own } of sweep.readings)
       for (const { name, marginDb, bands } of own) {
         if (marginDb === null) continue;
         const key = `${maskRevisionId} ${name}`;
-        const line = lines.get(key) ?? { maskRevisionId, maskTitle, lineName: name, bands: [] };
+        const fresh = { maskRevisionId, maskTitle, lineName: name, guardDb, bands: [] };
+        const line: WaterfallLine = lines.get(key) ?? fresh;
+        line.guardDb = Math.max(line.guardDb, guardDb);
         lines.set(key, line);
         for (const { startHz, stopHz, marginDb: margin } of bands) {
           const isKnown = line.bands.some((b) => b.startHz === startHz && b.stopHz === stopHz);

@@ -6,8 +6,10 @@ import type { StepState } from "@/lib/core/delta/ladder-order";
 import { baseOfStep, lineOfSteps } from "@/lib/core/delta/ladder-order";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
-import type { HeldReading, MaskStanding } from "../sweep/load-readings";
-import { loadReadings, worstStanding } from "../sweep/load-readings";
+import type { HeldReading } from "../sweep/load-readings";
+import { loadReadings } from "../sweep/load-readings";
+import type { MaskStanding } from "../sweep/standings";
+import { worstStanding } from "../sweep/standings";
 import { loadComparedSweeps, loadLevels } from "../sweep/load-compared";
 import { loadAcceptances } from "./load-acceptances";
 import type { StepDeltas } from "./step-deltas";
@@ -100,11 +102,12 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
     tolerancePpm: await largestTolerance(tx, teamId, ladder.buildId),
   });
   const line = new Set(lineOfSteps(rows).map((row) => row.id));
-  const steps = ordered.map((row, i): LadderStep => {
+  const steps: LadderStep[] = [];
+  for (const [i, row] of ordered.entries()) {
     const { id, position, name, description, branchOfId, state } = row;
     const own = placed.filter((s) => s.stepId === id && s.purpose === "product");
     const base = baseOfStep(rows, i);
-    return {
+    steps.push({
       id,
       position,
       name,
@@ -115,14 +118,20 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
       isOnLine: line.has(id),
       link: own.at(-1)?.link ?? null,
       onRecord: own.some((sweep) => sweep.onRecord),
-      worst: worstStanding(held.filter((row) => own.some((s) => s.id === row.sweepId))),
+      worst: await worstStanding(
+        tx,
+        teamId,
+        held.filter(({ sweepId }) => own.some((sweep) => sweep.id === sweepId)),
+      ),
       sweeps: row.sweeps,
       againstPrevious: deltas[i]?.againstPrevious ?? [],
       againstStart: deltas[i]?.againstStart ?? [],
       unpaired: deltas[i]?.unpaired ?? [],
-    };
-  });
-  return { ...ladder, steps, masks: masksOf(held) };
+    });
+  }
+  const isUnsure = ({ mask }: HeldReading) => mask.provenance === "from memory";
+  const fromMemory = held.filter(isUnsure).map((row) => row.maskRevisionId);
+  return { ...ladder, steps, masks: masksOf(held), fromMemory: [...new Set(fromMemory)] };
 }
 
 /** Largest stated tolerance of a build's clocks in ppm: which clock a line is of is not known. */

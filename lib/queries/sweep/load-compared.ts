@@ -84,6 +84,7 @@ function comparedReading(
   return {
     maskRevisionId,
     maskTitle: mask.title,
+    guardDb: reading.guardDb,
     lines: reading.lines.map((line) => ({
       name: line.name,
       standing: line.standing,

@@ -6,7 +6,9 @@ import { createLadder } from "@/lib/commands/ladder/create-ladder";
 import { editLadder } from "@/lib/commands/ladder/edit-ladder";
 import { editStep } from "@/lib/commands/ladder/edit-step";
 import { removeStep } from "@/lib/commands/ladder/remove-step";
+import { reorderSteps } from "@/lib/commands/ladder/reorder-steps";
 import { restoreLadder } from "@/lib/commands/ladder/restore-ladder";
+import { setStepState } from "@/lib/commands/ladder/set-step-state";
 import { archiveBuild } from "@/lib/commands/program/archive-build";
 import { createBuild } from "@/lib/commands/program/create-build";
 import { archiveSweep } from "@/lib/commands/sweep/archive-sweep";
@@ -30,9 +32,10 @@ async function arrange() {
   const place = await makePlace(ctx);
   const ladderId = await makeLadder(ctx, place.buildId);
   const { stepId } = await addStep(ctx, { ladderId, name: "Scrambler on", description: "" });
+  const startId = (await readLadder(ctx, ladderId))?.steps[0]?.id ?? "";
   const asideId = await makeLadder(ctx, place.buildId, "Aside");
   await archiveLadder(ctx, { ladderId: asideId });
-  return { ctx, place, ladderId, stepId, asideId };
+  return { ctx, place, ladderId, startId, stepId, asideId };
 }
 type Arranged = Awaited<ReturnType<typeof arrange>>;
 
@@ -59,6 +62,7 @@ const CASES: [string, Command, (m: Arranged) => Record<string, unknown>, string]
   ["restoreLadder", restoreLadder, (m) => ({ ladderId: m.asideId }), "ladder.restore"],
   ["addStep", addStep, (m) => ({ ladderId: m.ladderId, name: "C", description: "d" }), "step.add"],
   ["editStep", editStep, (m) => ({ stepId: m.stepId, name: "C", description: "d" }), "step.edit"],
+  ["setStepState", setStepState, (m) => ({ stepId: m.stepId, state: "dropped" }), "step.set-state"],
   ["removeStep", removeStep, (m) => ({ stepId: m.stepId }), "step.remove"],
 ];
 
@@ -159,7 +163,7 @@ describe("a ladder", () => {
   });
 
   test("leaves the build's list when archived, stays as it is, and comes back", async () => {
-    const { ctx, place, ladderId, stepId } = await arrange();
+    const { ctx, place, ladderId, startId, stepId } = await arrange();
     const listed = async () =>
       (await readBuild(ctx, place.buildId))?.ladders.map((ladder) => [ladder.name, ladder.steps]);
     expect(await listed()).toEqual([["Link", 2]]);
@@ -170,6 +174,8 @@ describe("a ladder", () => {
       () => editLadder(ctx, { ladderId, name: "x", notes: "" }),
       () => addStep(ctx, { ladderId, name: "x", description: "" }),
       () => editStep(ctx, { stepId, name: "x", description: "" }),
+      () => setStepState(ctx, { stepId, state: "dropped" }),
+      () => reorderSteps(ctx, { ladderId, stepIds: [startId, stepId] }),
       () => removeStep(ctx, { stepId }),
     ]) {
       await expect(tried()).rejects.toMatchObject({ code: "conflict" });

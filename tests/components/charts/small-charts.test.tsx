@@ -1,8 +1,6 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, it } from "vitest";
 import { STANDINGS } from "@/lib/core/reading/reading";
-import { DeltaBars } from "@/components/charts/delta-bars";
-import { prepareBars } from "@/components/charts/prepare-bars";
 import { prepareFactors } from "@/components/charts/prepare-factors";
 import { StandingShape } from "@/components/charts/standing-shape";
 import { TraceThumb } from "@/components/charts/trace-thumb";
@@ -15,47 +13,6 @@ describe("standing shapes", () => {
       renderToStaticMarkup(<StandingShape standing={standing} />).replace(/var\(--[a-z-]+\)/g, ""),
     );
     expect(new Set(shapes).size).toBe(STANDINGS.length);
-  });
-});
-
-describe("delta bars", () => {
-  it("share one zero and one scale", () => {
-    const { zeroPercent, bars } = prepareBars([
-      { label: "A", changeDb: 6 },
-      { label: "B", changeDb: -2 },
-    ]);
-    expect(zeroPercent).toBe(25);
-    expect(bars[0]).toMatchObject({ leftPercent: 25, widthPercent: 75 });
-    expect(bars[1]).toMatchObject({ leftPercent: 0, widthPercent: 25 });
-  });
-
-  it("survive nothing, nulls and zeros alone", () => {
-    expect(prepareBars([]).bars).toEqual([]);
-    const { bars } = prepareBars([
-      { label: "A", changeDb: null },
-      { label: "B", changeDb: 0 },
-      { label: "C", changeDb: Number.NaN },
-    ]);
-    expect(bars.map((bar) => [bar.changeDb, bar.widthPercent])).toEqual([
-      [null, 0],
-      [0, 0],
-      [null, 0],
-    ]);
-  });
-
-  it("write every value, and say when two sweeps cannot be compared", () => {
-    const html = renderToStaticMarkup(
-      <DeltaBars
-        items={[
-          { label: "Scrambler on", changeDb: 6.4 },
-          { label: "Ferrite", changeDb: -1 },
-          { label: "Gasket", changeDb: null },
-        ]}
-      />,
-    );
-    expect(html).toContain("+6.4 dB");
-    expect(html).toContain("\u22121.0 dB");
-    expect(html).toContain("not comparable");
   });
 });
 

@@ -1,9 +1,9 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
-import { DeltaBars } from "@/components/charts/delta-bars";
 import { Overlay } from "@/components/ladders/overlay";
 import { Rung } from "@/components/ladders/rung";
 import { StepForm } from "@/components/ladders/step-form";
+import { Waterfall } from "@/components/ladders/waterfall";
 import { ActionButton } from "@/components/ui/action-button";
 import { ButtonLink } from "@/components/ui/button";
 import { ConfirmButton } from "@/components/ui/confirm-button";
@@ -15,15 +15,19 @@ import { formatMargin } from "@/lib/core/units/format";
 import type { LadderDetail } from "@/lib/queries/ladder/load-ladder-steps";
 import { readLadder } from "@/lib/queries/ladder/read-ladder";
 import {
+  acceptDifference,
   appendStep,
   changeStep,
   fetchLadderBack,
+  markStep,
   putLadderAside,
   putStepOnRecord,
+  putStepsInOrder,
+  takeAcceptanceBack,
   takeStepAway,
 } from "../actions";
 import { chooseOverlay, overlaySweeps } from "./prepare-overlay";
-import { boughtPerLine, ladderAnswer } from "./prepare-steps";
+import { ladderAnswer, rungOf, waterfallsOf } from "./prepare-steps";
 
 export const metadata: Metadata = { title: "Ladder" };
 
@@ -35,7 +39,13 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
   const mayWrite = isAllowed(ctx, "sweep.write") && ladder.archivedAt === null;
   const answer = ladderAnswer(ladder.steps);
   const overlay = chooseOverlay(ladder);
-  const bought = ladder.steps.length > 1 ? boughtPerLine(ladder.steps) : [];
+  const bought = ladder.steps.length > 1 ? waterfallsOf(ladder) : [];
+  const order = ladder.steps.map(({ id, position, name, branchOfId }) => ({
+    id,
+    position,
+    name,
+    branchOfId,
+  }));
   return (
     <>
       <PageHead
@@ -72,16 +82,9 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
       {bought.length > 0 ? (
         <Section
           title="What each step bought"
-          lead="Change of the worst margin of each mask line against the step before."
+          lead="Worst margin from step 0 to the product as it stands. Each step is held against the last kept one before it, or against the one that it starts from."
         >
-          <div className="grid gap-x-12 gap-y-6 lg:grid-cols-2">
-            {bought.map((line) => (
-              <div key={line.key}>
-                <h3 className="mb-2 text-base">{line.title}</h3>
-                <DeltaBars items={line.items} />
-              </div>
-            ))}
-          </div>
+          <Waterfall lines={bought} targetDb={ladder.targetMarginDb} />
         </Section>
       ) : null}
       {overlay ? (
@@ -96,21 +99,35 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
       ) : null}
       <Section title="Steps">
         <ol className="ml-4">
-          {ladder.steps.map((step, i) => (
+          {ladder.steps.map((step) => (
             <Rung
               key={step.id}
-              step={step}
+              step={rungOf(step)}
+              steps={order}
               buildId={ladder.buildId}
-              isLast={i === ladder.steps.length - 1}
               mayWrite={mayWrite}
-              actions={{ edit: changeStep, remove: takeStepAway, record: putStepOnRecord }}
+              fromMemory={ladder.fromMemory}
+              actions={{
+                edit: changeStep,
+                remove: takeStepAway,
+                record: putStepOnRecord,
+                mark: markStep,
+                reorder: putStepsInOrder.bind(null, ladder.id),
+                accept: acceptDifference,
+                withdraw: takeAcceptanceBack,
+              }}
             />
           ))}
         </ol>
       </Section>
       {mayWrite ? (
         <Section title="Add a step">
-          <StepForm action={appendStep} about={{ ladderId: ladder.id }} label="Add step" />
+          <StepForm
+            action={appendStep}
+            about={{ ladderId: ladder.id }}
+            earlier={order}
+            label="Add step"
+          />
         </Section>
       ) : null}
     </>

@@ -1,10 +1,14 @@
-import { formatMargin } from "@/lib/core/units/format";
-import type { LadderStep } from "@/lib/queries/ladder/load-ladder-steps";
+import { marginNow } from "@/components/charts/prepare-waterfall";
+import type { RungStep } from "@/components/ladders/rung-types";
+import type { WaterfallView } from "@/components/ladders/waterfall";
+import { linesOfLadder, waterfallOf } from "@/lib/core/delta/waterfall";
+import { formatFrequency, formatMargin } from "@/lib/core/units/format";
+import type { LadderDetail, LadderStep } from "@/lib/queries/ladder/load-ladder-steps";
 import { worstOf } from "@/lib/queries/sweep/worst-of";
 
-/** What the whole ladder did to its worst margin, first step to last; null when it cannot be told. */
+/** What the ladder did to its worst margin, from step 0 to the product as it stands; null when it cannot be told. */
 export function ladderAnswer(steps: LadderStep[]): { changeDb: number; text: string } | null {
-  const last = [...steps].reverse().find((step) => step.sweeps.length > 0);
+  const last = steps.findLast((step) => step.isOnLine && step.sweeps.length > 0);
   if (!last || last.position === 0) return null;
   const changes = last.againstStart.flatMap((delta) => delta.changes?.margins ?? []);
   const worst = worstOf(
@@ -23,30 +27,38 @@ export function ladderAnswer(steps: LadderStep[]): { changeDb: number; text: str
   };
 }
 
-/** For each mask line that has any margin: the change of every step against the one before. */
-export function boughtPerLine(steps: LadderStep[]) {
-  const lines = new Map<string, string>();
-  for (const step of steps) {
-    for (const sweep of step.sweeps) {
-      for (const reading of sweep.readings) {
-        for (const line of reading.lines) {
-          if (line.marginDb !== null && sweep.purpose === "product")
-            lines.set(
-              `${reading.maskRevisionId} ${line.name}`,
-              `${line.name} line of ${reading.maskTitle}`,
-            );
-        }
-      }
-    }
-  }
-  return [...lines].map(([key, title]) => ({
-    key,
-    title,
-    items: steps.slice(1).map((step) => {
-      const found = step.againstPrevious
-        .flatMap((delta) => delta.changes?.margins ?? [])
-        .find((margin) => `${margin.maskRevisionId} ${margin.lineName}` === key);
-      return { label: `${step.position} ${step.name}`, changeDb: found?.changeDb ?? null };
-    }),
-  }));
+/** For each mask line that has any margin: what every step bought, whole and band by band. */
+export function waterfallsOf(ladder: LadderDetail): WaterfallView[] {
+  const { steps, fromMemory } = ladder;
+  const now = (view: WaterfallView) => marginNow(view.parts[0]?.bars ?? []) ?? Infinity;
+  return linesOfLadder(steps)
+    .map(({ maskRevisionId, maskTitle, lineName, guardDb, bands }): WaterfallView => {
+      const part = (key: string, title: string, band: (typeof bands)[number] | null) => ({
+        key,
+        title,
+        bars: waterfallOf(steps, { maskRevisionId, lineName, band }),
+      });
+      return {
+        key: `${maskRevisionId} ${lineName}`,
+        title: `${lineName} line of ${maskTitle}`,
+        isFromMemory: fromMemory.includes(maskRevisionId),
+        guardDb,
+        parts: [
+          part("whole", "Whole line", null),
+          ...(bands.length > 1 ? bands : []).map((band) =>
+            part(
+              `${band.startHz} ${band.stopHz}`,
+              `${formatFrequency(band.startHz)} to ${formatFrequency(band.stopHz)}`,
+              band,
+            ),
+          ),
+        ],
+      };
+    })
+    .sort((a, b) => now(a) - now(b));
+}
+
+/** A step as its rung shows it: no more of its sweeps than their names. */
+export function rungOf({ sweeps, ...step }: LadderStep): RungStep {
+  return { ...step, sweeps: sweeps.map(({ id, name, purpose }) => ({ id, name, purpose })) };
 }

@@ -176,7 +176,12 @@ export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
         impedanceOhm: 50,
         context: {
           ambientTaken: false,
-          overdueTransducers: ["Broadband antenna, 30 MHz to 1 GHz"],
+          calibration: {
+            overdue: ["Broadband antenna, 30 MHz to 1 GHz"],
+            unstated: [],
+            isDateKnown: true,
+            isCorrected: false,
+          },
         },
       }),
     })),

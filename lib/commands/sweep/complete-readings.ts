@@ -1,5 +1,5 @@
 import type { SQL } from "drizzle-orm";
-import { and, eq, isNull, sql } from "drizzle-orm";
+import { and, eq, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import {
   builds,
@@ -10,10 +10,13 @@ import {
   signalPathRevisions,
   sweeps,
 } from "@/db/schema";
-import { loadTraces } from "@/lib/queries/sweep/load-trace";
-import { overdueOn } from "./overdue";
+import { prepareParts } from "@/lib/core/reading/prepare-parts";
+import { loadFileLevels, loadTraces } from "@/lib/queries/sweep/load-trace";
+import { loadAmbients } from "./hold-ambient";
+import { isRevisionToRead } from "./list-program-masks";
 import type { SweepToRead } from "./store-reading";
 import { storeReading } from "./store-reading";
+import { partOf } from "./sweep-to-read";
 
 /** Which sweeps to look at: all that concern one program or one mask, or a single one. */
 type Scope = { programId: string } | { maskId: string } | { sweepId: string };
@@ -24,21 +27,22 @@ function inScope(scope: Scope): SQL {
   return eq(builds.programId, scope.programId);
 }
 
-/** Product sweeps in scope and the newest mask revisions that they have not been held against. */
+/** Product sweeps in scope and the mask revisions that they have not been held against yet. */
 function selectMissing(tx: Transaction, teamId: string, scope: Scope) {
-  const newest = sql`${maskRevisions.revision} = (
-    select max(r.revision) from mask_revisions r
-    where r.team_id = ${maskRevisions.teamId} and r.mask_id = ${maskRevisions.maskId})`;
   return tx
     .select({
       sweepId: sweeps.id,
       settings: sweeps.settings,
       guardDb: sweeps.guardDb,
       measuredOn: sweeps.measuredOn,
+      corrected: sweeps.corrected,
+      instrument: sweeps.instrument,
+      benchId: sweeps.benchId,
       path: signalPathRevisions.content,
       maskId: masks.id,
       revisionId: maskRevisions.id,
       content: maskRevisions.content,
+      restated: programMasks.restateDistance,
     })
     .from(sweeps)
     .innerJoin(builds, and(eq(builds.teamId, sweeps.teamId), eq(builds.id, sweeps.buildId)))
@@ -49,7 +53,11 @@ function selectMissing(tx: Transaction, teamId: string, scope: Scope) {
     .innerJoin(masks, and(eq(masks.teamId, programMasks.teamId), eq(masks.id, programMasks.maskId)))
     .innerJoin(
       maskRevisions,
-      and(eq(maskRevisions.teamId, masks.teamId), eq(maskRevisions.maskId, masks.id), newest),
+      and(
+        eq(maskRevisions.teamId, masks.teamId),
+        eq(maskRevisions.maskId, masks.id),
+        isRevisionToRead(),
+      ),
     )
     .innerJoin(
       signalPathRevisions,
@@ -64,6 +72,7 @@ function selectMissing(tx: Transaction, teamId: string, scope: Scope) {
         eq(readings.teamId, sweeps.teamId),
         eq(readings.sweepId, sweeps.id),
         eq(readings.maskRevisionId, maskRevisions.id),
+        eq(readings.restated, programMasks.restateDistance),
       ),
     )
     .where(
@@ -92,14 +101,13 @@ export async function completeReadings(
   // Rows come ordered by sweep, so that only one sweep's levels are in memory at a time.
   for (const row of missing) {
     if (sweep?.sweepId !== row.sweepId) {
+      const traces = await loadTraces(tx, teamId, row.sweepId);
+      const fileLevels = await loadFileLevels(tx, teamId, row.sweepId);
       sweep = {
         teamId,
         sweepId: row.sweepId,
-        traces: await loadTraces(tx, teamId, row.sweepId),
-        settings: row.settings,
-        guardDb: row.guardDb,
-        impedanceOhm: row.path.impedanceOhm,
-        overdueTransducers: overdueOn(row.path, row.measuredOn),
+        prepared: prepareParts([partOf(row, traces, fileLevels)]),
+        ambients: await loadAmbients(tx, teamId, row),
       };
     }
     await storeReading(tx, sweep, row);

@@ -4,21 +4,25 @@ import { applySignalPath } from "@/lib/core/bench/apply-signal-path";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
 import { reachesMask } from "@/lib/core/reading/combine-readings";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
+import { prepareParts } from "@/lib/core/reading/prepare-parts";
 import type { Standing } from "@/lib/core/reading/reading";
+import { pointCount } from "@/lib/core/sweep/axis";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 import { parseSweepFile } from "@/lib/formats/parse-sweep-file";
+import { loadBenchQuality } from "../bench/load-bench-quality";
 import { sha256Of, storeFile } from "../file/store-file";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
 import { findBench, findBuild } from "./find-place";
 import { findSameFile, holdFile } from "./find-same-file";
+import { holdAmbientBesideReadings, loadAmbients } from "./hold-ambient";
 import { listProgramMasks } from "./list-program-masks";
-import { overdueOn } from "./overdue";
 import type { ImportSweepInput } from "./schemas";
 import { importSweepSchema } from "./schemas";
 import { storeReading } from "./store-reading";
 import { storeTrace } from "./store-trace";
+import { partOf } from "./sweep-to-read";
 
 /** The traces of the file, or the reason why they cannot be had, standing at the file. */
 function readTraces({ bytes, fileName, answers }: ImportSweepInput): Trace[] {
@@ -45,6 +49,13 @@ function throughPath(traces: Trace[], path: SignalPath, corrected: boolean): Tra
       },
     );
   });
+}
+
+/** Highest level of a trace; null without any. */
+function highestLevel({ axis, levelsDb }: Trace): number | null {
+  let highest = Number.NEGATIVE_INFINITY;
+  for (const level of levelsDb.subarray(0, pointCount(axis))) if (level > highest) highest = level;
+  return Number.isFinite(highest) ? highest : null;
 }
 
 export interface ImportedSweep {
@@ -75,6 +86,13 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
         file: `The same bytes were imported before, as ${where}. Choose to import them again if you mean it.`,
       });
     }
+    const { instrument, budgetId } = await loadBenchQuality(
+      tx,
+      teamId,
+      values.benchId,
+      values.measuredOn,
+    );
+    const fileLevels = read.map(highestLevel);
     const traces = throughPath(read, bench.path, values.corrected);
     const { fileId, sha256 } = await storeFile(tx, ctx, values.bytes, "text/csv");
     const { bytes: _bytes, answers: _answers, again: _again, ...kept } = values;
@@ -86,6 +104,8 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
         fileId,
         signalPathRevisionId: bench.pathRevisionId,
         guardDb: bench.guardDb,
+        instrument,
+        budgetId,
         onRecord: values.onRecord && values.purpose === "product",
         importedBy: ctx.userId,
       })
@@ -94,23 +114,24 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
     const place = { teamId, sweepId: row.id };
     for (const [position, trace] of traces.entries()) {
       const fileUnit = read[position]?.unit ?? trace.unit;
-      await storeTrace(tx, { ...place, position, fileUnit, rbwHz: values.settings.rbwHz }, trace);
+      const fileMaxDb = fileLevels[position] ?? null;
+      const rbwHz = values.settings.rbwHz;
+      await storeTrace(tx, { ...place, position, fileUnit, fileMaxDb, rbwHz }, trace);
     }
     const readings: ImportedSweep["readings"] = [];
     if (values.purpose === "product") {
+      const { guardDb, path } = bench;
+      const facts = { ...values, guardDb, path, instrument };
       const sweep = {
         ...place,
-        traces,
-        settings: values.settings,
-        guardDb: bench.guardDb,
-        impedanceOhm: bench.path.impedanceOhm,
-        overdueTransducers: overdueOn(bench.path, values.measuredOn),
+        prepared: prepareParts([partOf(facts, traces, fileLevels)]),
+        ambients: await loadAmbients(tx, teamId, values),
       };
       for (const mask of await listProgramMasks(tx, teamId, programId)) {
         const reading = await storeReading(tx, sweep, mask);
         // A mask that the sweep does not reach says nothing about it.
         const deciding = decidingPoint(reading);
-        if (!deciding || !reachesMask(reading)) continue;
+        if (!mask.isInForce || !deciding || !reachesMask(reading)) continue;
         readings.push({
           maskTitle: mask.content.title,
           standing: reading.standing,
@@ -118,6 +139,7 @@ export async function importSweep(ctx: Context, input: unknown): Promise<Importe
         });
       }
     }
+    if (values.purpose === "ambient") await holdAmbientBesideReadings(tx, teamId, row.id);
     await audit({
       action: "sweep.import",
       subjectType: "sweep",

@@ -6,7 +6,7 @@ import { CommandError } from "../result";
 /** The place of a sweep, archived or not, locked until the transaction ends. */
 export async function lockSweep(tx: Transaction, teamId: string, sweepId: string) {
   const [sweep] = await tx
-    .select({ buildId: sweeps.buildId, archivedAt: sweeps.archivedAt })
+    .select({ buildId: sweeps.buildId, purpose: sweeps.purpose, archivedAt: sweeps.archivedAt })
     .from(sweeps)
     .where(and(eq(sweeps.teamId, teamId), eq(sweeps.id, sweepId)))
     .for("no key update");

@@ -4,6 +4,7 @@ import type { Context } from "@/lib/auth/context";
 import { CommandError } from "../result";
 import { change, parseInput, requirePermission } from "../run";
 import { completeReadings } from "./complete-readings";
+import { holdAmbientBesideReadings } from "./hold-ambient";
 import { holdProgramMasks } from "./list-program-masks";
 import { lockSweep } from "./lock-sweep";
 import { sweepIdSchema } from "./schemas";
@@ -28,6 +29,7 @@ export async function restoreSweep(ctx: Context, input: unknown): Promise<{ swee
     if (program) await holdProgramMasks(tx, ctx.teamId, program.id);
     // Masks may have come or changed while it lay aside.
     await completeReadings(tx, ctx.teamId, { sweepId });
+    if (sweep.purpose === "ambient") await holdAmbientBesideReadings(tx, ctx.teamId, sweepId);
     await audit({ action: "sweep.restore", subjectType: "sweep", subjectId: sweepId });
     return { sweepId };
   });

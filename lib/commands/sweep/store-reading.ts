@@ -2,40 +2,37 @@ import type { Transaction } from "@/db/client";
 import { readings } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
+import type { PreparedParts } from "@/lib/core/reading/prepare-parts";
+import { withRestating } from "@/lib/core/reading/prepare-parts";
+import { readPrepared } from "@/lib/core/reading/read-together";
 import type { Reading } from "@/lib/core/reading/reading";
-import { readSweep } from "@/lib/core/reading/read-sweep";
-import type { MeasurementSettings } from "@/lib/core/sweep/settings";
-import type { Trace } from "@/lib/core/sweep/trace";
+import type { LoadedAmbient } from "./hold-ambient";
+import { holdReadingBesideAmbients } from "./hold-ambient";
 import { storeSuspects } from "./store-suspects";
 
 export interface MaskToHold {
   maskId: string;
   revisionId: string;
   content: Mask;
+  /** The program asks for levels restated to the mask's distance. */
+  restated: boolean;
 }
 
 export interface SweepToRead {
   teamId: string;
   sweepId: string;
-  traces: Trace[];
-  settings: MeasurementSettings;
-  guardDb: number;
-  impedanceOhm: number;
-  overdueTransducers: string[];
+  prepared: PreparedParts;
+  /** Ambient sweeps of the same bench and day. */
+  ambients: readonly LoadedAmbient[];
 }
 
-/** Holds a sweep against one mask revision and keeps the reading with its suspects. */
+/** Holds a sweep against one mask revision and keeps the reading, its suspects and its ambient. */
 export async function storeReading(
   tx: Transaction,
-  sweep: SweepToRead,
+  { teamId, sweepId, prepared, ambients }: SweepToRead,
   mask: MaskToHold,
 ): Promise<Reading> {
-  const { teamId, sweepId, overdueTransducers, ...measured } = sweep;
-  const reading = readSweep({
-    ...measured,
-    mask: mask.content,
-    context: { overdueTransducers },
-  });
+  const reading = readPrepared(withRestating(prepared, mask.restated), mask.content);
   const { suspects: found, ...content } = reading;
   const deciding = decidingPoint(reading);
   const [row] = await tx
@@ -46,6 +43,7 @@ export async function storeReading(
       maskId: mask.maskId,
       maskRevisionId: mask.revisionId,
       engineVersion: reading.engineVersion,
+      restated: mask.restated,
       standing: reading.standing,
       marginDb: deciding?.point.marginDb ?? null,
       marginAtHz: deciding?.point.frequencyHz ?? null,
@@ -57,5 +55,6 @@ export async function storeReading(
     .returning({ id: readings.id });
   if (!row) throw new Error("The reading was not stored.");
   await storeSuspects(tx, { teamId, readingId: row.id }, found);
+  if (ambients.length > 0) await holdReadingBesideAmbients(tx, teamId, row.id, ambients);
   return reading;
 }

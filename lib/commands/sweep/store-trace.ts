@@ -14,12 +14,14 @@ interface TracePlace {
   position: number;
   /** Unit in the file, before the signal path. */
   fileUnit: LevelUnit;
+  /** Highest level in the file's unit, before the signal path. */
+  fileMaxDb: number | null;
   rbwHz: number | null;
 }
 
 /** Stores a trace: what it is known by, its levels in blocks, and the pyramid over them. */
 export async function storeTrace(tx: Transaction, place: TracePlace, trace: Trace): Promise<void> {
-  const { teamId, sweepId, position, fileUnit, rbwHz } = place;
+  const { teamId, sweepId, position, fileUnit, fileMaxDb, rbwHz } = place;
   const { axis } = trace;
   const stored: StoredAxis =
     axis.kind === "regular" ? axis : { kind: "listed", count: pointCount(axis) };
@@ -35,6 +37,7 @@ export async function storeTrace(tx: Transaction, place: TracePlace, trace: Trac
       hold: trace.hold,
       unit: trace.unit,
       fileUnit,
+      fileMaxDb,
       axis: stored,
       ...traceStatistics(trace, rbwHz),
     })

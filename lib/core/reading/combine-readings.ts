@@ -1,9 +1,13 @@
-import { commonRanges, logWidth } from "./coverage";
 import { lineRanges } from "../mask/limit-at";
 import type { Mask, MaskLine } from "../mask/mask";
+import type { Polarization } from "../sweep/settings";
+import { commonRanges, coveredShare, mergeRanges } from "./coverage";
 import type { FrequencyRange, LineReading, MarginPoint, Reading, Standing } from "./reading";
 
-type Held = Pick<Reading, "lines" | "guardDb">;
+/** A reading of one sweep; the polarization counts for radiated sweeps only. */
+export interface HeldAlone extends Pick<Reading, "lines" | "guardDb"> {
+  polarization?: Polarization | null;
+}
 
 /** Where several sweeps together stand under one line of a mask. Hz and dB. */
 export interface CombinedLine {
@@ -12,7 +16,7 @@ export interface CombinedLine {
   worst: MarginPoint | null;
   /** Index of the reading that gave the worst margin. */
   source: number | null;
-  /** Share of the line (log frequency, 0…1) that at least one of the sweeps covered. */
+  /** Share of the line (log frequency, 0…1) that was covered in every polarization swept. */
   coverage: number;
 }
 
@@ -27,11 +31,29 @@ export interface CombinedReading {
 
 const WORST_FIRST: readonly Standing[] = ["over", "undecided", "inside-guard", "clear"];
 
-function combineLine(line: MaskLine, held: readonly (LineReading | undefined)[]): CombinedLine {
-  const whole = lineRanges(line);
-  const gaps = commonRanges(held.map((reading) => reading?.coverage.gaps ?? whole));
-  const total = logWidth(whole);
-  const coverage = gaps.length === 0 ? 1 : Math.max(0, 1 - logWidth(gaps) / total);
+/** What none of the sweeps of one polarization covered, or of those that state none. */
+function gapsOf(
+  line: MaskLine,
+  held: readonly (LineReading | undefined)[],
+  readings: readonly HeldAlone[],
+): FrequencyRange[] {
+  const gapsWhere = (isOwn: (polarization: Polarization | null) => boolean) =>
+    commonRanges(
+      held
+        .filter((_, i) => isOwn(readings[i]?.polarization ?? null))
+        .map((reading) => reading?.coverage.gaps ?? lineRanges(line)),
+    );
+  const stated = [...new Set(readings.flatMap(({ polarization }) => polarization ?? []))];
+  if (stated.length === 0) return gapsWhere(() => true);
+  return mergeRanges(stated.flatMap((p) => gapsWhere((own) => own === null || own === p)));
+}
+
+function combineLine(
+  line: MaskLine,
+  held: readonly (LineReading | undefined)[],
+  readings: readonly HeldAlone[],
+): CombinedLine {
+  const coverage = coveredShare(lineRanges(line), gapsOf(line, held, readings));
   let source: number | null = null;
   let worst: MarginPoint | null = null;
   const isOver = held.some((reading) => reading?.standing === "over");
@@ -49,7 +71,7 @@ function combineLine(line: MaskLine, held: readonly (LineReading | undefined)[])
 function standingOf(
   line: CombinedLine,
   held: readonly (LineReading | undefined)[],
-  readings: readonly Held[],
+  readings: readonly HeldAlone[],
 ): Standing {
   if (held.some((reading) => reading?.standing === "over")) return "over";
   // Below zero and not over: an upper bound, which only the line's own detector can settle.
@@ -61,16 +83,16 @@ function standingOf(
 }
 
 /**
- * Readings of several sweeps against the same mask revision taken together, as for a build whose
- * span is split over sweeps or that was swept in two polarizations: over when one of them is,
- * undecided while a bound of one of them lies over the line or a part was covered by none, and
- * otherwise inside guard as soon as one of them lies inside the guard of its own bench. What was
- * covered is joined whatever the polarization or height: which of them a mask asks for is not known.
+ * Readings of several sweeps against the same mask revision taken together, without their levels:
+ * over when one of them is, undecided while a bound of one of them lies over the line or a part was
+ * not covered in a polarization that was swept, and otherwise inside guard as soon as one of them
+ * lies inside the guard of its own bench. Right as long as no sweep silences a bound of another:
+ * `mustReadTogether` says when the levels have to be looked at instead.
  */
-export function combineReadings(mask: Mask, readings: readonly Held[]): CombinedReading {
+export function combineReadings(mask: Mask, readings: readonly HeldAlone[]): CombinedReading {
   const lines = mask.lines.map((line, i) => {
     const held = readings.map((reading) => reading.lines[i]);
-    const combined = combineLine(line, held);
+    const combined = combineLine(line, held, readings);
     return { ...combined, standing: standingOf(combined, held, readings) };
   });
   const over = lines.filter((line) => line.standing === "over");

@@ -154,3 +154,16 @@ export function prepareParts(parts: readonly SweepPart[]): PreparedParts {
   });
   return { parts, traces };
 }
+
+/** The same sweeps, to be restated to the mask's distance or not; nothing is looked at again. */
+export function withRestating(
+  { parts, traces }: PreparedParts,
+  restateDistance: boolean,
+): PreparedParts {
+  const changed = new Map(parts.map((part) => [part, { ...part, restateDistance }]));
+  const changeOf = (part: SweepPart) => changed.get(part) ?? part;
+  return {
+    parts: parts.map(changeOf),
+    traces: traces.map((trace) => ({ ...trace, part: changeOf(trace.part) })),
+  };
+}

@@ -5,7 +5,7 @@ import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
 import type { Standing } from "@/lib/core/reading/reading";
 import { worstOf } from "../sweep/worst-of";
-import type { MaskStanding } from "../sweep/load-readings";
+import type { MaskStanding } from "../sweep/standings";
 import { loadProgramTrends, newestStanding, unreachedMasks } from "./load-standings";
 import type { ProgramWeek } from "./load-week";
 import { loadWeek } from "./load-week";

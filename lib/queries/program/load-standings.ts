@@ -1,8 +1,9 @@
 import { and, asc, desc, eq, inArray, isNotNull, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { builds, maskRevisions, masks, programMasks, sweeps } from "@/db/schema";
-import type { MaskStanding } from "../sweep/load-readings";
-import { loadReadings, standingsOf } from "../sweep/load-readings";
+import { loadReadings } from "../sweep/load-readings";
+import type { MaskStanding } from "../sweep/standings";
+import { standingsOf } from "../sweep/standings";
 import { worstOf } from "../sweep/worst-of";
 
 export interface BuildTrend {
@@ -66,6 +67,11 @@ export async function loadProgramTrends(
     teamId,
     and(inArray(builds.programId, programIds), eq(sweeps.onRecord, true)),
   );
+  const standings = new Map<string, MaskStanding[]>();
+  for (const { id } of buildRows) {
+    const own = held.filter((row) => row.buildId === id);
+    standings.set(id, await standingsOf(tx, teamId, own));
+  }
   return programIds.map((programId) => {
     const own = maskRows.filter((mask) => mask.programId === programId);
     return {
@@ -81,7 +87,7 @@ export async function loadProgramTrends(
           id,
           name,
           builtOn,
-          standings: standingsOf(held.filter((row) => row.buildId === id)),
+          standings: standings.get(id) ?? [],
         })),
     };
   });

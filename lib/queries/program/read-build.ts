@@ -4,7 +4,8 @@ import { builds, clocks, ladders, ladderSteps, programs, sweeps } from "@/db/sch
 import type { Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
 import { isId } from "../is-id";
-import { loadReadings, worstStanding } from "../sweep/load-readings";
+import { loadReadings } from "../sweep/load-readings";
+import { worstStanding } from "../sweep/standings";
 
 /** A build with its clocks, ladders and where it stands; null when the team has none of this id. */
 export async function readBuild(ctx: Context, buildId: string) {
@@ -63,7 +64,8 @@ export async function readBuild(ctx: Context, buildId: string) {
       .orderBy(asc(ladders.createdAt));
     const onRecord = and(eq(sweeps.buildId, buildId), eq(sweeps.onRecord, true));
     const held = await loadReadings(tx, ctx.teamId, onRecord);
-    return { ...build, clocks: clockRows, ladders: ladderRows, worst: worstStanding(held) };
+    const worst = await worstStanding(tx, ctx.teamId, held);
+    return { ...build, clocks: clockRows, ladders: ladderRows, worst };
   });
 }
 

@@ -8,7 +8,8 @@ import type { Detector, Polarization, SweepPurpose } from "@/lib/core/sweep/sett
 import { requirePermission } from "@/lib/commands/run";
 import { isId } from "../is-id";
 import { listSweepDoubts } from "./list-doubts";
-import { loadReadings, worstStanding } from "./load-readings";
+import { loadReadings } from "./load-readings";
+import { worstStanding } from "./standings";
 
 export interface SweepRow {
   id: string;
@@ -74,16 +75,19 @@ async function selectSweeps(ctx: Context, scope: SQL): Promise<SweepRow[]> {
       .orderBy(asc(ladderSteps.position), asc(sweeps.measuredOn), asc(sweeps.createdAt));
     const held = await loadReadings(tx, ctx.teamId, scope);
     const doubts = await listSweepDoubts(tx, ctx.teamId, scope);
-    return rows.map(({ settings, ...row }) => {
-      const worst = worstStanding(held.filter((reading) => reading.sweepId === row.id));
-      return {
+    const listed: SweepRow[] = [];
+    for (const { settings, ...row } of rows) {
+      const own = held.filter((reading) => reading.sweepId === row.id);
+      const worst = await worstStanding(tx, ctx.teamId, own);
+      listed.push({
         ...row,
         polarization: settings.polarization,
         standing: worst?.standing ?? null,
         marginDb: worst?.marginDb ?? null,
         doubts: doubts.get(row.id) ?? [],
-      };
-    });
+      });
+    }
+    return listed;
   });
 }
 

@@ -1,13 +1,13 @@
 import type { SQL } from "drizzle-orm";
-import { and, asc, eq, isNotNull, isNull } from "drizzle-orm";
+import { and, asc, eq, inArray, isNotNull, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { StoredReading } from "@/db/schema";
-import { builds, maskRevisions, masks, readings, sweeps } from "@/db/schema";
+import { builds, maskRevisions, masks, readings, sweeps, traces } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
-import { combineReadings, reachesMask } from "@/lib/core/reading/combine-readings";
-import type { Standing } from "@/lib/core/reading/reading";
+import { reachesMask } from "@/lib/core/reading/combine-readings";
+import type { SweepOutline } from "@/lib/core/reading/must-read-together";
+import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import { isNewestRevision } from "./newest-revision";
-import { worstOf } from "./worst-of";
 
 export interface HeldReading {
   sweepId: string;
@@ -15,7 +15,11 @@ export interface HeldReading {
   maskId: string;
   maskRevisionId: string;
   mask: Mask;
+  /** Levels were restated to the mask's distance on request. */
+  restated: boolean;
   reading: StoredReading;
+  settings: MeasurementSettings;
+  traces: SweepOutline["traces"];
 }
 
 /**
@@ -34,7 +38,9 @@ export async function loadReadings(
       maskId: readings.maskId,
       maskRevisionId: readings.maskRevisionId,
       mask: maskRevisions.content,
+      restated: readings.restated,
       reading: readings.content,
+      settings: sweeps.settings,
     })
     .from(readings)
     .innerJoin(sweeps, and(eq(sweeps.teamId, readings.teamId), eq(sweeps.id, readings.sweepId)))
@@ -55,52 +61,27 @@ export async function loadReadings(
       ),
     )
     .orderBy(asc(masks.key), asc(sweeps.createdAt), asc(sweeps.id));
-  return rows.filter((row) => reachesMask(row.reading));
+  const reaching = rows.filter((row) => reachesMask(row.reading));
+  const outlines = await loadOutlines(tx, teamId, [...new Set(reaching.map((row) => row.sweepId))]);
+  return reaching.map((row) => ({ ...row, traces: outlines.get(row.sweepId) ?? [] }));
 }
 
-/** Where some sweeps together stand under one mask. */
-export interface MaskStanding {
-  maskId: string;
-  maskTitle: string;
-  standing: Standing;
-  marginDb: number;
-  marginAtHz: number;
-  lineName: string;
-  /** The sweep that gave the margin. */
-  sweepId: string;
-  coverage: number;
-}
-
-/** Readings taken together mask by mask, in their order. */
-export function standingsOf(held: readonly HeldReading[]): MaskStanding[] {
-  const maskIds = [...new Set(held.map((row) => row.maskId))];
-  return maskIds.flatMap((maskId) => {
-    const own = held.filter((row) => row.maskId === maskId);
-    const [first] = own;
-    if (!first) return [];
-    const combined = combineReadings(
-      first.mask,
-      own.map((row) => row.reading),
-    );
-    const { deciding } = combined;
-    const decidedBy = deciding ? own[deciding.source] : undefined;
-    if (!deciding || !decidedBy) return [];
-    return [
-      {
-        maskId,
-        maskTitle: first.mask.title,
-        standing: combined.standing,
-        marginDb: deciding.worst.marginDb,
-        marginAtHz: deciding.worst.frequencyHz,
-        lineName: deciding.name,
-        sweepId: decidedBy.sweepId,
-        coverage: combined.coverage,
-      },
-    ];
-  });
-}
-
-/** The mask under which some sweeps stand worst; null when they reach none. */
-export function worstStanding(held: readonly HeldReading[]): MaskStanding | null {
-  return worstOf(standingsOf(held));
+/** What the traces of some sweeps are, without their levels. */
+async function loadOutlines(tx: Transaction, teamId: string, sweepIds: string[]) {
+  const outlines = new Map<string, SweepOutline["traces"]>();
+  if (sweepIds.length === 0) return outlines;
+  const rows = await tx
+    .select({
+      sweepId: traces.sweepId,
+      detector: traces.detector,
+      hold: traces.hold,
+      firstHz: traces.firstHz,
+      lastHz: traces.lastHz,
+    })
+    .from(traces)
+    .where(and(eq(traces.teamId, teamId), inArray(traces.sweepId, sweepIds)))
+    .orderBy(asc(traces.position));
+  for (const { sweepId, ...trace } of rows)
+    outlines.set(sweepId, [...(outlines.get(sweepId) ?? []), trace]);
+  return outlines;
 }

@@ -67,3 +67,17 @@ export async function loadTraces(
   }
   return loaded;
 }
+
+/** Highest level of each trace before the signal path, in the file's unit; null: not kept. */
+export async function loadFileLevels(
+  tx: Transaction,
+  teamId: string,
+  sweepId: string,
+): Promise<(number | null)[]> {
+  const rows = await tx
+    .select({ fileMaxDb: traces.fileMaxDb })
+    .from(traces)
+    .where(and(eq(traces.teamId, teamId), eq(traces.sweepId, sweepId)))
+    .orderBy(asc(traces.position));
+  return rows.map((row) => row.fileMaxDb);
+}

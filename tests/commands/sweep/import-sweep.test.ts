@@ -108,7 +108,16 @@ describe("importSweep", () => {
       mask: { ...mask, key: "loft-limit" },
       guardDb: 2,
       impedanceOhm: 50,
-      context: { ambientTaken: false, overdueTransducers: [] },
+      context: {
+        ambientTaken: false,
+        calibration: {
+          overdue: [],
+          unstated: ["the instrument"],
+          isDateKnown: true,
+          isCorrected: false,
+        },
+        instrumentLevelsDb: [41.25],
+      },
     });
     const detail = await readSweepDetail(ctx, sweepId);
     expect(detail?.readings[0]?.reading).toEqual(

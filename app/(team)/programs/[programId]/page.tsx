@@ -15,7 +15,7 @@ import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { formatFrequency, formatMargin } from "@/lib/core/units/format";
 import { newestStanding, unreachedMasks } from "@/lib/queries/program/load-standings";
-import type { MaskStanding } from "@/lib/queries/sweep/load-readings";
+import type { MaskStanding } from "@/lib/queries/sweep/standings";
 import type { ProgramDetail } from "@/lib/queries/program/read-program";
 import { readProgram } from "@/lib/queries/program/read-program";
 import type { SuspectSummary } from "@/lib/queries/suspect/list-suspects";

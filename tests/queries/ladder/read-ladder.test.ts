@@ -1,6 +1,8 @@
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { reviseSignalPath } from "@/lib/commands/bench/revise-signal-path";
 import { addStep } from "@/lib/commands/ladder/add-step";
+import { editStep } from "@/lib/commands/ladder/edit-step";
+import { setStepState } from "@/lib/commands/ladder/set-step-state";
 import { archiveSweep } from "@/lib/commands/sweep/archive-sweep";
 import { readLadder } from "@/lib/queries/ladder/read-ladder";
 import type { TestDatabase } from "../../support/database";
@@ -196,5 +198,55 @@ describe("readLadder", () => {
     expect(await readLadder(ctx, "nothing")).toBeNull();
     const liaison = await makeMember(database, "liaison", ctx.teamId);
     expect((await readLadder(liaison, ladderId))?.id).toBe(ladderId);
+  });
+
+  test("takes repeats of a step together, with their ±, and follows the suspects", async () => {
+    const { at, read } = await arrange(2);
+    await at(0, levelsOf(20, { 7: 45, 20: 40 }));
+    await at(0, levelsOf(20, { 7: 46, 20: 40 }));
+    await at(1, levelsOf(20, { 7: 38, 12: 41 }));
+    await at(1, levelsOf(20, { 7: 37, 12: 41.5 }));
+    const { steps } = await read();
+    const [delta, ...rest] = steps[1]?.againstPrevious ?? [];
+    expect(rest).toEqual([]);
+    expect([delta?.beforeIds.length, delta?.afterIds.length]).toEqual([2, 2]);
+    expect(delta?.changes?.repeatability).toBe("The ± is 95 % from 2 sweeps before and 2 after.");
+    const { followed, fresh, gone } = delta?.changes?.suspects ?? {};
+    expect(followed).toMatchObject([
+      { frequencyHz: 100e6, changeDb: expect.closeTo(-8, 4), repeats: { before: 2, after: 2 } },
+    ]);
+    // √(0.5/2 + 0.5/2) times Student's 4.302653 at ν = 2 (scipy, C).
+    expect(followed?.[0]?.uncertaintyDb).toBeCloseTo(3.042435, 4);
+    expect(fresh).toMatchObject([{ frequencyHz: 150e6, beforeDb: 20 }]);
+    expect(gone).toMatchObject([{ frequencyHz: 230e6, afterDb: 20 }]);
+  });
+
+  test("holds a step against its base: past a dropped one, or where a branch starts", async () => {
+    const { ctx, at, read } = await arrange(4);
+    for (const [i, peak] of [45, 40, 36, 30].entries()) await at(i, levelsOf(20, { 7: peak }));
+    const bought = async () =>
+      (await read()).steps.map((step) => {
+        const change = step.againstPrevious[0]?.changes?.margins[0]?.changeDb;
+        return [step.base?.position ?? null, change === undefined ? null : Math.round(change ?? 0)];
+      });
+    expect(await bought()).toEqual([
+      [null, null],
+      [0, 5],
+      [1, 4],
+      [2, 6],
+    ]);
+    const ids = (await read()).steps.map((step) => step.id);
+    await setStepState(ctx, { stepId: ids[2], state: "dropped" });
+    expect((await bought())[3]).toEqual([1, 10]);
+    await editStep(ctx, { stepId: ids[3], name: "B", description: "", branchOfId: ids[0] });
+    expect((await bought())[3]).toEqual([0, 15]);
+  });
+
+  test("hands over names of sweeps that have no counterpart at the base", async () => {
+    const { at, read } = await arrange(2);
+    await at(0, levelsOf(20, { 7: 45 }));
+    await at(1, levelsOf(20, { 7: 45 }));
+    await at(1, levelsOf(20, { 7: 45 }), { name: "Higher" }, { startMhz: 1000 });
+    expect((await read()).steps[1]?.unpaired).toEqual(["Higher"]);
   });
 });

@@ -5,6 +5,9 @@ import type { Coverage, FrequencyRange } from "./reading";
 
 const NEIGHBOURS = 10;
 
+/** Twice the median step, with room for frequencies worked out from MHz. */
+const GAP_STEPS = 2 * (1 + 1e-9);
+
 /** Median spacing in Hz around the spacing that follows point i. */
 function localStepHz(axis: FrequencyAxis, i: number): number {
   if (axis.kind === "regular") return axis.stepHz;
@@ -26,10 +29,10 @@ function isJoined(axis: FrequencyAxis, i: number): boolean {
   // Once more than half of them are wide enough so is their median, without sorting them.
   let missing = Math.floor((to - from + 1) / 2) + 1;
   for (let k = from; k <= to; k += 1) {
-    if (2 * stepAt(k) >= gap) missing -= 1;
+    if (GAP_STEPS * stepAt(k) >= gap) missing -= 1;
     if (missing === 0) return true;
   }
-  return gap <= 2 * localStepHz(axis, i);
+  return gap <= GAP_STEPS * localStepHz(axis, i);
 }
 
 /** Ranges merged and in ascending order. */

@@ -28,9 +28,13 @@ export interface UsedTrace {
   silent: FrequencyRange[];
 }
 
+/** Share by which a distance may miss the reach that it means, when worked out from MHz. */
+const REACH_TOLERANCE = 1e-9;
+
 /** How far to both sides in Hz a spot speaks for a trace. */
 export function reachOf(held: HeldTrace): number {
-  return Math.max(held.part.settings.rbwHz ?? 0, Number.isFinite(held.stepHz) ? held.stepHz : 0);
+  const stepHz = Number.isFinite(held.stepHz) ? held.stepHz : 0;
+  return Math.max(held.part.settings.rbwHz ?? 0, stepHz) * (1 + REACH_TOLERANCE);
 }
 
 /** Where tighter traces of the same position speak, so that a looser bound is not heard. */
@@ -154,7 +158,11 @@ function pointOf(held: HeldTrace, { sample, marginDb, limitDb }: Lowest): Margin
 }
 
 function lower(a: MarginPoint | null, b: MarginPoint | null): MarginPoint | null {
-  return b && (!a || b.marginDb < a.marginDb) ? b : a;
+  if (!a || !b) return a ?? b;
+  // Of equal margins the lower frequency, so that the order of files does not matter.
+  const isLower =
+    b.marginDb < a.marginDb || (b.marginDb === a.marginDb && b.frequencyHz < a.frequencyHz);
+  return isLower ? b : a;
 }
 
 interface Worst {

@@ -3,6 +3,7 @@ import { frequencyAt } from "../sweep/axis";
 import type { UsedTrace } from "./line-reading";
 import { eachHeardEdge, eachHeardRun, reachOf } from "./line-reading";
 import { findOver, heldLevelDb } from "./lowest-margin";
+import { speaksFor } from "./position";
 import { originOf } from "./prepare-parts";
 import type { RemeasurePoint } from "./reading";
 
@@ -48,7 +49,12 @@ class Taken {
     const cell = this.cellOf(frequencyHz);
     const near = this.widthHz > 0 ? [cell - 1, cell, cell + 1] : [cell];
     return near.some((c) =>
-      (this.cells.get(c) ?? []).some((t) => Math.abs(t.frequencyHz - frequencyHz) <= reach),
+      (this.cells.get(c) ?? []).some(
+        (t) =>
+          Math.abs(t.frequencyHz - frequencyHz) <= reach &&
+          // A spot speaks for its own position only.
+          speaksFor(t.used.held.part.settings, used.held.part.settings),
+      ),
     );
   }
 

@@ -134,6 +134,7 @@ describe("where a build stands", () => {
         marginDb: expect.closeTo(5, 5),
         marginAtHz: 100e6,
         lineName: "Peak",
+        provenance: "team",
         sweepId: worst.sweepId,
         coverage: 1,
       },

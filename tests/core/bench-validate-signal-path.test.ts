@@ -125,7 +125,7 @@ describe("validateSignalPath", () => {
     expect(validateSignalPath(tomorrow)).toEqual([]);
     const problems = validateSignalPath(tomorrow, "2026-12-01");
     expect(problems.map((p) => p.path)).toEqual(["transducers.0.calibratedOn"]);
-    expect(problems[0]?.text).toContain("2026-12-01");
+    expect(problems[0]?.text).toContain("future");
   });
 
   it("refuses a second pick-up, and takes one with cables and amplifiers around it", () => {

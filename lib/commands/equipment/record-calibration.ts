@@ -21,7 +21,7 @@ export async function recordCalibration(
     const today = await latestDay(tx);
     if (dates.calibratedOn > today) {
       throw new CommandError("invalid", "Some fields need another look.", {
-        calibratedOn: `The calibration lies in the future: today is ${today}.`,
+        calibratedOn: "The calibration lies in the future: no day after today is taken.",
       });
     }
     const factors = readFactors(piece.kind, table);

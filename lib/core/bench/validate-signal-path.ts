@@ -65,7 +65,7 @@ function dateProblems(
   if (today !== null && calibratedOn !== null && fine(calibratedOn) && calibratedOn > today)
     problems.push({
       path: `${at}.calibratedOn`,
-      text: `The calibration lies in the future: today is ${today}.`,
+      text: "The calibration lies in the future: no day after today is taken.",
     });
   if (problems.length === 0 && calibratedOn !== null && dueOn !== null && dueOn < calibratedOn)
     problems.push({ path: `${at}.dueOn`, text: "The due date lies before the calibration." });

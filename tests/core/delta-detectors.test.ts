@@ -127,6 +127,14 @@ describe("describeChange", () => {
     );
   });
 
+  test("does not call a sum that grew over spread peaks more energy", () => {
+    const change = { peak: once(-3), floor: once(6.4), bandPower: once(5.8) };
+    expect(describeChange({ ...change, bandPowerIsPower: false })).toBe(
+      "Peaks came down 3.0 dB, the floor came up 6.4 dB, the sum over the band moved 5.8 dB up.",
+    );
+    expect(describeChange({ ...change, bandPowerIsPower: true })).toMatch(/: more energy/);
+  });
+
   test.each([
     [1, 0, " 1 suspect is new."],
     [2, 0, " 2 suspects are new."],

@@ -29,14 +29,16 @@ function moved(subject: string, change: MeasuredChange, way: "came" | "moved"): 
 const isClear = ({ changeDb, isWithinRepeatability }: MeasuredChange) =>
   changeDb !== null && !isWithinRepeatability && Math.abs(changeDb) >= CLEAR_DB;
 
-function conclusion(peak: MeasuredChange, power: MeasuredChange): string | null {
+function conclusion(peak: MeasuredChange, power: MeasuredChange, isPower: boolean): string | null {
   if (peak.changeDb === null || power.changeDb === null) return null;
   const isPeakDown = isClear(peak) && peak.changeDb < 0;
   // That the power stayed is only said where its own scatter leaves no room for a clear change.
   const hasStayed = Math.abs(power.changeDb) + (power.uncertaintyDb ?? 0) < CLEAR_DB;
   if (isPeakDown && hasStayed) return "the energy was spread, not removed";
   if (isPeakDown && isClear(power) && power.changeDb < 0) return "less energy reaches the bench";
-  if (isClear(power) && power.changeDb > 0) return "more energy reaches the bench";
+  // Spread lines touch more points, so a sum over peaks grows while nothing was added.
+  const isTelling = isPower || !isPeakDown;
+  if (isTelling && isClear(power) && power.changeDb > 0) return "more energy reaches the bench";
   return null;
 }
 
@@ -69,7 +71,7 @@ export function describeChange(
     moved(bandPowerIsPower ? "band power" : "the sum over the band", bandPower, "moved"),
   ].filter((part) => part !== null);
   const text = parts.join(", ");
-  const end = conclusion(peak, bandPower);
+  const end = conclusion(peak, bandPower, bandPowerIsPower);
   const caveat = end && !bandPowerIsPower ? ", as far as a sum over this detector can tell" : "";
   return `${text[0]?.toUpperCase()}${text.slice(1)}${end ? `: ${end}${caveat}` : ""}.${tail}`;
 }

@@ -23,6 +23,8 @@ const PAST: Record<string, string> = {
 /** Actions whose words are not simply "did the thing". */
 const WHOLE: Record<string, string> = {
   "program.set-masks": "set the masks of program",
+  "program.restate-distance": "asked to restate the sweeps' distance of program",
+  "program.hold-as-taken": "took back the restating of the sweeps' distance of program",
   "program.set-milestones": "set the milestones of program",
   "build.set-clocks": "set the clocks of build",
   "member.change-role": "changed the role of member",

@@ -97,3 +97,9 @@ export const setClocksSchema = z
       .max(64, "Keep at most 64 clocks."),
   })
   .superRefine((values, context) => refuseTwins(values.clocks, context, "clocks"));
+
+export const setDistanceRestatingSchema = z.object({
+  programId: z.uuid("Choose a program."),
+  maskId: z.uuid("Choose a mask of the program."),
+  restate: z.boolean(),
+});

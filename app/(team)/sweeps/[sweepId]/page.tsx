@@ -3,8 +3,11 @@ import Link from "next/link";
 import { notFound } from "next/navigation";
 import { BigMargin } from "@/components/readings/big-margin";
 import { DoubtList } from "@/components/readings/doubt-list";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { LineTable } from "@/components/readings/line-table";
 import { RemeasureList } from "@/components/readings/remeasure-list";
+import { RemeasureOmitted } from "@/components/readings/remeasure-omitted";
+import { DistanceRestating } from "@/components/sweeps/distance-restating";
 import { MaskTabs } from "@/components/sweeps/mask-tabs";
 import { SweepChart } from "@/components/sweeps/sweep-chart";
 import { LinkFacts, MeasurementFacts } from "@/components/sweeps/sweep-facts";
@@ -19,11 +22,14 @@ import { isAllowed } from "@/lib/auth/context";
 import { currentContext } from "@/lib/auth/session";
 import { reachesMask } from "@/lib/core/reading/combine-readings";
 import { decidingPoint } from "@/lib/core/reading/deciding-point";
+import { remeasureRows } from "@/lib/core/reading/remeasure-rows";
 import { formatFrequency } from "@/lib/core/units/format";
+import { readFollowedMarks } from "@/lib/queries/suspect/followed-of";
 import type { SweepDetail } from "@/lib/queries/sweep/load-sweep-detail";
 import { readSweepDetail } from "@/lib/queries/sweep/read-sweep";
 import { worstOf } from "@/lib/queries/sweep/worst-of";
-import { chooseOnRecord, fetchBack, putAside } from "./actions";
+import { followEveryNear, startToFollow } from "../../suspects/actions";
+import { chooseOnRecord, chooseRestating, fetchBack, putAside } from "./actions";
 
 export const metadata: Metadata = { title: "Sweep" };
 
@@ -54,6 +60,8 @@ export default async function SweepPage(props: SweepPageProps) {
     sweep.readings[0] ??
     null;
   const comparable = chosen && chosen.reading.notComparable === null ? chosen : null;
+  const followed = comparable ? await readFollowedMarks(ctx, comparable.id) : undefined;
+  const mayFollow = mayWrite && comparable !== null && sweep.archivedAt === null;
   return (
     <>
       <PageHead
@@ -96,7 +104,7 @@ export default async function SweepPage(props: SweepPageProps) {
             marginDb={summaries.find((s) => s.maskId === comparable.maskId)?.marginDb ?? null}
             standing={comparable.reading.standing}
           >
-            {headline(comparable)}
+            {headline(comparable)} <UnconfirmedMark provenance={comparable.mask.provenance} />
           </BigMargin>
         </div>
       ) : null}
@@ -104,9 +112,12 @@ export default async function SweepPage(props: SweepPageProps) {
         <MaskTabs sweepId={sweep.id} items={summaries} chosen={chosen?.maskId ?? ""} />
       ) : null}
       {chosen && !comparable ? (
-        <p className="mb-4 border-l-4 border-shoal bg-shoal-bed px-3 py-2">
-          Not comparable with {chosen.mask.title}. {chosen.reading.notComparable}
-        </p>
+        <div className="mb-4 border-l-4 border-shoal bg-shoal-bed px-3 py-2">
+          <p>
+            Not comparable with {chosen.mask.title}. {chosen.reading.notComparable}
+          </p>
+          {mayWrite ? <Restating sweep={sweep} chosen={chosen} /> : null}
+        </div>
       ) : null}
       <SweepChart
         key={chosen?.maskId ?? "none"}
@@ -118,6 +129,10 @@ export default async function SweepPage(props: SweepPageProps) {
         suspects={comparable?.reading.suspects ?? []}
         guardDb={sweep.guardDb}
         clocks={sweep.clocks}
+        ambient={comparable?.ambient ?? []}
+        followed={followed}
+        follow={mayFollow ? startToFollow.bind(null, comparable.id) : undefined}
+        followNear={mayFollow ? followEveryNear.bind(null, comparable.id) : undefined}
       />
       {comparable ? (
         <>
@@ -128,22 +143,30 @@ export default async function SweepPage(props: SweepPageProps) {
                 <Link href={`/masks/${comparable.maskId}`} className="text-deep underline">
                   Revision {comparable.maskRevision}
                 </Link>
-                {comparable.mask.provenance === "from memory"
-                  ? ", from memory: confirm it against your own copy."
-                  : "."}{" "}
-                Guard {sweep.guardDb.toFixed(1)} dB.
+                . Guard {sweep.guardDb.toFixed(1)} dB
+                {sweep.budget ? ", from a bench with an uncertainty budget" : ""}.{" "}
+                <UnconfirmedMark provenance={comparable.mask.provenance} />
               </>
             }
           >
             <LineTable reading={comparable.reading} />
+            {mayWrite && isRestatedReading(comparable) ? (
+              <Restating sweep={sweep} chosen={comparable} />
+            ) : null}
           </Section>
           {comparable.reading.remeasure.length > 0 ? (
             <Section
               title="Measure again"
               lead="An upper bound lies over the mask here. Only the line's own detector can decide."
+              actions={
+                <ButtonLink href={`/sweeps/${sweep.id}/remeasure?mask=${comparable.maskId}`}>
+                  Sheet for the bench
+                </ButtonLink>
+              }
             >
+              <RemeasureOmitted count={comparable.reading.remeasureOmitted} />
               <RemeasureList
-                points={comparable.reading.remeasure}
+                rows={remeasureRows(comparable.reading, [sweep])}
                 unit={comparable.reading.unit}
                 exportName={`${sweep.name} measure again`}
               />
@@ -167,6 +190,31 @@ export default async function SweepPage(props: SweepPageProps) {
       </Section>
       <SweepOrigin sweep={sweep} />
     </>
+  );
+}
+
+type Chosen = SweepDetail["readings"][number];
+
+const isRestatedReading = ({ reading }: Chosen) =>
+  reading.doubts.some(({ code }) => code === "distance-restated");
+
+/** Where only the distance differs from the mask's: to restate it, or to take that back. */
+function Restating({ sweep, chosen }: { sweep: SweepDetail; chosen: Chosen }) {
+  const { distanceM, port } = sweep.settings;
+  const { mask, maskId } = chosen;
+  if (mask.distanceM === null || distanceM === null || distanceM === mask.distanceM) return null;
+  if (mask.port !== port) return null;
+  return (
+    <div className="mt-3">
+      <DistanceRestating
+        sweptM={distanceM}
+        maskM={mask.distanceM}
+        programName={sweep.programName}
+        maskTitle={mask.title}
+        isRestated={isRestatedReading(chosen)}
+        action={chooseRestating.bind(null, sweep.programId, maskId)}
+      />
+    </div>
   );
 }
 
@@ -238,18 +286,21 @@ function shownTraces(sweep: SweepDetail) {
     detector: trace.detector,
     hold: trace.hold,
   }));
-  const ambient = sweep.ambient
-    .filter((other) => other.id !== sweep.id)
-    .slice(0, 1)
-    .map((other) => ({
-      sweepId: other.id,
-      position: 0,
-      name: `Ambient: ${other.name}`,
-      role: "ambient" as const,
-      detector: null,
-      hold: "none" as const,
-    }));
-  return [...own, ...ambient];
+  const beside = (label: string, others: readonly { id: string; name: string }[]) =>
+    others
+      .filter((other) => other.id !== sweep.id)
+      .slice(0, 1)
+      .map((other) => ({
+        sweepId: other.id,
+        position: 0,
+        name: `${label}: ${other.name}`,
+        role: "ambient" as const,
+        detector: null,
+        hold: "none" as const,
+      }));
+  // A floor taken with another bandwidth stands higher or lower by itself.
+  const floor = sweep.floor.filter(({ sameRbw }) => sameRbw);
+  return [...own, ...beside("Ambient", sweep.ambient), ...beside("Floor", floor)];
 }
 
 function extentOf(sweep: SweepDetail) {

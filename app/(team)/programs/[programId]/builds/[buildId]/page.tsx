@@ -1,10 +1,12 @@
 import type { Metadata } from "next";
 import Link from "next/link";
 import { notFound } from "next/navigation";
+import { BuildReading } from "@/components/builds/build-reading";
 import { countDoubts, filterByDoubt } from "@/components/builds/doubt-counts";
 import { DoubtFilter } from "@/components/builds/doubt-filter";
 import { SweepList } from "@/components/builds/sweep-list";
 import { LadderForm } from "@/components/ladders/ladder-form";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { BigMargin } from "@/components/readings/big-margin";
 import { DOUBT_LABELS } from "@/components/readings/doubt-labels";
 import { ButtonLink } from "@/components/ui/button";
@@ -16,6 +18,7 @@ import { currentContext } from "@/lib/auth/session";
 import { formatFrequency } from "@/lib/core/units/format";
 import type { BuildDetail } from "@/lib/queries/program/read-build";
 import { readBuild } from "@/lib/queries/program/read-build";
+import { readBuildReading } from "@/lib/queries/program/read-build-reading";
 import type { SweepRow } from "@/lib/queries/sweep/list-sweeps";
 import { listBuildSweeps } from "@/lib/queries/sweep/list-sweeps";
 import { startLadder } from "../../../../ladders/actions";
@@ -36,6 +39,7 @@ export default async function BuildPage(props: BuildPageProps) {
   const build = await readBuild(ctx, buildId);
   if (!build || build.programId !== programId) notFound();
   const sweeps = await listBuildSweeps(ctx, buildId);
+  const combined = await readBuildReading(ctx, buildId);
   const shown = filterByDoubt(sweeps, doubt);
   const href = `/programs/${programId}/builds/${buildId}`;
   const archived = build.archivedAt !== null || build.programArchivedAt !== null;
@@ -73,6 +77,16 @@ export default async function BuildPage(props: BuildPageProps) {
         </p>
       ) : null}
       <OnRecord build={build} sweeps={sweeps} />
+      {combined.length > 0 ? (
+        <Section
+          title="Held against each mask"
+          lead="The sweeps on the line of record, taken together frequency by frequency."
+        >
+          {combined.map((one) => (
+            <BuildReading key={one.maskId} href={href} combined={one} />
+          ))}
+        </Section>
+      ) : null}
       <Section title="Ladders" lead="What did each step buy?">
         <LadderList build={build} />
         {mayImport ? (
@@ -135,7 +149,7 @@ function OnRecord({ build, sweeps }: { build: BuildDetail; sweeps: SweepRow[] })
       <Link href={`/sweeps/${worst.sweepId}?mask=${worst.maskId}`} className="text-deep underline">
         see the worst one
       </Link>
-      .
+      . <UnconfirmedMark provenance={worst.provenance} />
     </BigMargin>
   );
 }

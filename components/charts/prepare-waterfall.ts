@@ -44,7 +44,8 @@ export interface WaterfallInput {
   height: number;
 }
 
-const MARGIN: ChartMargin = { top: 20, right: 8, bottom: 26, left: 40 };
+/** Room at the right for the names of the mask, guard and target lines. */
+const MARGIN: ChartMargin = { top: 20, right: 92, bottom: 26, left: 40 };
 
 /** How a change is written, "+3.1 dB ± 0.4". */
 export function writeChange(bar: WaterfallBar): string {

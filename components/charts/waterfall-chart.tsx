@@ -74,7 +74,7 @@ function Shore(props: {
   const right = width - margin.right;
   const bottom = height - margin.bottom;
   const shore = `M${margin.left},${zeroY}H${right}`;
-  const name = { x: right - 4, fontSize: 11, textAnchor: "end", fill: "var(--ink)" } as const;
+  const name = { x: right + 5, fontSize: 11, fill: "var(--ink)" } as const;
   return (
     <g>
       <rect
@@ -114,7 +114,7 @@ function Shore(props: {
         mask
       </text>
       {guardY === null ? null : (
-        <text {...name} y={zeroY - 4}>
+        <text {...name} y={(guardY + zeroY) / 2 + 1}>
           guard {formatMargin(guardDb)}
         </text>
       )}
@@ -124,7 +124,7 @@ function Shore(props: {
         strokeDasharray="1.5 3.5"
         strokeLinecap="round"
       />
-      <text {...name} y={targetY - 5}>
+      <text {...name} y={targetY + 4}>
         target {formatMargin(targetDb)}
       </text>
     </g>

@@ -34,6 +34,7 @@ const WHOLE: Record<string, string> = {
   "bench.set-guard-rule": "set the guard rule of bench",
   "equipment.record-calibration": "recorded a calibration of",
   "equipment.withdraw-calibration": "withdrew a calibration of",
+  "mask.recompute": "tried again to put in force mask",
   "sweep.accept-mismatch": "accepted a mismatch in the delta of sweep",
   "sweep.withdraw-acceptance": "took back an accepted mismatch in the delta of sweep",
   "ladder.reorder-steps": "changed the order of the steps of ladder",

@@ -17,7 +17,7 @@ const STOP_HZ = 6e9;
 /** A mask of three lines, each of four segments: a peak, a quasi-peak and an average one. */
 function threeLines(shiftDb: number): Mask {
   const edges = [30e6, 88e6, 216e6, 960e6, 6e9];
-  const levels = [62, 66, 68, 72];
+  const levels = [54, 58, 60, 64];
   const line = (name: string, detector: "peak" | "quasi-peak" | "average", belowDb: number) => ({
     name,
     detector,

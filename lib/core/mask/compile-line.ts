@@ -42,8 +42,25 @@ export function pieceLimitAt(piece: LinePiece, hz: number): number {
   return lowest;
 }
 
-/** Below every limit in dB of a piece from one frequency to another inside it, or equal to it. */
+/**
+ * Below every limit in dB of a piece from one frequency to another inside it, or equal to it up to
+ * rounding. Each segment only rises or only falls, so it is lowest at one of the two ends.
+ */
 export function lowestPieceLimit(piece: LinePiece, fromHz: number, toHz: number): number {
-  // Each segment only rises or only falls, so it is lowest at one of the two ends.
-  return Math.min(pieceLimitAt(piece, fromHz), pieceLimitAt(piece, toHz));
+  let lowest = Number.POSITIVE_INFINITY;
+  for (const segment of piece.segments) {
+    const limit = segmentLimitAt(segment, segment.startDb <= segment.stopDb ? fromHz : toHz);
+    if (limit < lowest) lowest = limit;
+  }
+  return lowest;
+}
+
+/** Above every limit in dB of a piece between two of its frequencies, or equal up to rounding. */
+export function highestPieceLimit(piece: LinePiece, fromHz: number, toHz: number): number {
+  let lowest = Number.POSITIVE_INFINITY;
+  for (const segment of piece.segments) {
+    const highest = segmentLimitAt(segment, segment.startDb <= segment.stopDb ? toHz : fromHz);
+    if (highest < lowest) lowest = highest;
+  }
+  return lowest;
 }

@@ -214,12 +214,15 @@ function coverageOfLine(line: CompiledLine, used: readonly UsedTrace[]): Coverag
   return coverageOf(line.ranges, swept);
 }
 
-/** Holds traces against one line: margins in dB, frequencies in Hz. */
+/**
+ * Holds traces against one line: margins in dB, frequencies in Hz. `boundDb` is the lowest margin
+ * of an upper bound, +Infinity without one.
+ */
 export function readLine(
   line: CompiledLine,
   lineIndex: number,
   used: readonly UsedTrace[],
-): LineReading {
+): { reading: LineReading; boundDb: number } {
   const byPiece = line.pieces.map((): Worst => ({ own: null, bound: null }));
   let isInside = false;
   for (const one of used) {
@@ -244,7 +247,7 @@ export function readLine(
     { own: null, bound: null },
   );
   const { worst, basis } = decide(whole);
-  return {
+  const reading = {
     lineIndex,
     name: line.line.name,
     detector: line.line.detector,
@@ -254,4 +257,5 @@ export function readLine(
     bands,
     ...standingOf(whole, worst, coverage.fraction, isInside),
   };
+  return { reading, boundDb: whole.bound?.marginDb ?? Number.POSITIVE_INFINITY };
 }

@@ -1,5 +1,5 @@
 import type { LinePiece } from "../mask/compile-line";
-import { lowestPieceLimit, pieceLimitAt } from "../mask/compile-line";
+import { highestPieceLimit, lowestPieceLimit, pieceLimitAt } from "../mask/compile-line";
 import { frequencyAt } from "../sweep/axis";
 import { BLOCK, GROUP } from "../sweep/level-index";
 import type { HeldTrace } from "./held-trace";
@@ -48,6 +48,16 @@ function limitFloorDb(held: HeldTrace, piece: LinePiece, from: number, to: numbe
   return limitDb - held.offsetDb - SLACK_DB;
 }
 
+/** Highest of some levels; −Infinity when none is a number. */
+function highestOf(levelsDb: Float32Array, from: number, to: number): number {
+  let high = Number.NEGATIVE_INFINITY;
+  for (let i = from; i < to; i += 1) {
+    const level = levelsDb[i] as number;
+    if (level > high && level !== Number.POSITIVE_INFINITY) high = level;
+  }
+  return high;
+}
+
 function lookAtSamples(
   held: HeldTrace,
   piece: LinePiece,
@@ -57,7 +67,10 @@ function lookAtSamples(
 ): void {
   const { axis, levelsDb } = held.trace;
   const floorDb = limitFloorDb(held, piece, from, to);
-  let leastDb = floorDb - lowest.marginDb;
+  // The highest of them has at most this margin, so that the first need not be worked out one by one.
+  const most = highestPieceLimit(piece, frequencyAt(axis, from), frequencyAt(axis, to - 1));
+  const sureDb = most - held.offsetDb + SLACK_DB - highestOf(levelsDb, from, to);
+  let leastDb = floorDb - Math.min(lowest.marginDb, sureDb);
   for (let i = from; i < to; i += 1) {
     // Not a number, or too low to come nearer to any of these limits.
     if (!((levelsDb[i] as number) >= leastDb)) continue;
@@ -65,7 +78,7 @@ function lookAtSamples(
     if (Number.isNaN(levelDb)) continue;
     const limitDb = pieceLimitAt(piece, frequencyAt(axis, i));
     keepLowest(lowest, i, limitDb - levelDb, limitDb);
-    leastDb = floorDb - lowest.marginDb;
+    leastDb = floorDb - Math.min(lowest.marginDb, sureDb);
   }
 }
 

@@ -48,7 +48,9 @@ export function readPrepared(
   const compiled = mask.lines.map(compileLine);
   const read = compiled.map((line, i) => {
     const used = useTraces(line, held);
-    return { reading: readLine(line, i, used), ...remeasureLine(line, used) };
+    const { reading, boundDb } = readLine(line, i, used);
+    const open = boundDb < 0 ? remeasureLine(line, used) : { points: [], omitted: 0 };
+    return { reading, ...open };
   });
   const lines = read.map((r) => r.reading);
   const rank = (standing: Standing) => WORST_FIRST.indexOf(standing);

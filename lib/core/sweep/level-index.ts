@@ -18,6 +18,8 @@ export interface LevelIndex {
   /** 1 where a block holds a sample that is not finite. */
   blockHasGap: Uint8Array;
   hasGap: boolean;
+  /** Prominences worked out so far, by the first sample of the top; they depend on nothing else. */
+  prominencesDb: Map<number, number>;
 }
 
 /** Lowest and highest finite level of some samples; +Infinity and −Infinity without any. */
@@ -80,5 +82,6 @@ export function indexLevels(levels: Float32Array, count = levels.length): LevelI
     groupLowDb,
     blockHasGap,
     hasGap,
+    prominencesDb: new Map(),
   };
 }

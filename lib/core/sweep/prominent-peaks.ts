@@ -62,30 +62,43 @@ function baseDb(index: LevelIndex, from: number, step: -1 | 1, peakDb: number): 
 
 /** Height in dB of a peak over the higher of its two bases; `end` is the last sample of its top. */
 function prominenceOf(index: LevelIndex, start: number, end: number): number {
+  const known = index.prominencesDb.get(start);
+  if (known !== undefined) return known;
   const peakDb = index.levelsDb[start] as number;
-  return peakDb - Math.max(baseDb(index, start, -1, peakDb), baseDb(index, end, 1, peakDb));
+  const highestBaseDb = Math.max(baseDb(index, start, -1, peakDb), baseDb(index, end, 1, peakDb));
+  index.prominencesDb.set(start, peakDb - highestBaseDb);
+  return peakDb - highestBaseDb;
+}
+
+/** The first sample from `i` on that reaches `leastDb`; `end` when none before it does. */
+function nextHigh(levelsDb: Float32Array, i: number, end: number, leastDb: number): number {
+  let at = i;
+  while (at < end && !((levelsDb[at] as number) >= leastDb)) at += 1;
+  return at;
 }
 
 /**
- * Calls `visit` for every local maximum whose top begins in samples `from` ≤ i < `to`, with the
- * first and the last sample of its top. Neither end of the trace is a maximum, nor is a top beside
- * a sample that is not finite.
+ * Calls `visit` for every local maximum whose top begins in the range, with the first and the last
+ * sample of its top. Neither end of the trace is a maximum, nor is a top beside a sample that is
+ * not finite.
  */
 function eachMaximum(
-  index: LevelIndex,
+  { levelsDb, count }: LevelIndex,
   { from, to, leastDb }: SampleRange,
   visit: (start: number, end: number) => void,
 ): void {
-  const { levelsDb } = index;
-  const lastInside = index.count - 2;
-  for (let i = Math.max(1, from); i < to && i <= lastInside; i += 1) {
+  const stop = Math.min(to, count - 1);
+  for (
+    let i = nextHigh(levelsDb, Math.max(1, from), stop, leastDb);
+    i < stop;
+    i = nextHigh(levelsDb, i + 1, stop, leastDb)
+  ) {
     const level = levelsDb[i] as number;
-    if (!(level >= leastDb)) continue;
-    if (!((levelsDb[i - 1] as number) < level) || levelsDb[i - 1] === Number.NEGATIVE_INFINITY)
-      continue;
+    const before = levelsDb[i - 1] as number;
+    if (!(before < level) || before === Number.NEGATIVE_INFINITY) continue;
     let end = i;
-    while (end < lastInside + 1 && levelsDb[end + 1] === level) end += 1;
-    const after = end + 1 < index.count ? (levelsDb[end + 1] as number) : Number.NaN;
+    while (end + 1 < count && levelsDb[end + 1] === level) end += 1;
+    const after = end + 1 < count ? (levelsDb[end + 1] as number) : Number.NaN;
     if (after < level && after !== Number.NEGATIVE_INFINITY && level !== Number.POSITIVE_INFINITY)
       visit(i, end);
     i = end;

@@ -112,6 +112,15 @@ export function parseFactorTable(text: string, frequencyUnitHz?: number): Factor
       points.push({ line, printed: first, point: { frequencyHz, factorDb } });
     }
   }
+  // Sorting by itself would hide two tables pasted one after the other.
+  points.slice(1).forEach((entry, i) => {
+    const before = points[i];
+    if (before && entry.point.frequencyHz < before.point.frequencyHz)
+      problems.push({
+        line: entry.line,
+        text: `Line ${entry.line}: the frequency ${entry.printed} lies below ${before.printed} in line ${before.line}. Frequencies must rise from row to row: sort the table, or see whether two were pasted together.`,
+      });
+  });
   points.sort((a, b) => a.point.frequencyHz - b.point.frequencyHz || a.line - b.line);
   points.forEach((entry, i) => {
     const before = points[i - 1];

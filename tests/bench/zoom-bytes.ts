@@ -41,7 +41,14 @@ export async function measureZoom({ ctx, importFile }: Place): Promise<Figure[]>
   for (const [i, { kind, count }] of TRACES.entries()) {
     const trace = inventAwkwardTrace(kind, count);
     const position = i + 1;
-    const place = { teamId: ctx.teamId, sweepId, position, fileUnit: trace.unit, fileMaxDb: null, rbwHz: null };
+    const place = {
+      teamId: ctx.teamId,
+      sweepId,
+      position,
+      fileUnit: trace.unit,
+      fileMaxDb: null,
+      rbwHz: null,
+    };
     await inTeam(ctx.db, ctx.teamId, (tx) => storeTrace(tx, place, trace));
     const answered: number[] = [];
     const parsed: number[] = [];

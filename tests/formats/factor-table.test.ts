@@ -26,10 +26,17 @@ it.each([
   ["spaces, decimal comma", "MHz dB\n30,0 18,25\n87,5 -9,5\n1000,0 24,0\n"],
   ["comma and space", "# Loop, 2026\n# MHz, dB\n30, 18.25\n87.5, -9.5\n1000, 24\n"],
   ["quoted decimal comma", '"MHz","dB"\n"30,0","18,25"\n"87,5","-9,5"\n"1000,0","24,0"\n'],
-  ["unsorted rows", "\ufeffMHz,dB\n1000,24\n30,18.25\n\n87.5,-9.5\n"],
+  ["empty rows and a byte order mark", "\ufeffMHz,dB\n30,18.25\n\n87.5,-9.5\n1000,24\n"],
   ["GHz", "GHz;dB\n0.03;18.25\n0.0875;-9.5\n1;24\n"],
 ])("reads a table by %s", (_, text) => {
   expect(parseFactorTable(text)).toEqual(KNOWN);
+});
+
+it("names each row that lies below the one before it instead of sorting the table", () => {
+  expect(problems("MHz,dB\n1000,24\n30,18.25\n87.5,-9.5\n")).toEqual([
+    [3, expect.stringMatching(/30 lies below 1000 in line 2.*must rise/)],
+  ]);
+  expect(problems("MHz,dB\n1000,24\n87.5,-9.5\n30,18.25\n").map(([line]) => line)).toEqual([3, 4]);
 });
 
 it("asks for the unit of frequency when neither the header nor the caller names it", () => {

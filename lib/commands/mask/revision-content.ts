@@ -32,5 +32,13 @@ export function revisionContent(
   if (isDeepStrictEqual(current.content, content)) {
     throw new CommandError("conflict", "Nothing differs from the current revision.");
   }
+  const wasFromMemory = current.content.provenance === "from memory";
+  const isSameLimits = isDeepStrictEqual(current.content.lines, content.lines);
+  if (wasFromMemory && content.provenance !== "from memory" && isSameLimits) {
+    throw new CommandError("invalid", "Limits from memory are not made firm by an edit.", {
+      provenance:
+        "Confirm the mask against your own copy instead: who, when and which copy are then kept.",
+    });
+  }
   return content;
 }

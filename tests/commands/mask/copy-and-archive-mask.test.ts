@@ -37,8 +37,13 @@ describe("copyMask", () => {
       provenance: "from memory",
       lines: MASK.lines,
     });
-    const confirmed = { ...copy!.revisions[0]!.content, provenance: "read" };
-    expect((await reviseMask(ctx, { maskId, mask: confirmed })).revision).toBe(2);
+    const content = copy!.revisions[0]!.content;
+    // Only confirming makes the same limits firm; an edit that says so by itself does not.
+    await expect(
+      reviseMask(ctx, { maskId, mask: { ...content, provenance: "read" } }),
+    ).rejects.toMatchObject({ fieldErrors: { provenance: expect.stringContaining("Confirm") } });
+    const edited = { ...content, title: "Wheelhouse limit, ours" };
+    expect((await reviseMask(ctx, { maskId, mask: edited })).revision).toBe(2);
     expect((await readMask(ctx, shippedId))?.revisions).toHaveLength(1);
     expect((await auditRows(database, ctx.teamId)).map((row) => row.action)).toEqual([
       "mask.copy",

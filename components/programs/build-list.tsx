@@ -1,4 +1,5 @@
 import Link from "next/link";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { StandingMark } from "@/components/readings/standing-mark";
 import type { Standing } from "@/lib/core/reading/reading";
 import { formatMargin } from "@/lib/core/units/format";
@@ -36,9 +37,9 @@ export function BuildList({ programId, masks, builds }: BuildListProps) {
             {masks.map((mask) => (
               <th key={mask.id} className="max-w-56 px-4 py-2 font-medium">
                 {mask.title}
-                {mask.provenance === "from memory" ? (
-                  <span className="block text-shoal">from memory</span>
-                ) : null}
+                <span className="block">
+                  <UnconfirmedMark provenance={mask.provenance} />
+                </span>
               </th>
             ))}
           </tr>

@@ -6,6 +6,7 @@ import type { Provenance } from "@/lib/core/mask/mask";
 import { Button } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
 import { ErrorNote } from "@/components/ui/error-note";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { editionWords, PROVENANCE_MARKS, sourceWords } from "@/components/masks/mask-words";
 import { Field } from "@/components/ui/field";
 import { keepUnits } from "@/components/ui/keep-units";
@@ -99,9 +100,11 @@ export function MasksForm({ programId, choices, action }: MasksFormProps) {
               <span className="block text-sm text-ink-soft">
                 {sourceWords(choice)}, edition {editionWords(choice)}
                 {" · "}
-                <span className={choice.provenance === "from memory" ? "text-shoal" : ""}>
-                  {PROVENANCE_MARKS[choice.provenance]}
-                </span>
+                {choice.provenance === "from memory" ? (
+                  <UnconfirmedMark provenance={choice.provenance} />
+                ) : (
+                  <span>{PROVENANCE_MARKS[choice.provenance]}</span>
+                )}
                 {choice.isArchived ? " · archived: take it off" : ""}
               </span>
             </span>

@@ -1,4 +1,5 @@
 import Link from "next/link";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { StandingMark } from "@/components/readings/standing-mark";
 import type { Standing } from "@/lib/core/reading/reading";
 import { formatReportNumber } from "@/lib/core/report/report-number";
@@ -15,6 +16,7 @@ export interface ProgramLine {
     marginDb: number | null;
     standing: Standing;
     maskTitle: string;
+    provenance: string;
     buildName: string;
     sweepId: string;
     missing: string[];
@@ -106,7 +108,8 @@ export function ProgramTable({ programs, today }: { programs: ProgramLine[]; tod
                   <StandingMark standing={program.now.standing} />
                 </p>
                 <p className="mt-1 text-sm text-ink-soft">
-                  {program.now.buildName} under {program.now.maskTitle}
+                  {program.now.buildName} under {program.now.maskTitle}{" "}
+                  <UnconfirmedMark provenance={program.now.provenance} />
                 </p>
                 <p className="text-sm">{againstTarget(program)}</p>
                 {program.now.missing.length > 0 ? (

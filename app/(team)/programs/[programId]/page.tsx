@@ -4,6 +4,7 @@ import { notFound } from "next/navigation";
 import { TrendChart } from "@/components/charts/trend-chart";
 import { BuildForm } from "@/components/programs/build-form";
 import { BuildList } from "@/components/programs/build-list";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { BigMargin } from "@/components/readings/big-margin";
 import { SuspectList } from "@/components/suspects/suspect-list";
 import { ButtonLink } from "@/components/ui/button";
@@ -59,7 +60,8 @@ export default async function ProgramPage(props: { params: Promise<{ programId: 
         <BigMargin marginDb={newest.worst.marginDb} standing={newest.worst.standing}>
           {newest.build.name}, {newest.worst.lineName} line of {newest.worst.maskTitle}
           {` at ${formatFrequency(newest.worst.marginAtHz)}`}.{" "}
-          {againstTarget(newest.worst, program.targetMarginDb, missing)}
+          {againstTarget(newest.worst, program.targetMarginDb, missing)}{" "}
+          <UnconfirmedMark provenance={newest.worst.provenance} />
         </BigMargin>
       ) : (
         <p className="text-lg">
@@ -126,7 +128,8 @@ function againstTarget(
 
 function seriesOf({ id: programId, trend }: ProgramDetail) {
   return trend.masks.map((mask) => ({
-    maskTitle: mask.title,
+    // Written at the end of the line, so that nobody reads the trend as firmer than it is.
+    maskTitle: mask.provenance === "from memory" ? `${mask.title} (from memory)` : mask.title,
     points: trend.builds.flatMap((build) => {
       const found = build.standings.find((standing) => standing.maskId === mask.id);
       if (!found) return [];

@@ -9,6 +9,7 @@ import { ButtonLink } from "@/components/ui/button";
 import { formatMargin } from "@/lib/core/units/format";
 import { StandingMark } from "../readings/standing-mark";
 import { RungDeltas } from "./rung-deltas";
+import { RungDoubts } from "./rung-doubts";
 import type { RungActions, RungStep } from "./rung-types";
 import { StepForm } from "./step-form";
 import { StepOrder } from "./step-order";
@@ -94,6 +95,7 @@ export function Rung({ step, steps, buildId, mayWrite, actions, fromMemory }: Ru
             ))}
           </p>
         )}
+        <RungDoubts doubts={step.doubts} />
         <RungDeltas step={step} actions={mayWrite ? actions : null} fromMemory={fromMemory} />
         {step.link ? (
           <details>

@@ -6,6 +6,9 @@ import type { StepState } from "@/lib/core/delta/ladder-order";
 import { baseOfStep, lineOfSteps } from "@/lib/core/delta/ladder-order";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
+import type { DoubtCode } from "@/lib/core/reading/reading";
+import { DOUBT_CODES } from "@/lib/core/reading/reading";
+import { listSweepDoubts } from "../sweep/list-doubts";
 import type { HeldReading } from "../sweep/load-readings";
 import { loadReadings } from "../sweep/load-readings";
 import type { MaskStanding } from "../sweep/standings";
@@ -33,6 +36,16 @@ export interface LadderStep extends StepDeltas {
   link: LinkSettings | null;
   onRecord: boolean;
   sweeps: ComparedSweep[];
+  /** Doubts of the step's readings in force, each with how many of its sweeps have it. */
+  doubts: { code: DoubtCode; sweeps: number }[];
+}
+
+/** How often each code stands in a list, in the order of `DOUBT_CODES`. */
+function countOf(codes: readonly DoubtCode[]): LadderStep["doubts"] {
+  return DOUBT_CODES.map((code) => ({
+    code,
+    sweeps: codes.filter((own) => own === code).length,
+  })).filter((doubt) => doubt.sweeps > 0);
 }
 
 /** A ladder with the deltas of its steps, inside a unit of work of its team; null without one. */
@@ -102,6 +115,17 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
     tolerancePpm: await largestTolerance(tx, teamId, ladder.buildId),
   });
   const line = new Set(lineOfSteps(rows).map((row) => row.id));
+  const doubts =
+    placed.length === 0
+      ? new Map<string, DoubtCode[]>()
+      : await listSweepDoubts(
+          tx,
+          teamId,
+          inArray(
+            sweeps.id,
+            placed.map((sweep) => sweep.id),
+          ),
+        );
   const steps: LadderStep[] = [];
   for (const [i, row] of ordered.entries()) {
     const { id, position, name, description, branchOfId, state } = row;
@@ -124,6 +148,7 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
         held.filter(({ sweepId }) => own.some((sweep) => sweep.id === sweepId)),
       ),
       sweeps: row.sweeps,
+      doubts: countOf(own.flatMap((sweep) => doubts.get(sweep.id) ?? [])),
       againstPrevious: deltas[i]?.againstPrevious ?? [],
       againstStart: deltas[i]?.againstStart ?? [],
       unpaired: deltas[i]?.unpaired ?? [],

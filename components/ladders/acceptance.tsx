@@ -8,14 +8,7 @@ import { TextArea } from "@/components/ui/text-area";
 import { useActionForm } from "@/components/ui/use-action-form";
 import type { Acceptance } from "@/lib/core/delta/delta";
 import { NEVER_ACCEPTED } from "@/lib/core/delta/find-mismatches";
-import type { RungDelta } from "./rung-types";
-
-type Refusal = { ok: false; message: string; fieldErrors: Record<string, string> };
-
-export interface AcceptanceActions {
-  accept: (input: unknown) => Promise<{ ok: true; data: { acceptanceId: string } } | Refusal>;
-  withdraw: (acceptanceId: string) => Promise<{ ok: true } | { ok: false; message: string }>;
-}
+import type { AcceptanceActions, RungDelta } from "./rung-types";
 
 interface AcceptanceProps {
   delta: RungDelta;

@@ -1,8 +1,7 @@
-import type { AcceptanceActions } from "./acceptance";
 import { MismatchNote } from "./acceptance";
 import { DeltaTable } from "./delta-table";
 import { DeltaValue } from "./delta-value";
-import type { RungDelta, RungStep } from "./rung-types";
+import type { AcceptanceActions, RungDelta, RungStep } from "./rung-types";
 
 interface RungDeltasProps {
   step: RungStep;

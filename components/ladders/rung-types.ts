@@ -3,7 +3,6 @@ import type { SweepDelta } from "@/lib/core/delta/delta";
 import type { StepState } from "@/lib/core/delta/ladder-order";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import type { Standing } from "@/lib/core/reading/reading";
-import type { AcceptanceActions } from "./acceptance";
 
 /** A delta with the newest sweep of each side. */
 export interface RungDelta extends SweepDelta {
@@ -37,6 +36,13 @@ export interface RungStep {
 }
 
 export type ActionResult = { ok: true } | { ok: false; message: string };
+
+type Refusal = { ok: false; message: string; fieldErrors: Record<string, string> };
+
+export interface AcceptanceActions {
+  accept: (input: unknown) => Promise<{ ok: true; data: { acceptanceId: string } } | Refusal>;
+  withdraw: (acceptanceId: string) => Promise<{ ok: true } | { ok: false; message: string }>;
+}
 
 export interface RungActions extends AcceptanceActions {
   edit: (

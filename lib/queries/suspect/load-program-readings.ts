@@ -54,8 +54,6 @@ export async function loadProgramReadings(tx: Transaction, teamId: string, progr
     .orderBy(asc(builds.sequence), asc(masks.key), asc(sweeps.createdAt), asc(sweeps.id));
 }
 
-export type ProgramReading = Awaited<ReturnType<typeof loadProgramReadings>>[number];
-
 /** The suspects of some readings that lie in one of the ranges, each with its trace's detector. */
 export async function loadSuspectsWithin(
   tx: Transaction,

@@ -2,7 +2,7 @@ import type { Context } from "@/lib/auth/context";
 import { approveReport } from "@/lib/commands/report/approve-report";
 import { createReport } from "@/lib/commands/report/create-report";
 import { issueReport } from "@/lib/commands/report/issue-report";
-import type { SeededLadder } from "./seed-sweeps";
+import type { SeededLadder } from "./sweeps/seed-ladders";
 
 const REPORTS = [
   {

@@ -1,12 +1,14 @@
 import type { SignalPath } from "@/lib/core/bench/signal-path";
 import type { Receiver } from "./setup";
-import { PATH_ABOVE_1_GHZ, PATH_BELOW_1_GHZ } from "./transducers";
+import { PATH_ABOVE_1_GHZ, PATH_BELOW_1_GHZ, RECALIBRATED_PATH_BELOW_1_GHZ } from "./transducers";
 
 export interface DemoBench {
   key: "below-1-ghz" | "above-1-ghz";
   name: string;
   distanceM: number;
   path: SignalPath;
+  /** The path from `RECALIBRATED_FROM` on, where it is another one. */
+  laterPath?: SignalPath;
   startHz: number;
   stopHz: number;
   points: number;
@@ -21,6 +23,7 @@ export const DEMO_BENCHES: DemoBench[] = [
     name: "3 m semi-open bench (30 MHz–1 GHz)",
     distanceM: 3,
     path: PATH_BELOW_1_GHZ,
+    laterPath: RECALIBRATED_PATH_BELOW_1_GHZ,
     startHz: 30e6,
     stopHz: 1e9,
     points: 19_401,
@@ -49,3 +52,11 @@ export const DEMO_BENCHES: DemoBench[] = [
     },
   },
 ];
+
+/** The day from which the long cable's new calibration is in the signal path. */
+export const RECALIBRATED_FROM = "2026-09-14";
+
+/** The signal path of a bench on one day (ISO date). */
+export function pathOn(bench: DemoBench, day: string): SignalPath {
+  return day >= RECALIBRATED_FROM ? (bench.laterPath ?? bench.path) : bench.path;
+}

@@ -4,7 +4,7 @@ import { linkAtRest, scrambled, SITE_SEED, spreadBy, type StoryLadder } from "./
 const atRest = linkAtRest(3.2e9, 32, 90e-12, "Coax, 1.5 m");
 // 1600 bits at 3.2 Gb/s repeat every 0.5 µs: lines 2 MHz apart.
 const scrambling = scrambled(atRest, 1600);
-const coded = { ...scrambling, coding: "8b10b" as const };
+export const GANNET_CODED = { ...scrambling, coding: "8b10b" as const };
 const common = { programName: "Gannet" as const, product: GANNET };
 
 export const GANNET_STORY: StoryLadder[] = [
@@ -33,14 +33,14 @@ export const GANNET_STORY: StoryLadder[] = [
         name: "8b/10b coding",
         description: "Sync words shortened; coding on the payload.",
         measuredOn: "2026-05-27",
-        link: coded,
+        link: GANNET_CODED,
         treatments: [],
       },
       {
         name: "Clock spread 0.5 % down",
         description: "Triangular, 31.5 kHz.",
         measuredOn: "2026-05-29",
-        link: { ...coded, ...spreadBy(0.5) },
+        link: { ...GANNET_CODED, ...spreadBy(0.5) },
         treatments: [],
       },
     ],
@@ -64,21 +64,21 @@ export const GANNET_STORY: StoryLadder[] = [
         name: "8b/10b coding",
         description: "Sync words shortened; coding on the payload.",
         measuredOn: "2026-07-28",
-        link: coded,
+        link: GANNET_CODED,
         treatments: [housing("Board shield can", 3), connectorShell(1.5)],
       },
       {
         name: "Clock spread 0.5 % down",
         description: "Triangular, 31.5 kHz.",
         measuredOn: "2026-07-30",
-        link: { ...coded, ...spreadBy(0.5) },
+        link: { ...GANNET_CODED, ...spreadBy(0.5) },
         treatments: [housing("Board shield can", 3), connectorShell(1.5)],
       },
       {
         name: "Ferrite on the supply cable",
         description: "Split core, two turns, 4 cm from the housing.",
         measuredOn: "2026-08-04",
-        link: { ...coded, ...spreadBy(0.5) },
+        link: { ...GANNET_CODED, ...spreadBy(0.5) },
         treatments: [housing("Board shield can", 3), connectorShell(1.5), supplyFerrite()],
       },
     ],
@@ -94,28 +94,28 @@ export const GANNET_STORY: StoryLadder[] = [
         name: "As built",
         description: "New shell, scrambler and coding on, clock not spread.",
         measuredOn: "2026-10-05",
-        link: coded,
+        link: GANNET_CODED,
         treatments: [housing("Board shield can", 3), connectorShell(4)],
       },
       {
         name: "Clock spread 0.25 % down",
         description: "Half the depth, to see what the deserializer tolerates.",
         measuredOn: "2026-10-06",
-        link: { ...coded, ...spreadBy(0.25) },
+        link: { ...GANNET_CODED, ...spreadBy(0.25) },
         treatments: [housing("Board shield can", 3), connectorShell(4)],
       },
       {
         name: "Clock spread 0.5 % down",
         description: "Triangular, 31.5 kHz; no link errors overnight.",
         measuredOn: "2026-10-08",
-        link: { ...coded, ...spreadBy(0.5) },
+        link: { ...GANNET_CODED, ...spreadBy(0.5) },
         treatments: [housing("Board shield can", 3), connectorShell(4)],
       },
       {
         name: "Ferrites on both cables",
         description: "One core each on link and supply cable.",
         measuredOn: "2026-10-13",
-        link: { ...coded, ...spreadBy(0.5) },
+        link: { ...GANNET_CODED, ...spreadBy(0.5) },
         treatments: [
           housing("Board shield can", 3),
           connectorShell(4),
@@ -127,7 +127,7 @@ export const GANNET_STORY: StoryLadder[] = [
         name: "Gasket in the housing seam",
         description: "Conductive gasket along the lid.",
         measuredOn: "2026-10-20",
-        link: { ...coded, ...spreadBy(0.5) },
+        link: { ...GANNET_CODED, ...spreadBy(0.5) },
         treatments: [
           housing("Board shield can and gasket", 9),
           connectorShell(4),

@@ -5,6 +5,8 @@ const atRest = linkAtRest(6e9, 40, 55e-12, "Shielded twisted pair, 5 m");
 // 3000 bits at 6 Gb/s: lines 2 MHz apart.
 const scrambling = scrambled(atRest, 3000);
 const coded = { ...scrambling, coding: "128b130b" as const };
+/** The link as it is from the die-cast build's third step on. */
+export const PLOVER_SLOW = { ...coded, ...spreadBy(0.25), edgeTimeS: 75e-12 };
 const common = { programName: "Plover" as const, product: PLOVER };
 
 export const PLOVER_STORY: StoryLadder[] = [
@@ -70,21 +72,21 @@ export const PLOVER_STORY: StoryLadder[] = [
         name: "Slower edges",
         description: "Driver set from 55 ps to 75 ps.",
         measuredOn: "2026-10-22",
-        link: { ...coded, ...spreadBy(0.25), edgeTimeS: 75e-12 },
+        link: PLOVER_SLOW,
         treatments: [housing("Die-cast housing", 8)],
       },
       {
         name: "Ferrite on the link cable",
         description: "One core at the display end.",
         measuredOn: "2026-11-03",
-        link: { ...coded, ...spreadBy(0.25), edgeTimeS: 75e-12 },
+        link: PLOVER_SLOW,
         treatments: [housing("Die-cast housing", 8), linkFerrite()],
       },
       {
         name: "Connector shell and supply choke",
         description: "Shell bonded all round; common-mode choke at the supply entry.",
         measuredOn: "2026-11-10",
-        link: { ...coded, ...spreadBy(0.25), edgeTimeS: 75e-12 },
+        link: PLOVER_SLOW,
         treatments: [
           housing("Die-cast housing", 8),
           linkFerrite(),

@@ -114,6 +114,19 @@ export const PLOVER: ProductModel = {
   ],
 };
 
+/** Plover with its backlight dimmed: the driver works in short bursts, 200 a second. */
+export const PLOVER_DIMMED: ProductModel = {
+  ...PLOVER,
+  clocks: [
+    ...PLOVER.clocks,
+    {
+      ...converter(supplyCable(-70.5, 64e6), 1.35e6, 36),
+      name: "Backlight driver",
+      burst: { quasiPeakDb: 7.5, averageDb: 24 },
+    },
+  ],
+};
+
 export const TERN: ProductModel = {
   amplitudeV: 0.8,
   coupling: {
@@ -174,5 +187,24 @@ export function supplyFilter(): Treatment {
     name: "Common-mode choke at the supply entry",
     leaks: ["supply-cable"],
     attenuation: over([30, 7], [100, 7], [300, 5], [1000, 2]),
+  };
+}
+
+/** The core moved 5 cm nearer to the housing: nothing that a sweep could tell. */
+export function movedSupplyFerrite(): Treatment {
+  const core = supplyFerrite();
+  const attenuation = core.attenuation.map(({ frequencyHz, factorDb }) => ({
+    frequencyHz,
+    factorDb: factorDb + 0.1,
+  }));
+  return { ...core, name: "Ferrite core on the supply cable, 5 cm nearer", attenuation };
+}
+
+/** A longer lead is a longer antenna. */
+export function longerSupplyLead(): Treatment {
+  return {
+    name: "Supply lead 40 cm longer",
+    leaks: ["supply-cable"],
+    attenuation: over([30, -4], [60, -3], [120, -1], [230, 0]),
   };
 }

@@ -2,7 +2,7 @@ import type { LinkSettings, SpreadSpectrum } from "@/lib/core/link/link-settings
 import type { AmbientSite, ProductModel, Treatment } from "./setup";
 
 export type ProgramName = "Gannet" | "Plover" | "Tern";
-export type BuildName = "G1" | "G2" | "G3" | "P1" | "P2" | "T1";
+export type BuildName = "G1" | "G2" | "G3" | "P1" | "P2" | "P3" | "T1";
 
 export interface StoryStep {
   name: string;

@@ -4,6 +4,7 @@ import { linkAtRest, scrambled, SITE_SEED, spreadBy, type StoryLadder } from "./
 const atRest = linkAtRest(1.2e9, 24, 180e-12, "Mast cable, 12 m");
 // 600 bits at 1.2 Gb/s: lines 2 MHz apart.
 const scrambling = scrambled(atRest, 600);
+export const TERN_SPREAD = { ...scrambling, ...spreadBy(0.5) };
 
 export const TERN_STORY: StoryLadder[] = [
   {
@@ -33,14 +34,14 @@ export const TERN_STORY: StoryLadder[] = [
         name: "Clock spread 0.5 % down",
         description: "Triangular, 31.5 kHz.",
         measuredOn: "2026-08-27",
-        link: { ...scrambling, ...spreadBy(0.5) },
+        link: TERN_SPREAD,
         treatments: [],
       },
       {
         name: "Foil around the boards, ferrite on the supply",
         description: "Copper foil for a try; one core on the supply cable.",
         measuredOn: "2026-09-02",
-        link: { ...scrambling, ...spreadBy(0.5) },
+        link: TERN_SPREAD,
         treatments: [housing("Copper foil", 5), supplyFerrite()],
       },
     ],

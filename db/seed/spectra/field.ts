@@ -5,7 +5,7 @@ import { fromDb } from "./decibel";
 import { noiseBandwidthHz } from "./detector-noise";
 import { makeLinkSource } from "./link-source";
 import { deriveSeed } from "./random";
-import type { Coupling, Leak, SpectrumSetup } from "./setup";
+import type { ClockSource, Coupling, Leak, SeedDetector, SpectrumSetup } from "./setup";
 import { readSweptLine } from "./spread-reduction";
 
 /** Field at the antenna, (µV/m)² per point: steady and swept lines and noise-like power apart. */
@@ -77,6 +77,12 @@ function addSourceLine(
   });
 }
 
+/** How far a clock that comes in bursts reads under its peak, dB. */
+function burstDb({ burst }: ClockSource, detector: SeedDetector): number {
+  if (!burst || detector === "peak") return 0;
+  return detector === "average" ? burst.averageDb : burst.quasiPeakDb;
+}
+
 /** Adds link and clocks; what follows the spread clock is swept. */
 export function addProduct(field: Field, setup: SpectrumSetup, frequenciesHz: Float64Array): void {
   const { product, link, treatments, polarization, rbwHz } = setup;
@@ -89,7 +95,7 @@ export function addProduct(field: Field, setup: SpectrumSetup, frequenciesHz: Fl
     for (const { hz, powerV2 } of clockLines(clock, stopHz)) {
       if (hz < setup.startHz * 0.94 || powerV2 < 1e-18) continue;
       const level = 10 * Math.log10(powerV2) + DB_PER_V2 + transfer(clock.coupling, clock.leak, hz);
-      addSourceLine(field, setup, hz, level, clock.followsSpread);
+      addSourceLine(field, setup, hz, level - burstDb(clock, setup.detector), clock.followsSpread);
     }
   if (!link) return;
   const source = makeLinkSource(link, product.amplitudeV, stopHz, rbwHz);
@@ -106,6 +112,11 @@ export function addProduct(field: Field, setup: SpectrumSetup, frequenciesHz: Fl
     const gainDb = transfer(product.coupling, "link-cable", hz) + DB_PER_V2;
     field.noise[i] = (field.noise[i] ?? 0) + density * bandwidthHz * fromDb(gainDb);
   });
+}
+
+/** Adds the lines of a known source. */
+export function addKnownLines(field: Field, setup: SpectrumSetup): void {
+  for (const { hz, levelDb } of setup.lines ?? []) addLine(field.lines, setup, hz, hz, levelDb);
 }
 
 /** Adds what is on air. */

@@ -33,6 +33,8 @@ export interface ClockSource {
   edgeTimeS: number;
   leak: Leak;
   coupling: Coupling;
+  /** Set for a source that comes in short bursts: how far other detectors read under the peak, dB. */
+  burst?: { quasiPeakDb: number; averageDb: number };
   /** True for clocks made by the link's own spread clock generator. */
   followsSpread: boolean;
 }
@@ -85,6 +87,8 @@ export interface SpectrumSetup {
   treatments: Treatment[];
   /** null: screened, or the input terminated. */
   ambient: AmbientSite | null;
+  /** Steady lines of a known source, their level in dBµV/m at the antenna; left out: none. */
+  lines?: { hz: number; levelDb: number }[];
   /** Slow level drift between sweeps (cable dress, turntable), about one standard deviation. */
   driftDb: number;
 }

@@ -2,7 +2,7 @@ import { factorAt } from "@/lib/core/bench/apply-signal-path";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
 import { fromDb } from "./decibel";
 import { drawNoiseReading, thermalNoiseDbuv } from "./detector-noise";
-import { addAmbient, addProduct, type Field } from "./field";
+import { addAmbient, addKnownLines, addProduct, type Field } from "./field";
 import { deriveSeed, drawNormal, makeRandom } from "./random";
 import type { Receiver, SpectrumSetup } from "./setup";
 
@@ -50,6 +50,7 @@ export function makeSpectrum(setup: SpectrumSetup): Spectrum {
   const field: Field = { lines: empty(), swept: empty(), noise: empty() };
   addProduct(field, setup, frequenciesHz);
   addAmbient(field, setup, frequenciesHz);
+  addKnownLines(field, setup);
   const random = makeRandom(deriveSeed(setup.seed, `noise ${detector}`));
   const moments = makeRandom(deriveSeed(setup.seed, "modulation"));
   const levelsDbuv = new Float32Array(points);

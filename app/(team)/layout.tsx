@@ -14,6 +14,7 @@ export default async function TeamLayout({ children }: { children: ReactNode }) 
   const items = [
     { href: "/", label: "Overview" },
     { href: "/programs", label: "Programs" },
+    { href: "/suspects", label: "Suspects" },
     { href: "/reports", label: "Reports" },
     { href: "/masks", label: "Masks" },
     { href: "/benches", label: "Benches" },

@@ -8,7 +8,7 @@ export function CheckAnswerNote({ answer }: { answer: CheckAnswer }) {
       <p>
         {number ? (
           <>
-            <span className="font-mono text-4xl [word-spacing:-0.3em] whitespace-nowrap">
+            <span className="mr-1.5 font-mono text-4xl [word-spacing:-0.3em] whitespace-nowrap">
               {number}
             </span>{" "}
           </>

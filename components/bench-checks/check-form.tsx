@@ -79,7 +79,6 @@ export function CheckForm({ benchId, sources, today, preview, record }: CheckFor
 
   return (
     <form onSubmit={(event) => void onSubmit(event)} method="post" className="max-w-3xl">
-      <ErrorNote message={refusal?.message ?? null} />
       <FileField
         label="Sweep of the source"
         accept=".csv,.txt,.tsv,.dat,text/*"
@@ -180,11 +179,18 @@ export function CheckForm({ benchId, sources, today, preview, record }: CheckFor
         error={errors.notes}
         onChange={(event) => setNotes(event.target.value)}
       />
+      {/* Beside the button: the head of a long form is out of sight when it is sent. */}
+      <ErrorNote message={refusal?.message ?? null} />
       <div className="flex flex-wrap items-center gap-2">
         <Button type="submit" disabled={pending || !isReady}>
           {isReference ? "Record reference" : "Record check"}
         </Button>
         <ButtonLink href={`/benches/${benchId}/checks`}>Cancel</ButtonLink>
+        {pending ? (
+          <span role="status" className="text-sm text-ink-soft">
+            The lines are being looked for …
+          </span>
+        ) : null}
         {isReady ? null : (
           <span className="text-sm text-ink-soft">
             {file?.state === "asks"

@@ -84,7 +84,6 @@ export function BudgetEditor({ benchId, revision, budget, save }: BudgetEditorPr
 
   return (
     <form onSubmit={form.onSubmit} method="post">
-      <ErrorNote message={form.message} />
       <div className="grid gap-x-6 sm:grid-cols-2">
         <Field
           label="Title"
@@ -119,7 +118,10 @@ export function BudgetEditor({ benchId, revision, budget, save }: BudgetEditorPr
               : form.fieldErrors[`lines.${sentIds.indexOf(line.id)}.${field}`]
           }
           onChange={(change) => {
-            const fields = Object.keys(change).map((field) => `${line.id}.${field}`);
+            // Whether the number of observations is needed hangs on the distribution.
+            const named = Object.keys(change);
+            const of = named.includes("distribution") ? [...named, "observations"] : named;
+            const fields = of.map((field) => `${line.id}.${field}`);
             setChanged((all) => new Set([...all, ...fields]));
             setLines((now) => now.map((l) => (l.id === line.id ? { ...l, ...change } : l)));
           }}
@@ -147,9 +149,19 @@ export function BudgetEditor({ benchId, revision, budget, save }: BudgetEditorPr
             {open === 1 ? "1 line is" : `${open} lines are`} not counted yet.
           </p>
         ) : null}
-        <BudgetResult result={result} reference={reference} />
+        {sound.length > 0 ? (
+          <BudgetResult result={result} reference={reference} />
+        ) : (
+          <p className="text-ink-soft">
+            U follows from the lines; without one nothing is known of it.
+          </p>
+        )}
       </section>
-      <div className="mt-6 flex gap-2">
+      {/* Beside the button: the head of a long form is out of sight when it is sent. */}
+      <div className="mt-6">
+        <ErrorNote message={form.message} />
+      </div>
+      <div className="flex flex-wrap gap-2">
         <Button type="submit" disabled={form.pending}>
           Save as revision {revision + 1}
         </Button>

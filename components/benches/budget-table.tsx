@@ -40,7 +40,7 @@ export function BudgetTable({ result }: { result: ExpandedUncertainty }) {
               </th>
               <td className="px-3 py-2 font-mono whitespace-nowrap">{line.value} dB</td>
               <td className="min-w-40 px-3 py-2 text-sm">
-                {DISTRIBUTION_LABELS[line.distribution]}{" "}
+                {DISTRIBUTION_LABELS[line.distribution]},{" "}
                 <span className="whitespace-nowrap text-ink-soft">
                   {DIVISORS[line.distribution]}
                   {line.observations === null ? "" : `, n = ${line.observations}`}

@@ -77,7 +77,8 @@ export function GuardRuleForm(props: GuardRuleFormProps) {
             ) : (
               <>
                 The saved budget gives a guard of{" "}
-                <span className="font-mono whitespace-nowrap">{computed} dB</span>.
+                <span className="font-mono whitespace-nowrap">{computed} dB</span>
+                {rule === "excess" && computed === 0 ? ": U lies within U_CISPR." : "."}
               </>
             )}
           </p>

@@ -67,7 +67,6 @@ export function SignalPathEditor(props: SignalPathEditorProps) {
   const drawn = drawableTransducers(drafts);
   return (
     <form onSubmit={form.onSubmit} method="post">
-      <ErrorNote message={form.message} />
       <div className="max-w-md">
         <Field
           label="Impedance of the instrument's input in Ω"
@@ -117,7 +116,11 @@ export function SignalPathEditor(props: SignalPathEditorProps) {
           <FactorChart transducers={drawn} />
         </section>
       ) : null}
-      <div className="mt-6 flex gap-2">
+      {/* Beside the button: the head of a long form is out of sight when it is sent. */}
+      <div className="mt-6">
+        <ErrorNote message={form.message} />
+      </div>
+      <div className="flex flex-wrap gap-2">
         <Button type="submit" disabled={form.pending}>
           Save as revision {revision + 1}
         </Button>

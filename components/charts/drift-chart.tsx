@@ -71,7 +71,7 @@ export function DriftChart(props: DriftChartProps) {
               />
             ))}
             <path d={`M${across}`} stroke="var(--ink-soft)" strokeWidth="1" />
-            <text x={margin.left + 6} y={band.topY - 5} fontSize="11" fill="var(--ink)">
+            <text x={right - 6} y={band.topY - 5} textAnchor="end" fontSize="11" fill="var(--ink)">
               tolerance ±{toleranceDb} dB
             </text>
             {drift.referenceXs.map((x, i) => (

@@ -99,7 +99,6 @@ export function MaskEditor({ save, foresee, edited }: MaskEditorProps) {
           onKeep={() => setForeseen(null)}
         />
       ) : null}
-      <ErrorNote message={form.message} />
       <MaskFields draft={draft} errorAt={(path) => problemAt(problems, path)} onPatch={patch} />
       <div className="mt-2 grid gap-6 lg:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
         <div className="min-w-0">
@@ -139,7 +138,11 @@ export function MaskEditor({ save, foresee, edited }: MaskEditorProps) {
           </section>
         </div>
       </div>
-      <div className="mt-6 flex gap-2">
+      {/* Beside the button: the head of a long form is out of sight when it is sent. */}
+      <div className="mt-6">
+        <ErrorNote message={form.message} />
+      </div>
+      <div className="flex flex-wrap gap-2">
         <Button type="submit" disabled={form.pending}>
           {edited ? `Save as revision ${edited.revision + 1}` : "Create mask"}
         </Button>

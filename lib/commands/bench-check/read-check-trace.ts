@@ -2,6 +2,7 @@ import { applySignalPath } from "@/lib/core/bench/apply-signal-path";
 import type { CheckLine } from "@/lib/core/bench/bench-check";
 import { CHECK_PROMINENCE_DB, findCheckLines } from "@/lib/core/bench/compare-check";
 import type { SignalPath } from "@/lib/core/bench/signal-path";
+import { frequencyAt } from "@/lib/core/sweep/axis";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { formatFrequency } from "@/lib/core/units/format";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
@@ -52,6 +53,17 @@ export function throughCheckPath(trace: Trace, path: SignalPath, corrected: bool
   );
 }
 
+/** How much of the sweep lies inside the factor tables, where that is not all of it; else "". */
+function reachWords({ axis, levelsDb }: Trace): string {
+  const first = levelsDb.findIndex((level) => !Number.isNaN(level));
+  if (first === -1) return "All of this sweep lies outside the bench's factor tables.";
+  const last = levelsDb.findLastIndex((level) => !Number.isNaN(level));
+  if (first === 0 && last === levelsDb.length - 1) return "";
+  const words = (index: number) => formatFrequency(frequencyAt(axis, index));
+  const span = first === last ? words(first) : `${words(first)} to ${words(last)}`;
+  return `Of this sweep only ${span} lies inside the bench's factor tables.`;
+}
+
 /** The lines that stand out; a reference has some, and neither it nor a check has thousands. */
 export function readCheckLines(trace: Trace, rbwHz: number, isReference: boolean): CheckLine[] {
   const lines = findCheckLines(trace, rbwHz);
@@ -63,7 +75,7 @@ export function readCheckLines(trace: Trace, rbwHz: number, isReference: boolean
   if (lines.length === 0 && isReference)
     throw refuse(
       "file",
-      `No line stands ${CHECK_PROMINENCE_DB} dB out of what is around it, inside the span of the bench's factor tables: later checks would have nothing to be compared with.`,
+      `${reachWords(trace)} No line stands ${CHECK_PROMINENCE_DB} dB out of what is around it: later checks would have nothing to be compared with.`.trim(),
     );
   return lines;
 }

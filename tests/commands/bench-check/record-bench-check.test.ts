@@ -241,7 +241,7 @@ describe("recordBenchCheck", () => {
       (await refusalOf(recordBenchCheck(ctx, referenceInput(benchId, combOf({}, { startMhz })))))
         .fieldErrors.file;
     expect(await refuseAt(2000)).toContain("All of this sweep lies outside");
-    expect(await refuseAt(300)).toContain("Of this sweep only 300.00 MHz lies inside");
+    expect(await refuseAt(300)).toContain("Of this sweep only 300.0 MHz lies inside");
     expect((await counts(ctx.teamId)).checks).toBe(0);
   });
 

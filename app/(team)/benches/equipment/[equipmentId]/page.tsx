@@ -62,7 +62,11 @@ export default async function PieceOfEquipmentPage(props: {
         }
       />
       <p className="mb-6 text-lg">
-        <span className="font-mono text-4xl">{inForce?.dueOn ?? "—"}</span>{" "}
+        {inForce?.dueOn ? (
+          <>
+            due on <span className="mr-1.5 font-mono text-4xl">{inForce.dueOn}</span>{" "}
+          </>
+        ) : null}
         <DueMark state={inForce ? dueState(inForce.dueOn, day) : "uncalibrated"} />
       </p>
       <Facts

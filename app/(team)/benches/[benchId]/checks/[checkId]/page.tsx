@@ -58,7 +58,7 @@ export default async function BenchCheckPage(props: CheckPageProps) {
       />
       {driftWorstDb !== null ? (
         <p className="mb-6">
-          <span className="font-mono text-4xl [word-spacing:-0.3em] whitespace-nowrap">
+          <span className="mr-1.5 font-mono text-4xl [word-spacing:-0.3em] whitespace-nowrap">
             {formatDelta(driftWorstDb)}
           </span>{" "}
           <span className="text-lg">
@@ -72,6 +72,9 @@ export default async function BenchCheckPage(props: CheckPageProps) {
               </>
             ) : null}
             , {where} the tolerance of ±{toleranceDb} dB.
+            {worst && !worst.standsOut
+              ? " The line no longer stands out: it is at least that far off."
+              : null}
           </span>
         </p>
       ) : null}

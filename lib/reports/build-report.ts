@@ -1,10 +1,14 @@
 import { and, asc, eq } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { builds, programs, reports, reportSweeps, sweeps, teams } from "@/db/schema";
-import { loadLadderSteps } from "@/lib/queries/ladder/load-ladder-steps";
-import { gatherSweep } from "./gather-sweep";
 import { formatReportNumber } from "@/lib/core/report/report-number";
-import type { ReportSnapshot } from "./report-snapshot";
+import type { SweepDetail } from "@/lib/queries/sweep/load-sweep-detail";
+import { gatherCombined } from "./gather-combined";
+import { gatherLadder } from "./gather-ladder";
+import { gatherNotHeld } from "./gather-not-held";
+import { gatherSweep, loadReportSweep } from "./gather-sweep";
+import { loadMaskNotes } from "./mask-notes";
+import type { ReportContent, SnapshotSweep } from "./report-content";
 
 interface Issue {
   number: string;
@@ -23,7 +27,7 @@ export async function buildReport(
   teamId: string,
   draft: Draft,
   issue: Issue,
-): Promise<ReportSnapshot> {
+): Promise<ReportContent> {
   const [about] = await tx
     .select({
       team: teams.name,
@@ -48,10 +52,15 @@ export async function buildReport(
     )
     .where(and(eq(reportSweeps.teamId, teamId), eq(reportSweeps.reportId, draft.id)))
     .orderBy(asc(reportSweeps.position));
-  const gathered: ReportSnapshot["sweeps"] = [];
-  for (const { sweepId } of chosen) gathered.push(await gatherSweep(tx, teamId, sweepId));
+  const details: SweepDetail[] = [];
+  for (const { sweepId } of chosen) details.push(await loadReportSweep(tx, teamId, sweepId));
+  const revisionIds = details.flatMap(({ readings }) => readings.map((one) => one.maskRevisionId));
+  const notes = await loadMaskNotes(tx, teamId, [...new Set(revisionIds)]);
+  const gathered: SnapshotSweep[] = [];
+  for (const detail of details) gathered.push(await gatherSweep(tx, teamId, detail, notes));
+  const combined = await gatherCombined(tx, teamId, details, notes);
   return {
-    version: 1,
+    version: 2,
     number: issue.number,
     title: draft.title,
     summary: draft.summary,
@@ -61,6 +70,8 @@ export async function buildReport(
     issuedBy: issue.issuedBy,
     replaces: await numberOf(tx, teamId, draft.replacesId),
     sweeps: gathered,
+    combined,
+    notHeld: await gatherNotHeld(tx, teamId, draft.buildId, details, combined),
     ladder: await gatherLadder(tx, teamId, draft.ladderId),
   };
 }
@@ -72,25 +83,4 @@ async function numberOf(tx: Transaction, teamId: string, reportId: string | null
     .from(reports)
     .where(and(eq(reports.teamId, teamId), eq(reports.id, reportId)));
   return row?.number ? formatReportNumber(row.number) : null;
-}
-
-async function gatherLadder(
-  tx: Transaction,
-  teamId: string,
-  ladderId: string | null,
-): Promise<ReportSnapshot["ladder"]> {
-  if (ladderId === null) return null;
-  const found = await loadLadderSteps(tx, teamId, ladderId);
-  if (!found) return null;
-  return {
-    name: found.name,
-    steps: found.steps.map((step) => ({
-      position: step.position,
-      name: step.name,
-      description: step.description,
-      sweeps: step.sweeps.map((sweep) => sweep.name),
-      againstPrevious: step.againstPrevious,
-      againstStart: step.againstStart,
-    })),
-  };
 }

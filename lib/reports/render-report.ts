@@ -5,6 +5,7 @@ import { ReportDocument, SummaryDocument } from "./report-document";
 import type { ReportSnapshot, ReportState } from "./report-snapshot";
 import { hashSnapshot } from "./snapshot-hash";
 import { chooseFit } from "./summary-fit";
+import { upgradeSnapshot } from "./upgrade-snapshot";
 
 /** Pages of a PDF as React-pdf writes it, its page objects being neither packed nor encrypted. */
 function countPages(pdf: Buffer): number {
@@ -13,7 +14,7 @@ function countPages(pdf: Buffer): number {
 
 /**
  * The report as a PDF. Refuses a snapshot that no longer has the hash it was issued with, because
- * every page states that hash.
+ * every page states that hash; it is that of the stored shape, of whatever version.
  */
 export async function renderReport(
   snapshot: ReportSnapshot,
@@ -23,7 +24,7 @@ export async function renderReport(
     throw new Error(`The content of report ${snapshot.number} differs from what was issued.`);
   registerFonts();
   const hasGlyph = await loadGlyphTest();
-  const content = makePrintable(snapshot, hasGlyph);
+  const content = makePrintable(upgradeSnapshot(snapshot), hasGlyph);
   const printed = makePrintable(state, hasGlyph);
   const fit = await chooseFit(async (tried) => {
     const summary = SummaryDocument({ snapshot: content, state: printed, fit: tried });

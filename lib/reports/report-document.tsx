@@ -1,16 +1,19 @@
 import { Document } from "@react-pdf/renderer";
 import { PageFrame } from "./parts/page-frame";
-import type { ReportSnapshot, ReportState } from "./report-snapshot";
+import type { ReportContent } from "./report-content";
+import type { ReportState } from "./report-snapshot";
 import type { SummaryFit } from "./summary-fit";
 import { DecisionRule } from "./sections/decision-rule";
 import { Ladder } from "./sections/ladder";
 import { Masks } from "./sections/masks";
+import { hasMeasureAgain, MeasureAgain } from "./sections/measure-again";
 import { ItemAndPeople, Records } from "./sections/records";
 import { SummaryPage } from "./sections/summary-page";
 import { SweepBlock } from "./sections/sweep";
+import { Together } from "./sections/together";
 
 interface ReportDocumentProps {
-  snapshot: ReportSnapshot;
+  snapshot: ReportContent;
   state: ReportState;
   fit: SummaryFit;
 }
@@ -49,6 +52,14 @@ export function ReportDocument({ snapshot, state, fit }: ReportDocumentProps) {
         <DecisionRule snapshot={snapshot} />
         <Masks snapshot={snapshot} />
       </PageFrame>
+      <PageFrame snapshot={snapshot} state={state}>
+        <Together content={snapshot} />
+      </PageFrame>
+      {hasMeasureAgain(snapshot) ? (
+        <PageFrame snapshot={snapshot} state={state}>
+          <MeasureAgain content={snapshot} />
+        </PageFrame>
+      ) : null}
       {/* A run of pages for each sweep: laying out a run costs the square of its length. */}
       {snapshot.sweeps.map((sweep) => (
         <PageFrame key={sweep.sweepId} snapshot={snapshot} state={state}>

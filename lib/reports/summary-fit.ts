@@ -1,20 +1,65 @@
 /** How much of each part the summary page shows, so that it stays one page. */
 export interface SummaryFit {
   chartHeightPt: number;
-  /** Mask lines, doubts and ladder steps that are listed; the rest is counted. */
+  /** Mask lines and ladder steps that are listed; the rest is counted. */
   rows: number;
+  /** Doubts that stand by themselves; the rest is named in a row. */
   doubts: number;
   steps: number;
-  /** Longest text, in signs, of the issuer's summary and of one delta's sentence. */
+  /** Longest text, in signs, of one doubt, the issuer's summary and one delta's sentence. */
+  doubtLength: number;
+  /** Whether each suspect names its sweep. */
+  suspectSweeps: boolean;
   summaryLength: number;
   sentenceLength: number;
 }
 
 const CONTENTS: readonly Omit<SummaryFit, "chartHeightPt">[] = [
-  { rows: 6, doubts: 4, steps: 6, summaryLength: 360, sentenceLength: 230 },
-  { rows: 6, doubts: 3, steps: 6, summaryLength: 240, sentenceLength: 170 },
-  { rows: 5, doubts: 2, steps: 4, summaryLength: 160, sentenceLength: 130 },
-  { rows: 3, doubts: 2, steps: 3, summaryLength: 100, sentenceLength: 110 },
+  {
+    rows: 6,
+    doubts: 5,
+    doubtLength: 120,
+    suspectSweeps: true,
+    steps: 6,
+    summaryLength: 360,
+    sentenceLength: 230,
+  },
+  {
+    rows: 6,
+    doubts: 4,
+    doubtLength: 80,
+    suspectSweeps: true,
+    steps: 6,
+    summaryLength: 240,
+    sentenceLength: 170,
+  },
+  {
+    rows: 5,
+    doubts: 5,
+    doubtLength: 0,
+    suspectSweeps: true,
+    steps: 4,
+    summaryLength: 160,
+    sentenceLength: 130,
+  },
+  {
+    rows: 3,
+    doubts: 3,
+    doubtLength: 0,
+    suspectSweeps: false,
+    steps: 3,
+    summaryLength: 100,
+    sentenceLength: 110,
+  },
+  {
+    rows: 3,
+    doubts: 2,
+    doubtLength: 0,
+    suspectSweeps: false,
+    steps: 2,
+    summaryLength: 80,
+    sentenceLength: 90,
+  },
 ];
 
 const LOWEST_CHART_PT = 130;
@@ -22,8 +67,10 @@ const HIGHEST_CHART_PT = 250;
 const LAST_RESORT: SummaryFit = {
   chartHeightPt: 104,
   rows: 3,
-  doubts: 1,
-  steps: 2,
+  doubts: 0,
+  doubtLength: 0,
+  suspectSweeps: false,
+  steps: 1,
   summaryLength: 80,
   sentenceLength: 90,
 };

@@ -3,6 +3,8 @@ import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { STANDING_LABELS } from "@/lib/core/reading/reading";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 import { formatDelta, formatFrequency, formatMargin } from "@/lib/core/units/format";
+import { DISTRIBUTION_LABELS, REFERENCE_LABELS } from "@/lib/reports/budget-words";
+import { DOUBT_NAMES } from "@/lib/reports/doubt-names";
 import {
   BASIS_LABELS,
   CODING_LABELS,
@@ -30,6 +32,9 @@ const TABLES = [
   PURPOSE_LABELS,
   SCRAMBLER_LABELS,
   TRANSDUCER_LABELS,
+  DOUBT_NAMES,
+  DISTRIBUTION_LABELS,
+  REFERENCE_LABELS,
 ];
 
 describe("signs", () => {
@@ -48,10 +53,10 @@ describe("signs", () => {
     expect(packed).toContain(`file${all}end`);
   });
 
-  test("one that no font has is written out as its code point", async () => {
+  test("one that no font has is spelled, or written out as its code point", async () => {
     const build = { name: "B4 λ/2 試", builtOn: null, notes: "" };
     const { text } = await printReport(sampleSnapshot({ build, sweeps: [], ladder: null }));
-    expect(text).toContain("B4 [U+03BB]/2 [U+8A66]");
+    expect(text).toContain("B4 lambda/2 [U+8A66]");
   });
 });
 

@@ -1,5 +1,8 @@
 import { describe, expect, test } from "vitest";
-import { decidingReading, rankDoubts, summarizeLines } from "@/lib/reports/summarize";
+import type { Doubt, DoubtCode } from "@/lib/core/reading/reading";
+import { DOUBT_CODES } from "@/lib/core/reading/reading";
+import { summarizeDoubts } from "@/lib/reports/doubt-summary";
+import { decidingReading, nameWithPosition, summarizeLines } from "@/lib/reports/summarize";
 import {
   inventedTrace,
   sampleSnapshot,
@@ -29,7 +32,8 @@ describe("a mask line over several sweeps", () => {
     ]) {
       const rows = summarizeLines(sampleSnapshot({ sweeps }));
       expect(rows).toHaveLength(1);
-      expect(rows[0]).toMatchObject({ standing: "over", standingSweep: "Over", sweepCount: 2 });
+      expect(rows[0]).toMatchObject({ standing: "over", mark: null, coverage: 1 });
+      expect(rows[0]?.worst).toMatchObject({ decidedBy: "Over, vertical", sweepId: "over" });
       expect(rows[0]?.worst?.point.marginDb).toBe(
         over.readings[0]?.reading.lines[0]?.worst?.marginDb,
       );
@@ -38,8 +42,8 @@ describe("a mask line over several sweeps", () => {
 
   test("is over by the margin that makes it so, not by another sweep's upper bound", () => {
     const [row] = summarizeLines(sampleSnapshot({ sweeps: [over, bound] }));
-    expect(row).toMatchObject({ standing: "over", standingSweep: "Over" });
-    expect(row?.worst).toMatchObject({ sweep: "Over", basis: "like-for-like" });
+    expect(row?.standing).toBe("over");
+    expect(row?.worst).toMatchObject({ sweepId: "over", basis: "like-for-like" });
   });
 
   test("keeps revisions of one mask apart", () => {
@@ -66,15 +70,67 @@ describe("the sweep on the chart", () => {
   });
 });
 
-describe("doubts", () => {
-  test("are each said once, coverage before the rest", () => {
-    const high = sampleSweep({
-      traces: [final(25)],
-      masks: [{ mask: shippedMask("iec-60945-radiated-3m"), revision: 1 }],
+describe("a mask's mark", () => {
+  test("says who confirmed it, when and with which copy, and otherwise that it is from memory", () => {
+    const iec = [{ mask: shippedMask("iec-60945-radiated-3m"), revision: 1 }];
+    const content = sampleSnapshot({ sweeps: [sampleSweep({ masks: iec })] });
+    const [unconfirmed] = summarizeLines(content);
+    expect(unconfirmed).toMatchObject({ mark: "from memory, not confirmed", isConfirmed: false });
+    const confirmation = { by: "Ines Tolland", at: "2026-11-20T09:00:00.000Z", copy: "shelf 4" };
+    const combined = content.combined.map((one) => ({ ...one, confirmation }));
+    const [confirmed] = summarizeLines({ ...content, combined });
+    expect(confirmed).toMatchObject({
+      mark: "confirmed by Ines Tolland on 2026-11-20 against shelf 4",
+      isConfirmed: true,
     });
-    const doubts = rankDoubts(sampleSnapshot({ sweeps: [high, { ...high, sweepId: "again" }] }));
-    expect(doubts[0]?.code).toBe("not-covered");
-    expect(new Set(doubts.map((doubt) => doubt.text)).size).toBe(doubts.length);
-    expect(doubts.length).toBe(high.readings[0]?.reading.doubts.length);
+  });
+});
+
+describe("the name of a sweep", () => {
+  test("carries its polarization unless it says it already or has none", () => {
+    expect(nameWithPosition({ ...good, name: "Gannet Vertical" })).toBe("Gannet Vertical");
+    const mains = { ...good, settings: { ...good.settings, port: "mains" as const } };
+    expect(nameWithPosition(mains)).toBe("Good");
+  });
+});
+
+describe("doubts", () => {
+  const doubt = (code: DoubtCode, text: string, valueDb: number | null = null) => ({
+    code,
+    text,
+    valueDb,
+  });
+  const content = sampleSnapshot({ sweeps: [good] });
+  const [first] = content.combined;
+  if (!first) throw new Error("The sample has no combined reading.");
+  const withDoubts = (...doubts: Doubt[]) =>
+    summarizeDoubts({ combined: [{ ...first, reading: { ...first.reading, doubts } }] });
+
+  test("of one kind are said once with the largest number, whatever its sign", () => {
+    const { weakening } = withDoubts(
+      doubt("rbw-differs", "One.", 9.2),
+      doubt("rbw-differs", "Other.", -20.8),
+      doubt("rbw-differs", "One.", 9.2),
+    );
+    expect(weakening).toEqual([
+      { code: "rbw-differs", name: "RBW differs", size: "up to 20.8 dB", text: "Other.", count: 2 },
+    ]);
+  });
+
+  test("that something could not be checked stand apart from those that weaken a reading", () => {
+    const { weakening, unchecked } = withDoubts(
+      doubt("sweep-time-unchecked", "No time."),
+      doubt("ambient-not-taken", "No ambient."),
+      doubt("not-covered", "A gap."),
+      doubt("rbw-unstated", "No RBW."),
+    );
+    expect(weakening.map(({ code }) => code)).toEqual(["not-covered", "ambient-not-taken"]);
+    expect(unchecked.map(({ code }) => code)).toEqual(["sweep-time-unchecked", "rbw-unstated"]);
+  });
+
+  test("each kind has its place in the order", () => {
+    const { weakening, unchecked } = withDoubts(...DOUBT_CODES.map((code) => doubt(code, code)));
+    expect(weakening.at(-1)?.code).toBe("sweep-time-short");
+    expect(weakening.length + unchecked.length).toBe(DOUBT_CODES.length);
   });
 });

@@ -61,4 +61,43 @@ export const REFUSED: SweepDelta = {
   changes: null,
 };
 
-/** A report with two sweeps and a ladder of three steps, the last of them not comparable. */
+/** A delta over a mismatch that an engineer accepted, with repeats and moved suspects. */
+export function acceptedDelta(): SweepDelta {
+  const repeated = (changeDb: number, uncertaintyDb: number) => ({
+    changeDb,
+    uncertaintyDb,
+    repeats: { before: 3, after: 3 },
+    isWithinRepeatability: Math.abs(changeDb) <= uncertaintyDb,
+  });
+  const suspect = (frequencyHz: number, beforeDb: number, afterDb: number) => ({
+    detector: "peak" as const,
+    frequencyHz,
+    window: { startHz: frequencyHz - 240e3, stopHz: frequencyHz + 240e3 },
+    beforeDb,
+    afterDb,
+    beforeAtHz: frequencyHz,
+    afterAtHz: frequencyHz,
+    ...repeated(afterDb - beforeDb, 1.2),
+  });
+  const [margin] = sampleDelta().changes?.margins ?? [];
+  if (!margin) throw new Error("The sample has no margin.");
+  return {
+    ...sampleDelta({
+      margins: [{ ...margin, beforeDb: 4.2, afterDb: 4.6, ...repeated(0.4, 1.2) }],
+      suspects: {
+        fresh: [suspect(211.3e6, 21.4, 37.9)],
+        gone: [suspect(96.8e6, 41.2, 22.6)],
+        followed: [suspect(145.2e6, 44.1, 43.7)],
+      },
+      repeatability: "Swept 3 times before and 3 times after: ± is half of the 95 % interval.",
+    }),
+    mismatches: [{ field: "bench", text: "The bench was Boathouse before and Pier after." }],
+    accepted: {
+      id: "acceptance-1",
+      fields: ["bench"],
+      reason: "Same antenna and cable, carried over the same day.",
+      by: "Ines Tolland",
+      at: "2026-11-25T12:20:00.000Z",
+    },
+  };
+}

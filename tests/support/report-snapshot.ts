@@ -7,12 +7,14 @@ import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import type { Trace } from "@/lib/core/sweep/trace";
 import { REFUSED, sampleDelta } from "./report-delta";
 import { hashSnapshot } from "@/lib/reports/snapshot-hash";
+import { combineByMask } from "@/lib/reports/combine-by-mask";
 import type {
-  ReportSnapshot,
-  ReportState,
+  ReportContent,
+  SnapshotStep,
   SnapshotSweep,
   SnapshotTrace,
-} from "@/lib/reports/report-snapshot";
+} from "@/lib/reports/report-content";
+import type { ReportSnapshot, ReportState } from "@/lib/reports/report-snapshot";
 
 export function shippedMask(key: string): Mask {
   const path = join(process.cwd(), "masks", `${key}.json`);
@@ -107,11 +109,17 @@ interface SweepChoices {
   traces?: Trace[];
   masks?: { mask: Mask; revision: number }[];
   guardDb?: number;
+  budget?: SnapshotSweep["bench"]["budget"];
 }
 
 /** One product sweep of the invented team's bench, read by the real rules. */
 export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
-  const { id = "sweep-1", name = "Gannet B3, scrambler on, vertical", guardDb = 4 } = choices;
+  const {
+    id = "sweep-1",
+    name = "Gannet B3, scrambler on, vertical",
+    guardDb = 4,
+    budget = null,
+  } = choices;
   const traces = choices.traces ?? [inventedTrace("Trace 1", 41)];
   const masks = choices.masks ?? [
     { mask: shippedMask("cispr-32-radiated-class-b-3m"), revision: 2 },
@@ -122,6 +130,9 @@ export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
     fileName: `${name.toLowerCase().replaceAll(/[^a-z0-9]+/g, "_")}_scan_with_a_name_as_long_as_benches_make_them_0007.csv`,
     fileSha256: (id === "sweep-1" ? "a7" : "5c").repeat(32),
     purpose: "product",
+    onRecord: true,
+    ambientSweeps: [],
+    floorSweeps: ["Boathouse, input closed"],
     measuredOn: "2026-11-24",
     importedBy: "Maren Holt",
     importedAt: "2026-11-24T15:02:10.000Z",
@@ -144,8 +155,14 @@ export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
       name: "Boathouse bench",
       site: "semi-anechoic corner, pier 2",
       instrument: "analyzer, 9 kHz to 3 GHz",
+      calibration: {
+        name: "Analyzer of the pier",
+        calibratedOn: "2026-01-20",
+        dueOn: "2027-01-20",
+      },
       distanceM: 3,
       guardDb,
+      budget,
       signalPathRevision: 5,
       impedanceOhm: 50,
       transducers: [
@@ -166,8 +183,12 @@ export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
     },
     traces: traces.map((trace) => snapshotTrace(trace)),
     readings: masks.map(({ mask, revision }) => ({
+      maskRevisionId: `${mask.key} ${revision}`,
       maskRevision: revision,
       mask,
+      confirmation: null,
+      ambient: [],
+      followed: [],
       reading: readSweep({
         traces,
         settings: SETTINGS,
@@ -188,10 +209,71 @@ export function sampleSweep(choices: SweepChoices = {}): SnapshotSweep {
   };
 }
 
-export function sampleSnapshot(change: Partial<ReportSnapshot> = {}): ReportSnapshot {
+const step = (position: number, name: string): SnapshotStep => ({
+  position,
+  name,
+  description: "",
+  state: "kept",
+  base: position === 0 ? null : { position: position - 1, name: "As built" },
+  isBranch: false,
+  isOnLine: true,
+  onRecord: false,
+  worst: null,
+  sweeps: [],
+  unpaired: [],
+  againstPrevious: [],
+  againstStart: [],
+});
+
+function sampleLadder(): ReportContent["ladder"] {
   const spread = sampleDelta();
   return {
-    version: 1,
+    name: "Link mitigations",
+    steps: [
+      {
+        ...step(0, "As built"),
+        description: "Alternating payload, no scrambling.",
+        sweeps: ["Gannet B3, plain, vertical"],
+      },
+      {
+        ...step(1, "Scrambler on"),
+        description: "Additive scrambler of the link switched on.",
+        sweeps: ["Gannet B3, scrambler on, vertical"],
+        againstPrevious: [spread],
+        againstStart: [spread],
+      },
+      {
+        ...step(2, "Clamp at the bulkhead"),
+        base: { position: 1, name: "Scrambler on" },
+        state: "dropped",
+        isOnLine: false,
+        sweeps: ["Gannet B3, clamp, vertical"],
+        againstPrevious: [REFUSED],
+        againstStart: [REFUSED],
+      },
+    ],
+  };
+}
+
+/** A report with two sweeps and a ladder of three steps, the last of them not comparable. */
+export function sampleSnapshot(change: Partial<ReportContent> = {}): ReportContent {
+  const sweeps = change.sweeps ?? [
+    sampleSweep(),
+    sampleSweep({
+      id: "sweep-2",
+      name: "Gannet B3, scrambler on, horizontal, cable routed along the gunwale",
+      traces: [
+        inventedTrace("Trace 1", 37),
+        { ...inventedTrace("Trace 2", 31), detector: "quasi-peak" },
+      ],
+      masks: [
+        { mask: shippedMask("cispr-32-radiated-class-b-3m"), revision: 2 },
+        { mask: shippedMask("iec-60945-radiated-3m"), revision: 1 },
+      ],
+    }),
+  ];
+  return {
+    version: 2,
     number: "SO-2026-0007",
     title: "Gannet B3: what scrambling and spreading bought before the chamber",
     summary:
@@ -207,50 +289,9 @@ export function sampleSnapshot(change: Partial<ReportSnapshot> = {}): ReportSnap
     issuedAt: "2026-11-27T09:30:00.000Z",
     issuedBy: "Maren Holt",
     replaces: "SO-2026-0004",
-    sweeps: [
-      sampleSweep(),
-      sampleSweep({
-        id: "sweep-2",
-        name: "Gannet B3, scrambler on, horizontal, cable routed along the gunwale",
-        traces: [
-          inventedTrace("Trace 1", 37),
-          { ...inventedTrace("Trace 2", 31), detector: "quasi-peak" },
-        ],
-        masks: [
-          { mask: shippedMask("cispr-32-radiated-class-b-3m"), revision: 2 },
-          { mask: shippedMask("iec-60945-radiated-3m"), revision: 1 },
-        ],
-      }),
-    ],
-    ladder: {
-      name: "Link mitigations",
-      steps: [
-        {
-          position: 0,
-          name: "As built",
-          description: "Alternating payload, no scrambling.",
-          sweeps: ["Gannet B3, plain, vertical"],
-          againstPrevious: [],
-          againstStart: [],
-        },
-        {
-          position: 1,
-          name: "Scrambler on",
-          description: "Additive scrambler of the link switched on.",
-          sweeps: ["Gannet B3, scrambler on, vertical"],
-          againstPrevious: [spread],
-          againstStart: [spread],
-        },
-        {
-          position: 2,
-          name: "Clamp at the bulkhead",
-          description: "",
-          sweeps: ["Gannet B3, clamp, vertical"],
-          againstPrevious: [REFUSED],
-          againstStart: [REFUSED],
-        },
-      ],
-    },
+    sweeps,
+    ...combineByMask(sweeps),
+    ladder: sampleLadder(),
     ...change,
   };
 }

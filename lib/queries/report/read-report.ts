@@ -4,6 +4,8 @@ import { inTeam } from "@/db/client";
 import { builds, ladders, programs, reports, reportSweeps, sweeps, users } from "@/db/schema";
 import { isAllowed, type Context } from "@/lib/auth/context";
 import { requirePermission } from "@/lib/commands/run";
+import { reportLines } from "@/lib/reports/report-lines";
+import { upgradeSnapshot } from "@/lib/reports/upgrade-snapshot";
 import { isId } from "../is-id";
 
 const issuer = alias(users, "issuer");
@@ -71,7 +73,8 @@ export async function readReport(ctx: Context, reportId: string) {
       )
       .where(and(eq(reportSweeps.teamId, ctx.teamId), eq(reportSweeps.reportId, reportId)))
       .orderBy(asc(reportSweeps.position));
-    return { ...report, sweeps: chosen };
+    const said = report.snapshot ? reportLines(upgradeSnapshot(report.snapshot)) : null;
+    return { ...report, sweeps: chosen, said };
   });
 }
 

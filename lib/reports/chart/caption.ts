@@ -1,7 +1,7 @@
 import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { shorten } from "../printable";
 import { HOLD_LABELS } from "../report-labels";
-import type { SnapshotSweep } from "../report-snapshot";
+import type { SnapshotSweep } from "../report-content";
 import type { DrawnTrace } from "./coast-geometry";
 
 function traceLabel({ trace }: DrawnTrace): string {

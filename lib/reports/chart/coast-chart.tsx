@@ -4,9 +4,10 @@ import { basisOf } from "@/lib/core/reading/basis";
 import type { Detector } from "@/lib/core/sweep/settings";
 import { convertLevel } from "@/lib/core/units/convert-level";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
-import type { SnapshotSweep } from "../report-snapshot";
-import { decidingLine, type Deciding } from "../summarize";
+import type { SnapshotSweep } from "../report-content";
+import type { Deciding } from "../summarize";
 import { COLOURS, TYPE } from "../style";
+import { isOfSweep, worstSuspects } from "../worst-of-combined";
 import { captionOf } from "./caption";
 import { AxisLabels, Grid, TICK } from "./axes";
 import {
@@ -43,10 +44,11 @@ function drawable(sweep: SnapshotSweep, unit: SnapshotSweep["traces"][number]["u
   });
 }
 
-/** The sweep as water under a coast: land above the mask, buoys at the five worst suspects. */
+/** The sweep as water under a coast: land above the mask, buoys at those of the five worst suspects
+ * that it shows. */
 export function CoastChart({ deciding, widthPt, heightPt, isMeasured }: CoastChartProps) {
-  const { sweep, held } = deciding;
-  const mask = held?.mask ?? null;
+  const { sweep, held, combined, point } = deciding;
+  const mask = combined?.mask ?? held?.mask ?? null;
   const unit = held?.reading.unit ?? sweep.traces[0]?.unit ?? "dB";
   const drawn = drawable(sweep, unit);
   const box = { left: 26, right: widthPt - 2, top: 11, bottom: heightPt - 14 };
@@ -57,16 +59,15 @@ export function CoastChart({ deciding, widthPt, heightPt, isMeasured }: CoastCha
         <Text style={TYPE.body}>The sweep has no levels that could be drawn.</Text>
       </View>
     );
-  const worstLine = held ? decidingLine(held) : null;
   const scans = drawn.filter(({ trace }) => trace.kind === "scan");
-  const main = scans.find(({ index }) => index === worstLine?.worst?.traceIndex) ?? scans[0];
+  const main = scans.find(({ index }) => index === point?.traceIndex) ?? scans[0];
   const spots = drawn.filter(({ trace }) => trace.kind === "spots");
   const lines = mask?.lines ?? [];
   const land = landPath(frame, lines);
   // Only where the trace has the line's own detector does it run aground.
   const decided = lines.filter((l) => main && basisOf(main.trace, l.detector) === "like-for-like");
   const agroundLand = landPath(frame, decided);
-  const buoys = placeBuoys(frame, held?.reading.suspects.slice(0, 5) ?? []);
+  const buoys = placeBuoys(frame, worstSuspects(deciding).filter(isOfSweep(deciding)));
   const labels = placeLineNames(frame, lines);
   const frameRect = {
     x: frame.left,

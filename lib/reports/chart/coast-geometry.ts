@@ -2,7 +2,7 @@ import { maskPolyline, type PolylinePoint } from "@/lib/core/mask/polyline";
 import type { Mask, MaskLine } from "@/lib/core/mask/mask";
 import type { Suspect } from "@/lib/core/reading/reading";
 import { shorten } from "../printable";
-import type { SnapshotTrace } from "../report-snapshot";
+import type { SnapshotTrace } from "../report-content";
 
 export interface Frame {
   left: number;

@@ -1,13 +1,14 @@
 import type { ReactNode } from "react";
 import { Page, Text, View } from "@react-pdf/renderer";
 import { Words } from "./words";
-import type { ReportSnapshot, ReportState } from "../report-snapshot";
+import type { ReportContent } from "../report-content";
+import type { ReportState } from "../report-snapshot";
 import { DEFERRAL, NOT_STATED } from "../report-labels";
 import { formatInstant } from "../report-text";
 import { COLOURS, PAGE_MARGIN_PT, PAPER_SIZES, TYPE } from "../style";
 
 interface Framed {
-  snapshot: ReportSnapshot;
+  snapshot: Pick<ReportContent, "number" | "paper" | "issuedAt" | "issuedBy">;
   state: ReportState;
 }
 

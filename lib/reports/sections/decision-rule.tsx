@@ -1,21 +1,18 @@
-import { Label, Paragraph, SectionTitle } from "../parts/blocks";
+import { Paragraph, SectionTitle } from "../parts/blocks";
 import { StandingLabel } from "../parts/standing-label";
 import { Table } from "../parts/table";
-import type { ReportSnapshot } from "../report-snapshot";
-import { stateValue } from "../report-text";
+import type { ReportContent } from "../report-content";
+import { Uncertainty } from "./uncertainty";
 
 /** How a margin becomes a standing, and what is known of the uncertainty. */
-export function DecisionRule({ snapshot }: { snapshot: ReportSnapshot }) {
-  const benches = new Map(
-    snapshot.sweeps.map(({ bench }) => [`${bench.name} ${bench.guardDb}`, bench]),
-  );
+export function DecisionRule({ snapshot }: { snapshot: ReportContent }) {
   return (
     <>
       <SectionTitle>Decision rule and uncertainty</SectionTitle>
       <Paragraph>
         Margin is limit minus level in dB: a positive margin lies under the mask. The guard is the
-        margin that the bench keeps free. Where segments of a mask meet or overlap, the lower limit
-        applies.
+        margin that the bench keeps free for its uncertainty. Where segments of a mask meet or
+        overlap, the lower limit applies.
       </Paragraph>
       <Table
         columns={[
@@ -41,19 +38,7 @@ export function DecisionRule({ snapshot }: { snapshot: ReportSnapshot }) {
           ],
         ]}
       />
-      <Label>Guard and uncertainty of each bench</Label>
-      <Table
-        columns={[
-          { title: "Bench", share: 2, longest: 30 },
-          { title: "Guard", share: 1, kind: "number" },
-          { title: "Uncertainty", share: 3 },
-        ]}
-        rows={[...benches.values()].map((bench) => [
-          bench.name,
-          stateValue(bench.guardDb, "dB"),
-          "No uncertainty budget stated for this bench.",
-        ])}
-      />
+      <Uncertainty content={snapshot} />
     </>
   );
 }

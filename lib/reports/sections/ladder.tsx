@@ -1,115 +1,54 @@
-import { Text, View } from "@react-pdf/renderer";
-import type { SweepDelta } from "@/lib/core/delta/delta";
-import { formatDelta, formatMargin } from "@/lib/core/units/format";
-import {
-  DoubtLine,
-  Facts,
-  Label,
-  Paragraph,
-  SectionTitle,
-  SubTitle,
-  Warning,
-} from "../parts/blocks";
-import { StandingMark } from "../parts/marks";
-import { Change } from "../parts/standing-label";
-import { Table } from "../parts/table";
-import type { ReportSnapshot, SnapshotStep } from "../report-snapshot";
-import type { MarginChange } from "@/lib/core/delta/delta";
-import type { Standing } from "@/lib/core/reading/reading";
-import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
-import { TYPE } from "../style";
+import { STEP_STATE_LABELS } from "@/lib/core/delta/ladder-order";
+import { STANDING_LABELS } from "@/lib/core/reading/reading";
+import { formatFrequency, formatMargin } from "@/lib/core/units/format";
+import { Paragraph, SectionTitle, SubTitle } from "../parts/blocks";
+import type { ReportContent, SnapshotStep } from "../report-content";
+import { joinWords } from "../report-text";
+import { Delta } from "./delta";
 
-function Stood({ marginDb, standing }: { marginDb: number | null; standing: Standing }) {
-  return (
-    <View style={{ flexDirection: "row", alignItems: "center", gap: 4 }}>
-      <StandingMark standing={standing} sizePt={7.5} />
-      <Text style={TYPE.number}>{formatMargin(marginDb)}</Text>
-    </View>
-  );
+/** What the step is held against, whether it stayed, and whether it is on record. */
+function placeSentence({ state, base, isBranch, isOnLine, onRecord }: SnapshotStep): string {
+  const held = base
+    ? `Held against step ${base.position} · ${base.name}${isBranch ? ", from which it branches" : ""}.`
+    : "The start of the ladder.";
+  const line = state === "kept" && !isOnLine ? ", left out of the product by a later branch" : "";
+  const kept = base ? ` State: ${STEP_STATE_LABELS[state]}${line}.` : "";
+  const record =
+    onRecord === null ? "" : onRecord ? " Its sweeps are on record." : " Not on record: a try.";
+  return `${held}${kept}${record}`;
 }
 
-function Margins({ margins }: { margins: readonly MarginChange[] }) {
-  if (margins.length === 0) return <Paragraph soft>No mask line holds for both sweeps.</Paragraph>;
-  return (
-    <Table
-      columns={[
-        { title: "Mask", share: 2.4, longest: 30 },
-        { title: "Line", share: 1.4, longest: 18 },
-        { title: "Before", share: 1.3, align: "right" },
-        { title: "After", share: 1.3, align: "right" },
-        { title: "Change of margin", share: 1.3, align: "right" },
-      ]}
-      rows={margins.map((margin) => [
-        margin.maskTitle,
-        margin.lineName,
-        <Stood key="b" marginDb={margin.beforeDb} standing={margin.beforeStanding} />,
-        <Stood key="a" marginDb={margin.afterDb} standing={margin.afterStanding} />,
-        <Change key="c" changeDb={margin.changeDb} />,
-      ])}
-    />
-  );
-}
-
-function Delta({ title, delta }: { title: string; delta: SweepDelta }) {
-  const { changes, mismatches, doubts } = delta;
-  return (
-    <>
-      <Label>{title}</Label>
-      <Paragraph soft>{`${delta.afterName}, before: ${delta.beforeName}`}</Paragraph>
-      {mismatches.map(({ field, text }) => (
-        <Warning key={field}>
-          {`${changes ? "Accepted although it differs" : "Not comparable"}: ${text}`}
-        </Warning>
-      ))}
-      {changes ? (
-        <>
-          <Paragraph>{changes.sentence}</Paragraph>
-          <Facts
-            facts={[
-              { label: "Taken from", value: `${DETECTOR_LABELS[changes.detector]} traces` },
-              { label: "Highest level", value: formatDelta(changes.peakDb), kind: "number" },
-              { label: "Floor", value: formatDelta(changes.floorDb), kind: "number" },
-              {
-                label: changes.bandPowerIsPower ? "Band power" : "Band power, comparative sum",
-                value: formatDelta(changes.bandPowerDb),
-                kind: "number",
-              },
-            ]}
-          />
-          <Margins margins={changes.margins} />
-          {changes.margins.map(({ note, maskTitle, lineName }, i) =>
-            note === null ? null : (
-              <DoubtLine key={i}>{`${maskTitle}, ${lineName}: ${note}`}</DoubtLine>
-            ),
-          )}
-        </>
-      ) : null}
-      {doubts.map((doubt) => (
-        <DoubtLine key={doubt}>{doubt}</DoubtLine>
-      ))}
-    </>
-  );
+function standingSentence({ worst }: SnapshotStep): string | null {
+  if (!worst) return null;
+  const memory = worst.provenance === "from memory" ? ", from memory, not confirmed" : "";
+  return `Stands ${STANDING_LABELS[worst.standing]} with ${formatMargin(worst.marginDb)} at ${formatFrequency(worst.marginAtHz)} under ${worst.maskTitle}${memory}, ${worst.lineName}.`;
 }
 
 function Step({ step }: { step: SnapshotStep }) {
-  const { againstPrevious, againstStart } = step;
-  const same = JSON.stringify(againstPrevious) === JSON.stringify(againstStart);
-  const previous =
-    same && step.position === 1 ? "Against step 0" : `Against step ${step.position - 1}`;
+  const { againstPrevious, againstStart, base, unpaired } = step;
+  const isStart = base?.position === 0;
+  const standing = standingSentence(step);
   return (
     <>
-      <SubTitle aheadPt={116}>{`Step ${step.position} · ${step.name}`}</SubTitle>
+      <SubTitle aheadPt={116}>
+        {`Step ${step.position} · ${step.name}${step.state === "dropped" ? " (dropped)" : ""}`}
+      </SubTitle>
       {step.description === "" ? null : <Paragraph>{step.description}</Paragraph>}
+      <Paragraph soft>{placeSentence(step)}</Paragraph>
+      {standing === null ? null : <Paragraph>{standing}</Paragraph>}
       <Paragraph soft>
         {step.sweeps.length === 0 ? "No sweep in this step." : `Sweeps: ${step.sweeps.join(", ")}.`}
       </Paragraph>
-      {step.position > 0 && againstPrevious.length === 0 ? (
-        <Paragraph>No sweep of the step before can be set against it.</Paragraph>
+      {base && againstPrevious.length === 0 ? (
+        <Paragraph>{`No sweep of step ${base.position} can be set against it.`}</Paragraph>
+      ) : null}
+      {base && againstPrevious.length > 0 && unpaired.length > 0 ? (
+        <Paragraph>{`Without a counterpart in step ${base.position}: ${joinWords(unpaired)}.`}</Paragraph>
       ) : null}
       {againstPrevious.map((delta, i) => (
-        <Delta key={i} title={previous} delta={delta} />
+        <Delta key={i} title={`Against step ${base?.position ?? 0}`} delta={delta} />
       ))}
-      {same && step.position === 1
+      {isStart
         ? null
         : againstStart.map((delta, i) => <Delta key={i} title="Against step 0" delta={delta} />)}
     </>
@@ -117,14 +56,15 @@ function Step({ step }: { step: SnapshotStep }) {
 }
 
 /** What each step changed, in full. */
-export function Ladder({ ladder }: { ladder: ReportSnapshot["ladder"] }) {
+export function Ladder({ ladder }: { ladder: ReportContent["ladder"] }) {
   if (!ladder) return null;
   return (
     <>
       <SectionTitle>{`Ladder · ${ladder.name}`}</SectionTitle>
       <Paragraph soft>
         Every change is after minus before. A positive change of margin is more room under the mask;
-        a negative change of level is a lower level. No repeatability is stated for these deltas.
+        a negative change of level is a lower level. ± is half of the 95 % interval from repeated
+        sweeps; without repeats nothing is known of it.
       </Paragraph>
       {ladder.steps.map((step) => (
         <Step key={step.position} step={step} />

@@ -5,20 +5,14 @@ import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 import { Facts, Paragraph, SectionTitle, SubTitle, Warning } from "../parts/blocks";
 import { Table } from "../parts/table";
 import { PORT_LABELS, PROVENANCE_LABELS } from "../report-labels";
-import type { ReportSnapshot } from "../report-snapshot";
+import { markOfMask } from "../mask-mark";
+import type { ReportContent, SnapshotMask } from "../report-content";
 import { stateFrequency, stateValue } from "../report-text";
 
-interface HeldMask {
-  mask: Mask;
-  revision: number;
-}
-
-function distinctMasks(snapshot: ReportSnapshot): HeldMask[] {
-  const held = snapshot.sweeps.flatMap((sweep) =>
-    sweep.readings.map(({ mask, maskRevision }) => ({ mask, revision: maskRevision })),
-  );
-  const key = ({ mask, revision }: HeldMask) => `${mask.key} ${mask.title} ${revision}`;
-  return [...new Map(held.map((one) => [key(one), one])).values()];
+/** Every mask that a sweep was held against, also those with which it could not be compared. */
+function distinctMasks(content: ReportContent): SnapshotMask[] {
+  const held = content.sweeps.flatMap((sweep) => sweep.readings);
+  return [...new Map(held.map((one) => [one.maskRevisionId, one])).values()];
 }
 
 function limitText(segment: MaskSegment, mask: Mask): string {
@@ -40,14 +34,18 @@ function segmentRows(mask: Mask, line: MaskLine) {
   ]);
 }
 
-function MaskBlock({ mask, revision }: HeldMask) {
+function MaskBlock({ mask, maskRevision, confirmation }: SnapshotMask) {
+  const isUnconfirmed = mask.provenance === "from memory" && !confirmation;
   return (
     <>
-      <SubTitle aheadPt={96}>{`${mask.title} · revision ${revision}`}</SubTitle>
-      {mask.provenance === "from memory" ? (
+      <SubTitle aheadPt={96}>{`${mask.title} · revision ${maskRevision}`}</SubTitle>
+      {confirmation ? (
+        <Paragraph>{`Limits ${markOfMask(mask.provenance, confirmation) ?? ""}.`}</Paragraph>
+      ) : null}
+      {isUnconfirmed ? (
         <Warning>
-          FROM MEMORY: this mask was written down from memory and not read from the document.
-          Confirm it against your own copy before anything rests on it.
+          FROM MEMORY, not confirmed: this mask was written down from memory and not read from the
+          document. Confirm it against your own copy before anything rests on it.
         </Warning>
       ) : null}
       <Facts
@@ -57,8 +55,8 @@ function MaskBlock({ mask, revision }: HeldMask) {
           { label: "Edition", value: mask.edition || "not stated" },
           {
             label: "Provenance",
-            value: PROVENANCE_LABELS[mask.provenance],
-            warn: mask.provenance === "from memory",
+            value: confirmation ? "confirmed by the team" : PROVENANCE_LABELS[mask.provenance],
+            warn: isUnconfirmed,
           },
           { label: "Port", value: PORT_LABELS[mask.port] },
           { label: "Distance", value: stateValue(mask.distanceM, "m"), kind: "number" },
@@ -82,7 +80,7 @@ function MaskBlock({ mask, revision }: HeldMask) {
 }
 
 /** Each mask revision that a sweep was held against, with its source. */
-export function Masks({ snapshot }: { snapshot: ReportSnapshot }) {
+export function Masks({ snapshot }: { snapshot: ReportContent }) {
   const masks = distinctMasks(snapshot);
   return (
     <>

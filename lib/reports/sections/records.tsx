@@ -4,12 +4,13 @@ import { Words } from "../parts/words";
 import { Facts, Paragraph, SectionTitle } from "../parts/blocks";
 import { Table } from "../parts/table";
 import { NOT_STATED } from "../report-labels";
-import type { ReportSnapshot, ReportState } from "../report-snapshot";
+import type { ReportContent } from "../report-content";
+import type { ReportState } from "../report-snapshot";
 import { formatInstant } from "../report-text";
 import { COLOURS, TYPE } from "../style";
 
 interface RecordProps {
-  snapshot: ReportSnapshot;
+  snapshot: ReportContent;
   state: ReportState;
 }
 

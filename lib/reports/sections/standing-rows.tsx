@@ -3,9 +3,10 @@ import { Words } from "../parts/words";
 import { formatFrequency, formatLevel, formatMargin } from "@/lib/core/units/format";
 import { Label } from "../parts/blocks";
 import { StandingLabel } from "../parts/standing-label";
-import { shorten } from "../printable";
+import { shorten, shortenMiddle } from "../printable";
 import { BASIS_LABELS } from "../report-labels";
-import { countOf } from "../report-text";
+import type { SnapshotNotHeld } from "../report-content";
+import { countOf, formatCoverage, joinWords } from "../report-text";
 import type { LineSummary } from "../summarize";
 import { COLOURS, STANDING_COLOURS, TYPE } from "../style";
 
@@ -13,10 +14,12 @@ import { COLOURS, STANDING_COLOURS, TYPE } from "../style";
 function explain(row: LineSummary): string {
   const parts: string[] = [];
   if (row.worst) {
-    const { basis, sweep } = row.worst;
-    parts.push(`${BASIS_LABELS[basis]}, ${shorten(sweep, 44)}`);
-    if (row.standingSweep !== sweep) parts.push(`standing from ${shorten(row.standingSweep, 44)}`);
+    const { basis, decidedBy } = row.worst;
+    const verb = row.standing === "undecided" ? "level of" : "decided by";
+    parts.push(`${BASIS_LABELS[basis]}, ${verb} ${shortenMiddle(decidedBy, 52)}`);
   }
+  if (row.coverage < 1 && !row.explanation?.includes("%"))
+    parts.push(`${formatCoverage(row.coverage)} swept`);
   if (row.explanation !== null) parts.push(row.explanation);
   return parts.join(" · ");
 }
@@ -40,7 +43,15 @@ function Row({ row }: { row: LineSummary }) {
         <Words
           style={TYPE.strong}
           longest={40}
-        >{`${shorten(row.maskTitle, 60)} (revision ${row.maskRevision}${row.fromMemory ? ", from memory" : ""}) · ${shorten(row.lineName, 40)}`}</Words>
+        >{`${shorten(row.maskTitle, 60)} (revision ${row.maskRevision}) · ${shorten(row.lineName, 40)}`}</Words>
+        {row.mark === null ? null : (
+          <Words
+            style={{ ...TYPE.small, color: row.isConfirmed ? COLOURS.inkSoft : COLOURS.shoal }}
+            longest={50}
+          >
+            {shorten(row.mark, 130)}
+          </Words>
+        )}
         <Words style={{ ...TYPE.small, color: COLOURS.inkSoft }} longest={50}>
           {explain(row)}
         </Words>
@@ -61,12 +72,13 @@ function Row({ row }: { row: LineSummary }) {
 
 interface StandingRowsProps {
   rows: readonly LineSummary[];
+  notHeld: readonly SnapshotNotHeld[];
   shown: number;
   sweepCount: number;
 }
 
 /** Standing and lowest margin of each mask line over the product sweeps of the report. */
-export function StandingRows({ rows, shown, sweepCount }: StandingRowsProps) {
+export function StandingRows({ rows, notHeld, shown, sweepCount }: StandingRowsProps) {
   const more = rows.length - shown;
   return (
     <View>
@@ -85,6 +97,11 @@ export function StandingRows({ rows, shown, sweepCount }: StandingRowsProps) {
         <Text style={{ ...TYPE.small, color: COLOURS.inkSoft }}>
           {`${countOf(more, "further mask line")} on the following pages.`}
         </Text>
+      ) : null}
+      {notHeld.length > 0 ? (
+        <Words style={{ ...TYPE.small, color: COLOURS.shoal, marginTop: 2 }} longest={60}>
+          {`Not held against: ${shorten(joinWords(notHeld.map(({ title }) => title)), 200)}. No margin is known there.`}
+        </Words>
       ) : null}
     </View>
   );

@@ -2,20 +2,19 @@ import { Text, View } from "@react-pdf/renderer";
 import { formatMargin } from "@/lib/core/units/format";
 import { Words } from "../parts/words";
 import { CoastChart } from "../chart/coast-chart";
-import { Label } from "../parts/blocks";
-import { ShoalMark } from "../parts/marks";
 import { shorten } from "../printable";
 import { DEFERRAL, NOT_STATED } from "../report-labels";
-import type { ReportSnapshot } from "../report-snapshot";
-import { countOf, formatInstant, joinWords } from "../report-text";
-import { decidingReading, productSweeps, rankDoubts, summarizeLines } from "../summarize";
+import type { ReportContent } from "../report-content";
+import { formatInstant, joinWords } from "../report-text";
+import { decidingReading, productSweeps, summarizeLines } from "../summarize";
 import { COLOURS, PAPER_SIZES, TYPE } from "../style";
 import type { SummaryFit } from "../summary-fit";
+import { SummaryDoubts } from "./summary-doubts";
 import { StandingRows } from "./standing-rows";
 import { LadderRows } from "./ladder-rows";
 import { WorstSuspects } from "./worst-suspects";
 
-function measuredOn(snapshot: ReportSnapshot): string {
+function measuredOn(snapshot: ReportContent): string {
   const dates = productSweeps(snapshot).map((sweep) => sweep.measuredOn ?? NOT_STATED);
   const known = [...new Set(dates.filter((date) => date !== NOT_STATED))].sort();
   if (known.length === 0) return NOT_STATED;
@@ -25,7 +24,7 @@ function measuredOn(snapshot: ReportSnapshot): string {
 }
 
 interface SummaryProps {
-  snapshot: ReportSnapshot;
+  snapshot: ReportContent;
   fit: SummaryFit;
 }
 
@@ -79,34 +78,6 @@ function Masthead({ snapshot, fit }: SummaryProps) {
   );
 }
 
-function Doubts({ snapshot, fit }: SummaryProps) {
-  const doubts = rankDoubts(snapshot);
-  const more = doubts.length - fit.doubts;
-  return (
-    <View>
-      <Label aheadPt={0}>{`Doubts (${doubts.length})`}</Label>
-      {doubts.length === 0 ? (
-        <Text style={TYPE.small}>No doubt was found in what the sweeps state.</Text>
-      ) : null}
-      {doubts.slice(0, fit.doubts).map((doubt) => (
-        <View key={doubt.text} style={{ flexDirection: "row", gap: 4, marginBottom: 2.5 }}>
-          <ShoalMark />
-          <View style={{ flexBasis: 0, flexGrow: 1 }}>
-            <Words style={TYPE.small} longest={28}>
-              {shorten(doubt.text, 200)}
-            </Words>
-          </View>
-        </View>
-      ))}
-      {more > 0 ? (
-        <Text style={{ ...TYPE.small, color: COLOURS.inkSoft }}>
-          {`${countOf(more, "more doubt")} with the readings on the following pages.`}
-        </Text>
-      ) : null}
-    </View>
-  );
-}
-
 /** The page that a lab or a manager reads in a minute. */
 export function SummaryPage({
   snapshot,
@@ -118,7 +89,12 @@ export function SummaryPage({
   return (
     <View>
       <Masthead snapshot={snapshot} fit={fit} />
-      <StandingRows rows={rows} shown={fit.rows} sweepCount={productSweeps(snapshot).length} />
+      <StandingRows
+        rows={rows}
+        notHeld={snapshot.notHeld}
+        shown={fit.rows}
+        sweepCount={productSweeps(snapshot).length}
+      />
       {deciding ? (
         <View style={{ marginTop: 8 }}>
           <CoastChart
@@ -131,10 +107,10 @@ export function SummaryPage({
       ) : null}
       <View style={{ flexDirection: "row", gap: 16 }}>
         <View style={{ flexBasis: 0, flexGrow: 1.5 }}>
-          <WorstSuspects deciding={deciding} />
+          <WorstSuspects content={snapshot} deciding={deciding} fit={fit} />
         </View>
         <View style={{ flexBasis: 0, flexGrow: 1 }}>
-          <Doubts snapshot={snapshot} fit={fit} />
+          <SummaryDoubts content={snapshot} fit={fit} />
         </View>
       </View>
       <LadderRows ladder={snapshot.ladder} fit={fit} />

@@ -1,5 +1,6 @@
 import type { LinkSettings } from "@/lib/core/link/link-settings";
 import { formatFrequency } from "@/lib/core/units/format";
+import { shorten } from "../printable";
 import type { Fact } from "../parts/blocks";
 import {
   CODING_LABELS,
@@ -10,8 +11,18 @@ import {
   SCRAMBLER_LABELS,
   SPREAD_DIRECTION_LABELS,
 } from "../report-labels";
-import type { SnapshotSweep } from "../report-snapshot";
+import type { SnapshotSweep } from "../report-content";
 import { formatBandwidth, formatInstant, stateFrequency, stateValue } from "../report-text";
+
+const listText = (names: readonly string[]) =>
+  names.length === 0 ? "none known" : names.map((name) => shorten(name, 60)).join("; ");
+
+/** Whether the build's trend counts the sweep; a report of version 1 did not know. */
+function recordText({ onRecord, purpose }: SnapshotSweep): string {
+  if (onRecord === null) return NOT_STATED;
+  if (purpose !== "product") return "no product sweep";
+  return onRecord ? "yes, it counts for the trend" : "no, a try";
+}
 
 export function sweepFacts(sweep: SnapshotSweep): Fact[] {
   const { bench } = sweep;
@@ -23,6 +34,9 @@ export function sweepFacts(sweep: SnapshotSweep): Fact[] {
     { label: "Bench", value: bench.name },
     { label: "Site", value: bench.site || NOT_STATED },
     { label: "Instrument", value: bench.instrument || NOT_STATED },
+    { label: "On record", value: recordText(sweep) },
+    { label: "Ambient sweeps", value: listText(sweep.ambientSweeps) },
+    { label: "Floor sweeps", value: listText(sweep.floorSweeps) },
     { label: "Impedance", value: `${bench.impedanceOhm} Ω`, kind: "number" },
   ];
 }

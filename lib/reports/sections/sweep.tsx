@@ -2,65 +2,13 @@ import { View } from "@react-pdf/renderer";
 import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { formatFrequency, formatLevel } from "@/lib/core/units/format";
 import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
-import { Facts, Label, Paragraph, SectionTitle, Warning } from "../parts/blocks";
+import { Facts, Label, Paragraph, SectionTitle } from "../parts/blocks";
 import { Table } from "../parts/table";
-import { HOLD_LABELS, NOT_STATED, TRANSDUCER_LABELS } from "../report-labels";
-import type { SnapshotSweep } from "../report-snapshot";
+import { HOLD_LABELS } from "../report-labels";
+import type { SnapshotSweep } from "../report-content";
 import { linkFacts, settingFacts, sweepFacts } from "./sweep-facts";
 import { ReadingBlock } from "./reading";
-
-type Transducer = SnapshotSweep["bench"]["transducers"][number];
-
-function isOverdue({ dueOn }: Transducer, day: string): boolean {
-  return dueOn !== null && dueOn.slice(0, 10) < day;
-}
-
-function SignalPath({ sweep, issuedAt }: { sweep: SnapshotSweep; issuedAt: string }) {
-  const { transducers, signalPathRevision } = sweep.bench;
-  const day = (sweep.measuredOn ?? issuedAt).slice(0, 10);
-  const dayName = sweep.measuredOn === null ? "the date of issue" : "the date of the sweep";
-  const overdue = transducers.filter((transducer) => isOverdue(transducer, day));
-  return (
-    <>
-      <Label>{`Signal path, revision ${signalPathRevision}, from the field to the instrument`}</Label>
-      {sweep.corrected ? (
-        <Paragraph soft>
-          The instrument had applied the transducer factors itself; the signal path passed the
-          levels through.
-        </Paragraph>
-      ) : null}
-      {overdue.length > 0 ? (
-        <Warning>{`Calibration overdue on ${dayName}: ${overdue.map(({ name }) => name).join(", ")}.`}</Warning>
-      ) : null}
-      {transducers.length === 0 ? (
-        <Paragraph soft>The signal path holds no transducers: no factor was applied.</Paragraph>
-      ) : (
-        <Table
-          columns={[
-            { title: "No.", share: 0.4, kind: "number" },
-            { title: "Transducer", share: 3, longest: 34 },
-            { title: "Kind", share: 1.5 },
-            { title: "Calibrated", share: 1.2, kind: "number" },
-            { title: "Due", share: 1.2, kind: "number" },
-            { title: "State", share: 1.1 },
-          ]}
-          rows={transducers.map((transducer, i) => [
-            String(i + 1),
-            transducer.name,
-            TRANSDUCER_LABELS[transducer.kind],
-            transducer.calibratedOn ?? NOT_STATED,
-            transducer.dueOn ?? NOT_STATED,
-            transducer.dueOn === null
-              ? NOT_STATED
-              : isOverdue(transducer, day)
-                ? "OVERDUE"
-                : "in date",
-          ])}
-        />
-      )}
-    </>
-  );
-}
+import { SignalPath } from "./signal-path";
 
 function Traces({ sweep }: { sweep: SnapshotSweep }) {
   return (

@@ -2,27 +2,36 @@ import { Text, View } from "@react-pdf/renderer";
 import { formatFrequency, formatLevel, formatMargin } from "@/lib/core/units/format";
 import { Label } from "../parts/blocks";
 import { Table } from "../parts/table";
+import { shorten, shortenMiddle } from "../printable";
 import { BASIS_LABELS } from "../report-labels";
-import { shorten } from "../printable";
-import type { Deciding } from "../summarize";
+import type { ReportContent } from "../report-content";
 import { COLOURS, TYPE } from "../style";
+import type { Deciding } from "../summarize";
+import { nameWithPosition, sweepOfPart } from "../summarize";
+import type { SummaryFit } from "../summary-fit";
+import { worstSuspects } from "../worst-of-combined";
 
-const SHOWN_SUSPECTS = 5;
+interface WorstSuspectsProps {
+  content: ReportContent;
+  deciding: Deciding | null;
+  fit: SummaryFit;
+}
 
-/** The suspects that the chart marks with buoys. */
-export function WorstSuspects({ deciding }: { deciding: Deciding | null }) {
-  const held = deciding?.held ?? null;
-  const suspects = held?.reading.suspects ?? [];
+/** The suspects that the chart marks with buoys, and those of the other sweeps among the worst. */
+export function WorstSuspects({ content, deciding, fit }: WorstSuspectsProps) {
+  const combined = deciding?.combined ?? null;
+  const all = combined?.reading.suspects ?? [];
+  const shown = deciding ? worstSuspects(deciding) : [];
   const title =
-    suspects.length > SHOWN_SUSPECTS
-      ? `Five worst of ${suspects.length} suspects`
-      : "Worst suspects";
+    all.length > shown.length ? `Five worst of ${all.length} suspects` : "Worst suspects";
   return (
     <View>
       <Label aheadPt={0}>{title}</Label>
-      {suspects.length === 0 || !held ? (
+      {!combined || shown.length === 0 ? (
         <Text style={{ ...TYPE.small, color: COLOURS.inkSoft }}>
-          {held ? "No peak within reach of the mask stands out." : "No reading, so no suspects."}
+          {combined
+            ? "No peak within reach of the mask stands out."
+            : "No reading, so no suspects."}
         </Text>
       ) : (
         <Table
@@ -31,20 +40,36 @@ export function WorstSuspects({ deciding }: { deciding: Deciding | null }) {
             { title: "Frequency", share: 1.3, kind: "number", align: "right" },
             { title: "Level", share: 1.5, kind: "number", align: "right" },
             { title: "Margin", share: 1.1, kind: "number", align: "right" },
-            { title: "Against", share: 2.3, kind: "small", longest: 18 },
+            { title: "Against", share: 2.5, kind: "small", longest: 18 },
           ]}
-          rows={suspects
-            .slice(0, SHOWN_SUSPECTS)
-            .map((suspect) => [
+          rows={shown.map((suspect) => {
+            const sweep = sweepOfPart(content, combined, suspect.partIndex);
+            const ambient = combined.ambient.find(({ number }) => number === suspect.number);
+            return [
               String(suspect.number),
               formatFrequency(
                 suspect.frequencyHz,
-                deciding?.sweep.traces[suspect.traceIndex]?.stepHz ?? undefined,
+                sweep?.traces[suspect.traceIndex]?.stepHz ?? undefined,
               ),
-              formatLevel(suspect.levelDb, held.reading.unit),
+              formatLevel(suspect.levelDb, combined.reading.unit),
               formatMargin(suspect.marginDb),
-              `${shorten(suspect.lineName ?? "no line", 24)}, ${BASIS_LABELS[suspect.basis]}`,
-            ])}
+              <View key="against">
+                <Text style={TYPE.small}>
+                  {`${shorten(suspect.lineName ?? "no line", 24)}, ${BASIS_LABELS[suspect.basis]}`}
+                </Text>
+                {fit.suspectSweeps && combined.sweepIds.length > 1 && sweep ? (
+                  <Text style={{ ...TYPE.small, fontSize: 6.6, color: COLOURS.inkSoft }}>
+                    {shortenMiddle(nameWithPosition(sweep), 30)}
+                  </Text>
+                ) : null}
+                {ambient?.isLikelyAmbient ? (
+                  <Text style={{ ...TYPE.small, fontWeight: 600, color: COLOURS.shoal }}>
+                    likely ambient
+                  </Text>
+                ) : null}
+              </View>,
+            ];
+          })}
         />
       )}
     </View>

@@ -66,9 +66,12 @@ export default async function ReportPage(props: { params: Promise<{ reportId: st
           SHA-256 of the content <span className="font-mono break-all">{report.sha256}</span>
         </p>
       ) : null}
-      {report.snapshot ? (
-        <Section title="What it says" lead="As it was when it was issued.">
-          <ReportLines sweeps={report.snapshot.sweeps} />
+      {report.said ? (
+        <Section
+          title="What it says"
+          lead="Its product sweeps together, as it was when it was issued."
+        >
+          <ReportLines {...report.said} />
         </Section>
       ) : (
         <Section title="Sweeps">

@@ -6,7 +6,7 @@ import { writeSweepCsv } from "../spectra/write-csv";
 export const COMB_SOURCE = "Comb source, 10 MHz, upright on the table";
 export const CHECKED_BENCH: DemoBench["key"] = "below-1-ghz";
 
-export interface DemoCheck {
+interface DemoCheck {
   measuredOn: string;
   isReference: boolean;
   notes: string;

@@ -20,12 +20,12 @@ import type { DemoLadder, DemoStep } from "./demo-sweeps";
 import type { Treatment } from "./setup";
 
 /** Why somebody compares two steps although something differs. */
-export interface AcceptedReason {
+interface AcceptedReason {
   fields: MismatchField[];
   reason: string;
 }
 
-export interface SideStep extends DemoStep {
+interface SideStep extends DemoStep {
   /** Name of the step that it starts from, when that is not the last kept one. */
   branchOf?: string;
   isDropped?: boolean;

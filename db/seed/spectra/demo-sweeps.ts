@@ -54,19 +54,16 @@ function ladderOf(story: StoryLadder): DemoLadder {
     what,
   });
   const days = story.steps.map((step) => step.measuredOn);
-  const ends = [days[0] ?? "", days.at(-1) ?? ""];
-  const between = days.filter((day) => !ends.includes(day) && !NO_AMBIENT.has(day));
-  // The surroundings change from day to day: with every point when the ladder was begun and when
-  // it ended, as a quick look in between.
-  const background = DEMO_BENCHES.flatMap((bench) => [
-    ...ends.map((day) => planSweep(bench, plan(bench, `ambient ${day}`, day, { ...off, ambient }))),
-    ...between.map((day) =>
+  // The surroundings change from day to day.
+  const looked = days.filter((day) => !NO_AMBIENT.has(day));
+  const background = DEMO_BENCHES.flatMap((bench) =>
+    looked.map((day) =>
       planSweep(bench, {
         ...plan(bench, `ambient ${day}`, day, { ...off, ambient }),
         span: coarseSpan(bench),
       }),
     ),
-  ]);
+  );
   // The floor belongs to the benches, not to a build: taken once, with the first build.
   if (buildName === "G1")
     for (const bench of DEMO_BENCHES)

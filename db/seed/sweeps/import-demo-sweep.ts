@@ -19,13 +19,13 @@ const LINK_OFF: LinkSettings = {
   cable: null,
 };
 
-export interface SweepPlace {
+interface SweepPlace {
   buildId: string;
   stepId: string | null;
   benchIds: ReadonlyMap<string, string>;
 }
 
-export interface ImportedAs {
+interface ImportedAs {
   /** The file, where it is not the sweep's own. */
   csv?: string;
   /** Single-frequency readings instead of a continuous sweep. */

@@ -39,14 +39,16 @@ export function BudgetLineFields(props: BudgetLineFieldsProps) {
       <legend className="px-2 font-title text-lg">
         {place + 1}. {line.name.trim() || "New line"}
       </legend>
-      <div className="grid gap-x-4 sm:grid-cols-2 lg:grid-cols-[2fr_1fr_2fr_1fr_1fr_1.3fr]">
-        <Field
-          label="Quantity"
-          name={`${at}.name`}
-          value={line.name}
-          onChange={(event) => onChange({ name: event.target.value })}
-          error={errorOf("name")}
-        />
+      <div className="grid grid-cols-2 gap-x-4 lg:grid-cols-[2fr_1fr_2fr_1fr_1fr_1.3fr]">
+        <div className="col-span-2 lg:col-span-1">
+          <Field
+            label="Quantity"
+            name={`${at}.name`}
+            value={line.name}
+            onChange={(event) => onChange({ name: event.target.value })}
+            error={errorOf("name")}
+          />
+        </div>
         <Field label="Value in dB" {...number("value")} />
         <SelectField
           label="Distribution"
@@ -61,12 +63,15 @@ export function BudgetLineFields(props: BudgetLineFieldsProps) {
           error={errorOf("distribution")}
         />
         <Field label="Sensitivity" {...number("sensitivity")} />
-        <Field
-          label="n"
-          aria-label="Number of observations"
-          disabled={line.distribution !== "type-a"}
-          {...number("observations")}
-        />
+        {/* Only a series of observations has a number of them; the columns stay where they are. */}
+        <div className={line.distribution === "type-a" ? "" : "hidden lg:invisible lg:block"}>
+          <Field
+            label="n"
+            aria-label="Number of observations"
+            disabled={line.distribution !== "type-a"}
+            {...number("observations")}
+          />
+        </div>
         <Field
           label="Degrees of freedom"
           placeholder={line.distribution === "type-a" ? "n − 1" : "unlimited"}

@@ -88,7 +88,10 @@ export function BudgetResult({ result, reference }: BudgetResultProps) {
     <div>
       <p className="mb-2">
         <span className="font-mono text-4xl whitespace-nowrap">{expandedDb.toFixed(2)}</span>{" "}
-        <span className="text-lg">dB is the expanded uncertainty U (k = {coverageFactor}).</span>
+        <span className="text-lg">
+          dB is the expanded uncertainty U{" "}
+          <span className="whitespace-nowrap">(k = {coverageFactor}).</span>
+        </span>
       </p>
       <dl className="flex flex-wrap gap-x-8 gap-y-1">
         <Amount

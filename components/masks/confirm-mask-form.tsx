@@ -55,7 +55,6 @@ export function ConfirmMaskForm({ maskId, revision, mask, confirm }: ConfirmMask
   });
   return (
     <form onSubmit={form.onSubmit} method="post" noValidate className="max-w-3xl">
-      <ErrorNote message={form.message} />
       <CompareLines
         mask={mask}
         ticked={ticked}
@@ -109,6 +108,7 @@ export function ConfirmMaskForm({ maskId, revision, mask, confirm }: ConfirmMask
       <p id="compared-problem" className="mb-4 text-sm text-aground">
         {form.fieldErrors["isCompared"]}
       </p>
+      <ErrorNote message={form.message} />
       <div className="flex gap-2">
         <Button type="submit" disabled={form.pending}>
           Confirm as revision {revision + 1}

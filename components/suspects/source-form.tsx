@@ -44,7 +44,7 @@ export function SourceForm({ suspectId, source, toleranceHz, action }: SourceFor
         error={form.fieldErrors.toleranceHz}
       />
       <Button type="submit" look="quiet" disabled={form.pending}>
-        Keep
+        Save source and tolerance
       </Button>
     </form>
   );

@@ -24,7 +24,7 @@ export function SuspectFilterForm(props: SuspectFilterFormProps) {
       action="/suspects"
       role="search"
       aria-label="Suspects"
-      className="mb-2 grid items-start gap-x-4 sm:grid-cols-2 lg:grid-cols-[12rem_14rem_1fr_1fr_auto]"
+      className="mb-2 grid grid-cols-2 items-start gap-x-4 lg:grid-cols-[12rem_14rem_1fr_1fr_auto]"
     >
       <input type="hidden" name="program" value={programId} />
       <SelectField
@@ -54,7 +54,7 @@ export function SuspectFilterForm(props: SuspectFilterFormProps) {
         error={errors.from}
       />
       <Field label="To" name="to" placeholder="300 MHz" defaultValue={to} error={errors.to} />
-      <div className="mb-4 flex gap-2 lg:mt-7">
+      <div className="col-span-2 mb-4 flex gap-2 lg:col-span-1 lg:mt-7">
         <Button type="submit" look="quiet">
           Filter
         </Button>

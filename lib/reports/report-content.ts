@@ -156,7 +156,7 @@ export interface SnapshotSweep {
 }
 
 /** Where the product sweeps of a step stand worst, taken together. */
-export interface SnapshotStanding {
+interface SnapshotStanding {
   maskTitle: string;
   provenance: Provenance;
   lineName: string;

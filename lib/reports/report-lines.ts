@@ -3,7 +3,7 @@ import type { ReportContent } from "./report-content";
 import { summarizeLines } from "./summarize";
 
 /** What an issued report says of one mask line, for a screen. */
-export interface ReportLine {
+interface ReportLine {
   maskTitle: string;
   maskRevision: number;
   mark: string | null;

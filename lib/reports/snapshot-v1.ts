@@ -13,7 +13,7 @@ type Before<T, K extends keyof T> = Omit<T, K> & Partial<Pick<T, K>>;
 
 type PointV1 = Before<MarginPoint, "partIndex">;
 
-export interface LineReadingV1 extends Omit<LineReading, "worst" | "bands"> {
+interface LineReadingV1 extends Omit<LineReading, "worst" | "bands"> {
   worst: PointV1 | null;
   bands?: LineReading["bands"];
 }

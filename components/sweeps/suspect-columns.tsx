@@ -29,6 +29,18 @@ const levelColumn = (
   },
 });
 
+/** A few words that stay on one line, so that a row is one line high. */
+const textColumn = (
+  id: string,
+  header: string,
+  valueOf: (suspect: ShownSuspect) => string | null,
+): Column => ({
+  id,
+  header,
+  value: valueOf,
+  cell: (suspect) => <span className="whitespace-nowrap">{valueOf(suspect)}</span>,
+});
+
 /** What every table of suspects shows; numbers are those of the chart's buoys. */
 export function readingColumns(unit: LevelUnit, stepHz: number | null): Column[] {
   return [
@@ -55,15 +67,15 @@ export function readingColumns(unit: LevelUnit, stepHz: number | null): Column[]
         </span>
       ),
     },
-    { id: "line", header: "Mask line", value: (s) => s.lineName },
-    { id: "basis", header: "Basis", value: (s) => BASIS_LABELS[s.basis] },
+    textColumn("line", "Mask line", (s) => s.lineName),
+    textColumn("basis", "Basis", (s) => BASIS_LABELS[s.basis]),
   ];
 }
 
 /** What the ambient sweeps of the day say beside each suspect. */
 export function ambientColumns(unit: LevelUnit): Column[] {
   const mark = (s: ShownSuspect) =>
-    s.ambient === null ? "not compared" : s.ambient.isLikelyAmbient ? "likely ambient" : "";
+    s.ambient === null ? "not compared" : s.ambient.isLikelyAmbient ? "likely" : "";
   return [
     levelColumn("ambient", "Ambient", unit, (s) => s.ambient?.ambientDb ?? null),
     {

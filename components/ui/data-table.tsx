@@ -113,7 +113,7 @@ export function DataTable<T extends object>(props: DataTableProps<T>) {
                     <button
                       type="button"
                       onClick={header.column.getToggleSortingHandler()}
-                      className="cursor-pointer py-1 tracking-[inherit] whitespace-nowrap hover:text-ink"
+                      className={`cursor-pointer py-1 tracking-[inherit] hover:text-ink ${(columns[i]?.header.length ?? 0) > 14 ? "text-[inherit] [text-align:inherit]" : "whitespace-nowrap"}`}
                     >
                       {columns[i]?.align === "right" ? <SortMark sorted={sorted} /> : null}
                       {columns[i]?.header}

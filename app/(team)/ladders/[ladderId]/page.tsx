@@ -76,7 +76,7 @@ export default async function LadderPage(props: { params: Promise<{ ladderId: st
         <p className="text-lg">
           {ladder.steps.length < 2
             ? "A ladder tells what a step bought once there are two steps with sweeps."
-            : "No delta can be given yet: the steps below say why."}
+            : "The product as it stands cannot be compared with step 0: what follows says what each step bought against the one that it starts from, and why a delta is missing."}
         </p>
       )}
       {bought.length > 0 ? (

@@ -13,9 +13,10 @@ export function CheckTick({ label, checked, hint, error, onChange }: CheckTickPr
   const id = useId();
   return (
     <div>
-      <label className="flex items-center gap-2">
+      <label className="flex items-start gap-2">
         <input
           type="checkbox"
+          className="mt-1 size-4 shrink-0 accent-deep"
           checked={checked}
           aria-invalid={error ? true : undefined}
           aria-describedby={hint || error ? id : undefined}

@@ -78,7 +78,7 @@ export function RecomputationProgress(props: RecomputationProgressProps) {
             read. Until all are, revision {inForceRevision} counts everywhere.
           </p>
           <progress
-            className="my-1 block h-2 w-full max-w-md"
+            className="my-1 block h-2 w-full max-w-md accent-deep"
             aria-label={`Sweeps read under revision ${data.revision}`}
             max={Math.max(1, data.total)}
             value={data.done}

@@ -64,7 +64,7 @@ export function CalibrationHistory(props: CalibrationHistoryProps) {
             <p className="break-words">
               {c.laboratory || <span className="text-ink-soft">laboratory not stated</span>}
               {c.certificateNumber ? (
-                <span className="ml-2 font-mono text-sm">{c.certificateNumber}</span>
+                <span className="ml-2 inline-block font-mono text-sm">{c.certificateNumber}</span>
               ) : null}
             </p>
             <p className="text-sm break-words">

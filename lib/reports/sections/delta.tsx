@@ -70,7 +70,8 @@ function Levels({ levels }: { levels: readonly DetectorChange[] }) {
   );
 }
 
-const MOST_SUSPECTS = 30;
+/** Of each kind; a lab reads the highest, and the ladder's own page lists them all. */
+const MOST_SUSPECTS = 4;
 
 const levelText = (db: number | null) => (db === null ? "not swept" : db.toFixed(1));
 
@@ -85,15 +86,29 @@ function suspectRow(state: string, { detector, frequencyHz, ...change }: Suspect
   ];
 }
 
-/** Suspects that came, went and stayed, each with its change in one window on both sides. */
+/** The few for which `sizeOf` is largest. */
+function foremost(
+  changes: readonly SuspectChange[],
+  sizeOf: (change: SuspectChange) => number | null,
+): SuspectChange[] {
+  const size = (change: SuspectChange) => sizeOf(change) ?? Number.NEGATIVE_INFINITY;
+  return [...changes].sort((a, b) => size(b) - size(a)).slice(0, MOST_SUSPECTS);
+}
+
+/**
+ * The highest suspects that came and went and those that moved most, each with its change in one
+ * window on both sides.
+ */
 function SuspectTable({ suspects: { fresh, gone, followed } }: { suspects: SuspectChanges }) {
-  const all = [
-    ...fresh.map((one) => suspectRow("new", one)),
-    ...gone.map((one) => suspectRow("gone", one)),
-    ...followed.map((one) => suspectRow("on both sides", one)),
+  const listed = [
+    ...foremost(fresh, (one) => one.afterDb).map((one) => suspectRow("new", one)),
+    ...foremost(gone, (one) => one.beforeDb).map((one) => suspectRow("gone", one)),
+    ...foremost(followed, (one) => Math.abs(one.changeDb ?? 0)).map((one) =>
+      suspectRow("on both sides", one),
+    ),
   ];
-  if (all.length === 0) return null;
-  const more = all.length - MOST_SUSPECTS;
+  if (listed.length === 0) return null;
+  const more = fresh.length + gone.length + followed.length - listed.length;
   const title = `Suspects: ${fresh.length} new, ${gone.length} gone, ${followed.length} on both sides`;
   return (
     <>
@@ -107,11 +122,11 @@ function SuspectTable({ suspects: { fresh, gone, followed } }: { suspects: Suspe
           { title: "Level after", share: 1.1, kind: "number", align: "right" },
           { title: "Change of level", share: 1.7, align: "right" },
         ]}
-        rows={all.slice(0, MOST_SUSPECTS)}
+        rows={listed}
       />
       {more > 0 ? (
         <Text style={TYPE.small}>
-          {`${countOf(more, "further suspect")} on both sides not listed.`}
+          {`${countOf(more, "further suspect")} not listed: of each kind the highest, or those that moved most.`}
         </Text>
       ) : null}
     </>

@@ -118,6 +118,20 @@ test("masks and benches are accessible, whole and quiet", async ({ page }) => {
   expect(errors).toEqual([]);
 });
 
+test("equipment, budgets, checks and suspects are accessible, whole and quiet", async ({
+  page,
+}) => {
+  const errors = watchErrors(page);
+  await signIn(page, "engineer@saltmarsh.example");
+  await page.goto("/masks");
+  const mask = await linkTo(page, "CISPR 32 class B, 3 m");
+  await page.goto("/benches");
+  const bench = await linkTo(page, /./, "Benches");
+  await inspectAll(page, ["/suspects", "/benches/equipment", "/benches/equipment/new"]);
+  await inspectAll(page, [`${bench}/budget`, `${bench}/checks/new`, `${mask}/confirm`]);
+  expect(errors).toEqual([]);
+});
+
 test("the pages of an admin are accessible, whole and quiet", async ({ page }) => {
   const errors = watchErrors(page);
   await signIn(page, "admin@saltmarsh.example");

@@ -26,6 +26,17 @@ export function acceptedText({ reason, by, at }: Acceptance): string {
 }
 
 /**
+ * The sentence without its count of suspects, which the report gives by itself, and without its
+ * conclusion where that would be cut in the middle.
+ */
+function movedOnly(sentence: string, longest: number): string {
+  const moved = sentence.replace(/ \d+ (new )?suspects? (is|are) [^.]*\./, "");
+  if (moved.length <= longest) return moved;
+  const [before = moved] = moved.split(": ");
+  return before === moved ? moved : `${before}.`;
+}
+
+/**
  * One delta in sentences, each shortened by itself: a mismatch is always said, even one that
  * somebody accepted.
  */
@@ -35,7 +46,7 @@ export function deltaSentences(
 ): string {
   const reasons = mismatches.map(({ text }) => text).join(" ");
   if (!changes) return shorten(`Not comparable: ${reasons}`, longest);
-  const sentence = shorten(changes.sentence, longest);
+  const sentence = shorten(movedOnly(changes.sentence, longest), longest);
   if (reasons === "") return sentence;
   const who = accepted ? ` by ${accepted.by}, "${accepted.reason}"` : "";
   return `${sentence} ${shorten(`Mismatch accepted${who}: ${reasons}`, longest)}`;

@@ -112,23 +112,33 @@ export function isInPosition(tight: SweepPart, loose: SweepPart): boolean {
 }
 
 /** Share of the line's bands that was swept, between each pair of neighbouring borders. */
-function coverageByHand(line: MaskLine, speaking: readonly Swept[]): number {
+function coverageByHand(line: MaskLine, speaking: readonly Swept[], all: readonly Swept[]): number {
   const bands: [number, number][] = [];
   for (const { startHz, stopHz } of [...line.segments].sort((a, b) => a.startHz - b.startHz)) {
     const last = bands.at(-1);
     if (last && startHz <= last[1]) last[1] = Math.max(last[1], stopHz);
     else bands.push([startHz, stopHz]);
   }
+  const widthOf = (ranges: readonly [number, number][]) =>
+    ranges.reduce((sum, [a, b]) => sum + Math.max(0, Math.log10(b / a)), 0);
+  // Scanned over a hundredth of the line or more, with whatever detector.
+  const stated = new Set(
+    all.flatMap(({ trace, samples, part: { settings } }) => {
+      if (trace.kind !== "scan" || settings.port !== "radiated") return [];
+      const [first, last] = [samples[0]?.hz ?? NaN, samples.at(-1)?.hz ?? NaN];
+      const common = bands.map(([a, b]): [number, number] => [
+        Math.max(a, first),
+        Math.min(b, last),
+      ]);
+      const isMeant = widthOf(common) >= 0.01 * widthOf(bands);
+      return isMeant && settings.polarization ? [settings.polarization] : [];
+    }),
+  );
   let [whole, covered] = [0, 0];
   for (const [from, to] of bands) {
     // A trace without one sample in a band measured nothing of it.
     const here = speaking.filter((one) =>
       one.samples.some((s) => s.hz >= from && s.hz <= to && !Number.isNaN(s.db)),
-    );
-    const stated = new Set(
-      speaking.flatMap(({ part: { settings } }) =>
-        settings.port === "radiated" && settings.polarization ? [settings.polarization] : [],
-      ),
     );
     const ways =
       stated.size === 0
@@ -199,7 +209,7 @@ export function readByHand(parts: readonly SweepPart[], mask: Mask): LineByHand[
       worst: worst.marginDb === Infinity ? null : worst,
       isOver: own < 0,
       isInside,
-      coverage: coverageByHand(line, speaking),
+      coverage: coverageByHand(line, speaking, swept),
       boundsOver,
     };
   });

@@ -11,7 +11,7 @@ import {
   yOf,
   type Frame,
 } from "@/lib/reports/chart/coast-geometry";
-import { inventedTrace, shippedMask, snapshotTrace } from "../support/report-snapshot";
+import { inventedTrace, shippedMask, snapshotTrace } from "../support/report-traces";
 
 const frame: Frame = {
   left: 0,

@@ -1,12 +1,14 @@
 import { lineRanges } from "../mask/limit-at";
 import type { Mask, MaskLine } from "../mask/mask";
 import type { Polarization } from "../sweep/settings";
-import { commonRanges, coveredShare, mergeRanges } from "./coverage";
+import { commonRanges, coveredShare, mergeRanges, spansBands } from "./coverage";
 import type { FrequencyRange, LineReading, MarginPoint, Reading, Standing } from "./reading";
 
 /** A reading of one sweep; the polarization counts for radiated sweeps only. */
 export interface HeldAlone extends Pick<Reading, "lines" | "guardDb"> {
   polarization?: Polarization | null;
+  /** First and last frequency in Hz of its scans; left out: it scanned every line. */
+  scans?: readonly { firstHz: number; lastHz: number }[];
 }
 
 /** Where several sweeps together stand under one line of a mask. Hz and dB. */
@@ -43,7 +45,12 @@ function gapsOf(
         .filter((_, i) => isOwn(readings[i]?.polarization ?? null))
         .map((reading) => reading?.coverage.gaps ?? lineRanges(line)),
     );
-  const stated = [...new Set(readings.flatMap(({ polarization }) => polarization ?? []))];
+  const ranges = lineRanges(line);
+  const meant = readings.filter(
+    ({ scans }) =>
+      !scans || scans.some(({ firstHz, lastHz }) => spansBands(ranges, firstHz, lastHz)),
+  );
+  const stated = [...new Set(meant.flatMap(({ polarization }) => polarization ?? []))];
   if (stated.length === 0) return gapsWhere(() => true);
   return mergeRanges(stated.flatMap((p) => gapsWhere((own) => own === null || own === p)));
 }

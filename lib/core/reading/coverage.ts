@@ -126,9 +126,12 @@ interface Swept {
 }
 
 /** What the traces swept of one band, in every polarization that any of them states. */
-function sweptOf(band: FrequencyRange, traces: readonly Swept[]): FrequencyRange[] {
+function sweptOf(
+  band: FrequencyRange,
+  traces: readonly Swept[],
+  stated: readonly string[],
+): FrequencyRange[] {
   const here = traces.filter(({ trace }) => hasSample(trace, band));
-  const stated = [...new Set(traces.flatMap((t) => (t.polarization ? [t.polarization] : [])))];
   const rangesOf = (own: readonly Swept[]) => mergeRanges(own.flatMap((t) => t.covered));
   if (stated.length === 0) return rangesOf(here);
   // A trace that does not state its polarization is not held against any of them.
@@ -137,15 +140,22 @@ function sweptOf(band: FrequencyRange, traces: readonly Swept[]): FrequencyRange
   );
 }
 
-/** Share of the bands (in log frequency) that the traces swept, and the gaps left. */
-export function coverageOf(bands: readonly FrequencyRange[], traces: readonly Swept[]): Coverage {
+/**
+ * Share of the bands (in log frequency) that the traces swept in each of the stated polarizations,
+ * and the gaps left.
+ */
+export function coverageOf(
+  bands: readonly FrequencyRange[],
+  traces: readonly Swept[],
+  stated: readonly string[] = [],
+): Coverage {
   const gaps: FrequencyRange[] = [];
   for (const band of bands) {
     let at = band.startHz;
     const gap = (toHz: number) => {
       if (toHz > at) gaps.push({ startHz: at, stopHz: toHz });
     };
-    for (const range of sweptOf(band, traces)) {
+    for (const range of sweptOf(band, traces, stated)) {
       if (range.stopHz <= at) continue;
       if (range.startHz >= band.stopHz) break;
       gap(range.startHz);
@@ -165,4 +175,20 @@ export function coveredShare(
   if (!(whole > 0)) return 0;
   const missing = logWidth(commonRanges([[...bands], [...gaps]]));
   return missing === 0 ? 1 : Math.max(0, 1 - missing / whole);
+}
+
+/** A sweep that spans less of a line than this only touches its edge. */
+const TOUCH = 0.01;
+
+/**
+ * Whether a scan from one frequency in Hz to another was meant for these bands: not when it merely
+ * touches their edge, as one that ends at 1 GHz touches a line that begins there.
+ */
+export function spansBands(
+  bands: readonly FrequencyRange[],
+  firstHz: number,
+  lastHz: number,
+): boolean {
+  const common = commonRanges([[...bands], [{ startHz: firstHz, stopHz: lastHz }]]);
+  return logWidth(common) >= TOUCH * logWidth(bands);
 }

@@ -17,7 +17,10 @@ export function ambientDoubt(port: Port, ambientTaken: boolean): Doubt[] {
 }
 
 /** Sweeps that state one polarization only, under a mask that holds for both. */
-export function polarizationDoubts(mask: Mask, parts: readonly SweepPart[]): Doubt[] {
+export function polarizationDoubts(
+  mask: Mask,
+  parts: readonly Pick<SweepPart, "settings">[],
+): Doubt[] {
   if (mask.port !== "radiated") return [];
   const stated = [...new Set(parts.flatMap(({ settings }) => settings.polarization ?? []))];
   const [only] = stated;

@@ -1,9 +1,9 @@
 import type { CompiledLine, LinePiece } from "../mask/compile-line";
 import { pieceLimitAt } from "../mask/compile-line";
 import { EDGE_TOLERANCE, limitAt } from "../mask/limit-at";
-import { frequencyAt, indexAfter, indexAtOrAfter } from "../sweep/axis";
+import { firstHz, frequencyAt, indexAfter, indexAtOrAfter, lastHz } from "../sweep/axis";
 import { basisOf, tightness } from "./basis";
-import { coverageOf, coveredShare, inRanges, mergeRanges } from "./coverage";
+import { coverageOf, coveredShare, inRanges, mergeRanges, spansBands } from "./coverage";
 import type { HeldTrace } from "./held-trace";
 import type { Lowest } from "./lowest-margin";
 import { findLowest, heldLevelDb, keepLowest, nothingFound } from "./lowest-margin";
@@ -204,24 +204,41 @@ function standingOf(
   return { standing: isInside ? "inside-guard" : "clear", explanation: null };
 }
 
-/** What the used traces swept of the line. */
-function coverageOfLine(line: CompiledLine, used: readonly UsedTrace[]): Coverage {
-  const swept = used.map(({ held: { trace, covered, part } }) => ({
-    trace,
-    covered,
-    polarization: part.settings.port === "radiated" ? part.settings.polarization : null,
+const polarizationOf = ({ part: { settings } }: HeldTrace) =>
+  settings.port === "radiated" ? settings.polarization : null;
+
+/**
+ * What the used traces swept of the line, in every polarization in which it was scanned at all: one
+ * that was scanned with a detector that cannot decide the line is a gap, not forgotten.
+ */
+function coverageOfLine(
+  line: CompiledLine,
+  used: readonly UsedTrace[],
+  all: readonly HeldTrace[],
+): Coverage {
+  const meant = all.filter(
+    ({ trace: { kind, axis } }) =>
+      kind === "scan" && spansBands(line.ranges, firstHz(axis), lastHz(axis)),
+  );
+  const stated = [...new Set(meant.flatMap((held) => polarizationOf(held) ?? []))];
+  const swept = used.map(({ held }) => ({
+    trace: held.trace,
+    covered: held.covered,
+    polarization: polarizationOf(held),
   }));
-  return coverageOf(line.ranges, swept);
+  return coverageOf(line.ranges, swept, stated);
 }
 
 /**
  * Holds traces against one line: margins in dB, frequencies in Hz. `boundDb` is the lowest margin
- * of an upper bound, +Infinity without one.
+ * of an upper bound, +Infinity without one. `all` are the held traces, whether they can decide the
+ * line or not.
  */
 export function readLine(
   line: CompiledLine,
   lineIndex: number,
   used: readonly UsedTrace[],
+  all: readonly HeldTrace[],
 ): { reading: LineReading; boundDb: number } {
   const byPiece = line.pieces.map((): Worst => ({ own: null, bound: null }));
   let isInside = false;
@@ -236,7 +253,7 @@ export function readLine(
       if (point.marginDb < one.held.part.guardDb) isInside = true;
     });
   }
-  const coverage = coverageOfLine(line, used);
+  const coverage = coverageOfLine(line, used, all);
   const bands = line.pieces.map(({ startHz, stopHz }, i): BandReading => {
     const decided = decide(byPiece[i] ?? { own: null, bound: null });
     const share = coveredShare([{ startHz, stopHz }], coverage.gaps);

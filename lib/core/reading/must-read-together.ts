@@ -7,7 +7,26 @@ import { speaksFor } from "./position";
 /** What is known of a sweep without its levels. */
 export interface SweepOutline {
   settings: MeasurementSettings;
-  traces: readonly (Pick<Trace, "detector" | "hold"> & { firstHz: number; lastHz: number })[];
+  traces: readonly TraceOutline[];
+}
+
+interface TraceOutline extends Pick<Trace, "kind" | "detector" | "hold"> {
+  firstHz: number;
+  lastHz: number;
+  /** Spacing of a regular axis; null where it varies. */
+  stepHz: number | null;
+}
+
+/** Spacing in Hz that no median of the trace's steps is above. */
+const widestStepHz = ({ firstHz, lastHz, stepHz }: TraceOutline) => stepHz ?? lastHz - firstHz;
+
+/**
+ * How far in Hz a tighter trace may speak beyond its own ends: a spot within the RBW or step of the
+ * looser trace, a scan half a step.
+ */
+function reachHz(tight: TraceOutline, loose: TraceOutline, rbwHz: number | null): number {
+  const hz = Math.max(rbwHz ?? 0, widestStepHz(loose), widestStepHz(tight) / 2);
+  return hz * (1 + 1e-9);
 }
 
 /**
@@ -23,13 +42,15 @@ export function mustReadTogether(mask: Mask, sweeps: readonly SweepOutline[]): b
           (tight) =>
             tight !== loose &&
             speaksFor(tight.settings, loose.settings) &&
-            tight.traces.some(
-              (trace) =>
+            tight.traces.some((trace) => {
+              const reach = reachHz(trace, bound, loose.settings.rbwHz);
+              return (
                 basisOf(trace, line.detector) !== "cannot-decide" &&
                 tightness(trace.detector) > tightness(bound.detector) &&
-                trace.firstHz <= bound.lastHz &&
-                trace.lastHz >= bound.firstHz,
-            ),
+                trace.firstHz <= bound.lastHz + reach &&
+                trace.lastHz >= bound.firstHz - reach
+              );
+            }),
         );
       }),
     ),

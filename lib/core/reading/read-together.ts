@@ -48,7 +48,7 @@ export function readPrepared(
   const compiled = mask.lines.map(compileLine);
   const read = compiled.map((line, i) => {
     const used = useTraces(line, held);
-    const { reading, boundDb } = readLine(line, i, used);
+    const { reading, boundDb } = readLine(line, i, used, held);
     const open = boundDb < 0 ? remeasureLine(line, used) : { points: [], omitted: 0 };
     return { reading, ...open };
   });

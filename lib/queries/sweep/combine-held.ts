@@ -94,9 +94,10 @@ export async function combineHeld(
     return linesOf(await readHeldTogether(tx, teamId, held));
   return combineReadings(
     first.mask,
-    held.map(({ reading, settings }) => ({
+    held.map(({ reading, settings, traces }) => ({
       lines: reading.lines,
       guardDb: reading.guardDb,
+      scans: traces.filter(({ kind }) => kind === "scan"),
       polarization: settings.port === "radiated" ? settings.polarization : null,
     })),
   );

@@ -4,8 +4,10 @@ import type { Transaction } from "@/db/client";
 import type { StoredReading } from "@/db/schema";
 import { benches, sweeps } from "@/db/schema";
 import type { Mask } from "@/lib/core/mask/mask";
+import { polarizationDoubts } from "@/lib/core/reading/doubts";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import { readHeldTogether } from "./combine-held";
+import type { HeldReading } from "./load-readings";
 import { loadReadings } from "./load-readings";
 
 /** A sweep that a combined reading is made of. */
@@ -43,6 +45,11 @@ async function loadSweeps(
   return ids.flatMap((id) => rows.find((row) => row.id === id) ?? []);
 }
 
+/** The reading of the only sweep, with what is missing where no other one is. */
+function alone({ mask, reading, settings }: HeldReading): StoredReading {
+  return { ...reading, doubts: [...reading.doubts, ...polarizationDoubts(mask, [{ settings }])] };
+}
+
 /** The product sweeps in scope taken together, mask by mask; masks that none reaches are left out. */
 export async function loadCombined(
   tx: Transaction,
@@ -55,7 +62,7 @@ export async function loadCombined(
     const own = held.filter((row) => row.maskId === maskId);
     const [first, ...rest] = own;
     if (!first) continue;
-    const reading = rest.length === 0 ? first.reading : await readHeldTogether(tx, teamId, own);
+    const reading = rest.length === 0 ? alone(first) : await readHeldTogether(tx, teamId, own);
     const ids = own.map((row) => row.sweepId);
     details.push({
       maskId,

@@ -73,10 +73,12 @@ async function loadOutlines(tx: Transaction, teamId: string, sweepIds: string[])
   const rows = await tx
     .select({
       sweepId: traces.sweepId,
+      kind: traces.kind,
       detector: traces.detector,
       hold: traces.hold,
       firstHz: traces.firstHz,
       lastHz: traces.lastHz,
+      stepHz: traces.stepHz,
     })
     .from(traces)
     .where(and(eq(traces.teamId, teamId), inArray(traces.sweepId, sweepIds)))

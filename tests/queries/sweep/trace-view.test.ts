@@ -25,7 +25,14 @@ afterAll(() => database.close());
 async function store(trace: Trace): Promise<number> {
   const position = next;
   next += 1;
-  const place = { teamId: ctx.teamId, sweepId, position, fileUnit: trace.unit, fileMaxDb: null, rbwHz: 120e3 };
+  const place = {
+    teamId: ctx.teamId,
+    sweepId,
+    position,
+    fileUnit: trace.unit,
+    fileMaxDb: null,
+    rbwHz: 120e3,
+  };
   await inTeam(ctx.db, ctx.teamId, (tx) => storeTrace(tx, place, trace));
   return position;
 }

@@ -4,12 +4,8 @@ import { PAPERS, type Paper } from "@/lib/reports/paper";
 import { snapshotBudget } from "@/lib/reports/snapshot-budget";
 import { printReport, type ReadPdf } from "../support/read-pdf";
 import { acceptedDelta } from "../support/report-delta";
-import {
-  inventedTrace,
-  sampleSnapshot,
-  sampleSweep,
-  shippedMask,
-} from "../support/report-snapshot";
+import { sampleSnapshot, sampleSweep } from "../support/report-snapshot";
+import { inventedTrace, shippedMask } from "../support/report-traces";
 
 const line = { sensitivity: 1, degreesOfFreedom: null, observations: null };
 const budget = snapshotBudget(

@@ -3,12 +3,8 @@ import type { Doubt, DoubtCode } from "@/lib/core/reading/reading";
 import { DOUBT_CODES } from "@/lib/core/reading/reading";
 import { summarizeDoubts } from "@/lib/reports/doubt-summary";
 import { decidingReading, nameWithPosition, summarizeLines } from "@/lib/reports/summarize";
-import {
-  inventedTrace,
-  sampleSnapshot,
-  sampleSweep,
-  shippedMask,
-} from "../support/report-snapshot";
+import { sampleSnapshot, sampleSweep } from "../support/report-snapshot";
+import { inventedTrace, shippedMask } from "../support/report-traces";
 
 const masks = [{ mask: shippedMask("cispr-32-radiated-class-b-3m"), revision: 2 }];
 const final = (peakDb: number) => ({

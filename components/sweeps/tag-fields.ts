@@ -31,6 +31,12 @@ export const MEASUREMENT_FIELDS: TagField[] = [
     kind: "choice",
     options: choices(POLARIZATIONS),
   },
+  {
+    path: "conductor",
+    label: "Conductor or cable",
+    kind: "text",
+    hint: "At a mains or cable port, for example L1",
+  },
   { path: "heightM", label: "Antenna height in m", kind: "number" },
   { path: "azimuthDeg", label: "Azimuth in degrees", kind: "number" },
   { path: "rbwHz", label: "RBW", kind: "frequency", hint: "With its unit, for example 120 kHz" },

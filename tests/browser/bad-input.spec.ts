@@ -52,7 +52,8 @@ async function findSweep(page: Page): Promise<string> {
   await page.goto("/");
   await page.getByRole("link", { name: "Gannet", exact: true }).click();
   await page.getByRole("cell", { name: "G3" }).getByRole("link").click();
-  const link = page.getByRole("region", { name: "Sweeps" }).getByRole("link").first();
+  const sweeps = page.getByRole("region", { name: "Sweeps" });
+  const link = sweeps.locator('a[href^="/sweeps/"]').first();
   return (await link.getAttribute("href")) ?? "";
 }
 

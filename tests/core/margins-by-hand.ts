@@ -103,10 +103,14 @@ function sweep(part: SweepPart, trace: Trace, mask: Mask): Swept {
   return { part, trace, samples, spacings, pieces };
 }
 
-/** Same port, same stated polarization or both unstated; height and azimuth unless unstated. */
+/**
+ * Same port and polarization; height and azimuth unless unstated. Of two sweeps the polarization has
+ * to be stated; where there is none, the conductor, which these sweeps never state.
+ */
 export function isInPosition(tight: SweepPart, loose: SweepPart): boolean {
   const [a, b] = [tight.settings, loose.settings];
   if (a.port !== b.port || a.polarization !== b.polarization) return false;
+  if (tight !== loose && !(a.port === "radiated" && a.polarization !== null)) return false;
   const isAlike = (own: number | null, bound: number | null) => bound === null || own === bound;
   return isAlike(a.heightM, b.heightM) && isAlike(a.azimuthDeg, b.azimuthDeg);
 }
@@ -163,6 +167,12 @@ function coverageByHand(line: MaskLine, speaking: readonly Swept[], all: readonl
 /** Sums of products leave some parts in 10^14; what differs by less is a tie. */
 const rounded = (db: number) => Math.round(db * 1e9) / 1e9;
 
+/** Points further apart than the bandwidth see nothing of what lies between them. */
+function isSparse({ part, spacings }: Swept): boolean {
+  const { rbwHz } = part.settings;
+  return rbwHz !== null && spacings.length > 0 && medianOf(spacings) > rbwHz;
+}
+
 /** Sweeps held together against each line of a mask. */
 export function readByHand(parts: readonly SweepPart[], mask: Mask): LineByHand[] {
   const swept = parts.flatMap((part) => part.traces.map((trace) => sweep(part, trace, mask)));
@@ -186,7 +196,7 @@ export function readByHand(parts: readonly SweepPart[], mask: Mask): LineByHand[
         const isSilent =
           !isOwn &&
           tighter.some((other) =>
-            other.trace.kind === "scan"
+            other.trace.kind === "scan" && !isSparse(other)
               ? other.pieces.some(([a, b]) => a <= hz && hz <= b)
               : other.samples.some((s) => !Number.isNaN(s.db) && Math.abs(s.hz - hz) <= reachHz),
           );

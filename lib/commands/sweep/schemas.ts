@@ -31,6 +31,7 @@ export const measurementSettingsSchema = z.object({
   preamplifier: z.boolean().nullable(),
   referenceLevelDb: numberOrNull("the reference level").nullable(),
   polarization: z.enum(POLARIZATIONS).nullable(),
+  conductor: storable.trim().max(60, "Keep it under 60 characters.").nullable().optional(),
   heightM: numberOrNull("the height").min(0, "The height is 0 m or more.").nullable(),
   azimuthDeg: numberOrNull("the azimuth")
     .min(-360, "An azimuth lies between −360° and 360°.")

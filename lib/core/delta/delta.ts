@@ -13,6 +13,7 @@ export const MISMATCH_FIELDS = [
   "span",
   "purpose",
   "polarization",
+  "conductor",
   "position",
   "port",
 ] as const;

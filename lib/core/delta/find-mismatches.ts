@@ -40,6 +40,11 @@ function arrangementMismatches(before: ComparedSweep, after: ComparedSweep): Mis
     });
   if (a.port !== b.port)
     found.push({ field: "port", text: `The port differs: ${a.port} before, ${b.port} after.` });
+  if ((a.conductor ?? null) !== (b.conductor ?? null))
+    found.push({
+      field: "conductor",
+      text: `The conductor differs: ${a.conductor ?? "not stated"} before, ${b.conductor ?? "not stated"} after.`,
+    });
   if (a.polarization !== b.polarization)
     found.push({
       field: "polarization",

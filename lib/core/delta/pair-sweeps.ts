@@ -26,6 +26,7 @@ function fit(a: ComparedSweep, b: ComparedSweep): number {
   const same = [
     s.port === t.port,
     s.polarization === t.polarization,
+    (s.conductor ?? null) === (t.conductor ?? null),
     s.heightM === t.heightM,
     s.azimuthDeg === t.azimuthDeg,
     pairTraces(a, b).length > 0,

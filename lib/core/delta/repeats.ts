@@ -2,12 +2,19 @@ import type { ComparedSweep } from "./compared-sweep";
 import { findMismatches } from "./find-mismatches";
 import { pairTraces } from "./trace-pairs";
 
+/** What is not stated may differ: two polarizations or two conductors are no repeats. */
+function isPlaceStated({ settings }: ComparedSweep): boolean {
+  const isField = settings.port === "radiated" || settings.port === "near-field";
+  return isField ? settings.polarization !== null : Boolean(settings.conductor?.trim());
+}
+
 /**
  * Whether two sweeps of one step are repeats of each other: nothing forbids comparing them, and
  * they have the same traces (detector, kind, hold, unit, span) in the same order.
  */
 function isRepeat(a: ComparedSweep, b: ComparedSweep): boolean {
-  if (a.traces.length !== b.traces.length || findMismatches(a, b).length > 0) return false;
+  if (!isPlaceStated(a) || a.traces.length !== b.traces.length || findMismatches(a, b).length > 0)
+    return false;
   const pairs = pairTraces(a, b);
   return (
     pairs.length === a.traces.filter((trace) => trace.detector !== null).length &&

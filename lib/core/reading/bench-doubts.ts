@@ -37,7 +37,7 @@ export function scanTimeDoubts(
 
 /** Calibrations that were overdue on the day of the sweep, or that nobody can check. */
 export function calibrationDoubts(state: CalibrationState): Doubt[] {
-  const { overdue, unstated, isDateKnown, isCorrected } = state;
+  const { overdue, unstated, calibratedLater = [], isDateKnown, isCorrected } = state;
   const doubts: Doubt[] = [];
   if (overdue.length > 0) {
     const text = `Calibration was overdue on the date of the sweep: ${overdue.join(", ")}. Have it calibrated and compare.`;
@@ -47,6 +47,9 @@ export function calibrationDoubts(state: CalibrationState): Doubt[] {
     isDateKnown ? null : "The date of the sweep is not stated, so calibrations cannot be checked.",
     isDateKnown && unstated.length > 0
       ? `No due date is stated for the calibration of ${unstated.join(", ")}.`
+      : null,
+    calibratedLater.length > 0
+      ? `Calibrated only after the sweep, so nothing is known of that day: ${calibratedLater.join(", ")}.`
       : null,
     isCorrected
       ? "The instrument applied the factors itself, from tables that cannot be seen here."

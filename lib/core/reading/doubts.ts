@@ -48,7 +48,7 @@ function doubtsOfPart(mask: Mask, part: SweepPart, held: readonly HeldTrace[]): 
   const { context = {}, settings } = part;
   const scans = held.filter(({ trace, levels }) => trace.kind === "scan" && levels.count > 0);
   return [
-    ...bandwidthDoubts(mask, settings, scans),
+    ...bandwidthDoubts(mask, settings, held),
     ...stepDoubts(mask, settings, scans),
     ...scanTimeDoubts(settings, scans),
     ...(context.calibration ? calibrationDoubts(context.calibration) : []),

@@ -42,13 +42,12 @@ function silentRanges(used: Omit<UsedTrace, "silent">, all: readonly Omit<UsedTr
   const reach = reachOf(used.held);
   return mergeRanges(
     all
-      .filter(
-        (other) =>
-          other.rank > used.rank && speaksFor(other.held.part.settings, used.held.part.settings),
-      )
+      .filter((other) => other.rank > used.rank && speaksFor(other.held.part, used.held.part))
       .flatMap(({ held }) => {
         const { trace, levels } = held;
-        if (trace.kind === "scan") return held.covered.map((range) => ({ ...range }));
+        // Between points further apart than its bandwidth a scan has seen nothing.
+        const isSparse = held.stepHz > (held.part.settings.rbwHz ?? Number.POSITIVE_INFINITY);
+        if (trace.kind === "scan" && !isSparse) return held.covered.map((range) => ({ ...range }));
         return Array.from({ length: levels.count }, (_, i) => i)
           .filter((i) => Number.isFinite(trace.levelsDb[i]))
           .map((i) => frequencyAt(trace.axis, i))

@@ -7,6 +7,7 @@ import { speaksFor } from "./position";
 /** What is known of a sweep without its levels. */
 export interface SweepOutline {
   settings: MeasurementSettings;
+  arrangement?: string;
   traces: readonly TraceOutline[];
 }
 
@@ -41,7 +42,7 @@ export function mustReadTogether(mask: Mask, sweeps: readonly SweepOutline[]): b
         return sweeps.some(
           (tight) =>
             tight !== loose &&
-            speaksFor(tight.settings, loose.settings) &&
+            speaksFor(tight, loose) &&
             tight.traces.some((trace) => {
               const reach = reachHz(trace, bound, loose.settings.rbwHz);
               return (

@@ -52,6 +52,7 @@ function likenessOf({ trace, part }: Loose): string | null {
     part.guardDb,
     part.impedanceOhm ?? null,
     part.restateDistance ?? false,
+    part.arrangement ?? null,
     Object.entries(settings).sort(([a], [b]) => (a < b ? -1 : 1)),
   ]);
 }

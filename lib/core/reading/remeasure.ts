@@ -31,7 +31,12 @@ function overSamples(line: CompiledLine, used: readonly UsedTrace[]): OverSample
       eachHeardRun(one, piece, (from, to) => findOver(one.held, piece, from, to, add));
     eachHeardEdge(one, line, add);
   }
-  return found.sort((a, b) => a.marginDb - b.marginDb || a.frequencyHz - b.frequencyHz);
+  // Of equals the one that states more, whose spot speaks for the other too.
+  const unstated = ({ used: { held } }: OverSample) =>
+    Number(held.part.settings.heightM === null) + Number(held.part.settings.azimuthDeg === null);
+  return found.sort(
+    (a, b) => a.marginDb - b.marginDb || a.frequencyHz - b.frequencyHz || unstated(a) - unstated(b),
+  );
 }
 
 /** Remembers frequencies in cells as wide as the widest reach, so that near ones are found fast. */
@@ -53,7 +58,7 @@ class Taken {
         (t) =>
           Math.abs(t.frequencyHz - frequencyHz) <= reach &&
           // A spot speaks for its own position only.
-          speaksFor(t.used.held.part.settings, used.held.part.settings),
+          speaksFor(t.used.held.part, used.held.part),
       ),
     );
   }

@@ -8,6 +8,7 @@ import { prominentPeaksIn } from "../sweep/prominent-peaks";
 import type { Trace } from "../sweep/trace";
 import { basisOf } from "./basis";
 import type { HeldTrace } from "./held-trace";
+import { reachOf } from "./line-reading";
 import { heldLevelDb } from "./lowest-margin";
 import { speaksFor } from "./position";
 import { originOf } from "./prepare-parts";
@@ -40,6 +41,12 @@ function parabolicHz(trace: Trace, i: number): number {
   return Number.isFinite(shift) ? at + Math.max(-h1, Math.min(h2, shift)) : at;
 }
 
+function hasSpotNear({ axis, levelsDb }: Trace, hz: number, reachHz: number): boolean {
+  for (let i = indexAtOrAfter(axis, hz - reachHz); frequencyAt(axis, i) <= hz + reachHz; i += 1)
+    if (Number.isFinite(levelsDb[i])) return true;
+  return false;
+}
+
 /** Whether the line's own detector was swept at a frequency in Hz, in the same position. */
 function isDecided(
   held: readonly HeldTrace[],
@@ -48,8 +55,9 @@ function isDecided(
   hz: number,
 ): boolean {
   return held.some(({ trace, part }) => {
-    if (trace.kind === "spots" || basisOf(trace, line.detector) !== "like-for-like") return false;
-    if (!speaksFor(part.settings, loose.part.settings)) return false;
+    if (basisOf(trace, line.detector) !== "like-for-like") return false;
+    if (!speaksFor(part, loose.part)) return false;
+    if (trace.kind === "spots") return hasSpotNear(trace, hz, reachOf(loose));
     const i = indexAtOrAfter(trace.axis, hz);
     const near = (k: number) => !Number.isNaN(trace.levelsDb[k] ?? Number.NaN);
     return frequencyAt(trace.axis, i) === hz ? near(i) : i > 0 && near(i - 1) && near(i);
@@ -123,7 +131,7 @@ function holdPeak(
     if (basis === "upper-bound" && isDecided(all, held, line, sampleHz)) continue;
     found = {
       number: 0,
-      frequencyHz: parabolicHz(held.trace, peak.index),
+      frequencyHz: held.trace.kind === "spots" ? sampleHz : parabolicHz(held.trace, peak.index),
       sampleHz,
       levelDb,
       limitDb,
@@ -138,6 +146,13 @@ function holdPeak(
   return found;
 }
 
+/** Somebody chose to measure there, so every spot near a limit is worth following. */
+function spotsNear(held: HeldTrace, isNear: (i: number) => boolean): PeakPlace[] {
+  return Array.from({ length: held.to - held.from }, (_, k) => held.from + k)
+    .filter((i) => Number.isFinite(held.trace.levelsDb[i]) && isNear(i))
+    .map((index) => ({ index, prominenceDb: 0 }));
+}
+
 function candidatesOf(
   all: readonly HeldTrace[],
   held: HeldTrace,
@@ -147,7 +162,7 @@ function candidatesOf(
   const own = lines
     .map((line): HeldLine => ({ line, basis: basisOf(held.trace, line.line.detector) }))
     .filter(({ basis }) => basis !== "cannot-decide");
-  if (held.trace.kind === "spots" || own.length === 0) return [];
+  if (own.length === 0) return [];
   const isNear = (i: number) => {
     const hz = frequencyAt(held.trace.axis, i);
     return own.some(({ line }) => {
@@ -155,12 +170,16 @@ function candidatesOf(
       return limitDb !== null && limitDb - heldLevelDb(held, i) <= rules.marginDb;
     });
   };
-  return nearRanges(held, own, rules.marginDb)
-    .flatMap((range) => prominentPeaksIn(held.levels, range, rules.prominenceDb, isNear))
-    .flatMap((peak) => {
-      const found = holdPeak(all, held, own, peak);
-      return found && found.marginDb <= rules.marginDb ? [found] : [];
-    });
+  const peaks =
+    held.trace.kind === "spots"
+      ? spotsNear(held, isNear)
+      : nearRanges(held, own, rules.marginDb).flatMap((range) =>
+          prominentPeaksIn(held.levels, range, rules.prominenceDb, isNear),
+        );
+  return peaks.flatMap((peak) => {
+    const found = holdPeak(all, held, own, peak);
+    return found && found.marginDb <= rules.marginDb ? [found] : [];
+  });
 }
 
 /** Keeps those that no other of lower margin lies nearer to than one bandwidth in Hz. */
@@ -180,8 +199,8 @@ function thinOut(candidates: readonly Candidate[], rbwHz: number): Candidate[] {
 /**
  * Suspects of the held traces, lowest margin first: maxima of the wanted prominence, one RBW or
  * more from one with a lower margin (by level alone, a peak trace far under its line would hide
- * the average trace that is over), at most `marginDb` under the line. Where the line's own
- * detector was swept, an upper bound of another one is no suspect. `rbwHz` is the widest of the
+ * the average trace that is over), at most `marginDb` under the line. A spot is one by itself, with
+ * a prominence of 0. Where the line's own detector was swept or a spot lies within reach, an upper bound of another one is no suspect. `rbwHz` is the widest of the
  * sweeps', 0 when none is stated.
  */
 export function findSuspects(

@@ -18,6 +18,8 @@ export interface CalibrationState {
   overdue: readonly string[];
   /** Names of what states no due date. */
   unstated: readonly string[];
+  /** Names of what was calibrated only after that day; left out: nothing. */
+  calibratedLater?: readonly string[];
   /** Without the day of the sweep nothing can be checked. */
   isDateKnown: boolean;
   /** The instrument applied the factors itself, with tables that nobody here has seen. */
@@ -32,6 +34,11 @@ export interface SweepPart {
   guardDb: number;
   /** Impedance of the instrument; null or left out: not stated, then powers are not restated. */
   impedanceOhm?: number | null;
+  /**
+   * Bench, distance and link settings as one text: a trace of another arrangement says nothing about
+   * this sweep's. Left out: the same as that of every other sweep that leaves it out.
+   */
+  arrangement?: string;
   /** Restate levels to the mask's distance; only ever on request. */
   restateDistance?: boolean;
   context?: ReadingContext;

@@ -53,6 +53,8 @@ export interface MeasurementSettings {
   preamplifier: boolean | null;
   referenceLevelDb: number | null;
   polarization: Polarization | null;
+  /** Conductor or cable of a mains, cable or other port, for instance "L1"; missing: not stated. */
+  conductor?: string | null;
   heightM: number | null;
   azimuthDeg: number | null;
   distanceM: number | null;

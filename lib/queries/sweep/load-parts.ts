@@ -1,7 +1,7 @@
 import { and, eq, inArray } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { signalPathRevisions, sweeps } from "@/db/schema";
-import { partOf } from "@/lib/commands/sweep/sweep-to-read";
+import { arrangementOf, partOf } from "@/lib/commands/sweep/sweep-to-read";
 import type { SweepPart } from "@/lib/core/reading/sweep-part";
 import { loadFileLevels, loadTraces } from "./load-trace";
 
@@ -14,6 +14,8 @@ export async function loadParts(
   const rows = await tx
     .select({
       id: sweeps.id,
+      benchId: sweeps.benchId,
+      link: sweeps.link,
       settings: sweeps.settings,
       guardDb: sweeps.guardDb,
       measuredOn: sweeps.measuredOn,
@@ -35,7 +37,8 @@ export async function loadParts(
     const row = rows.find((one) => one.id === id);
     if (!row) throw new Error("A sweep that was to be read together is gone.");
     const traces = await loadTraces(tx, teamId, id);
-    parts.push(partOf(row, traces, await loadFileLevels(tx, teamId, id)));
+    const part = partOf(row, traces, await loadFileLevels(tx, teamId, id));
+    parts.push({ ...part, arrangement: arrangementOf(row) });
   }
   return parts;
 }

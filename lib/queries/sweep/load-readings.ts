@@ -1,10 +1,13 @@
 import type { SQL } from "drizzle-orm";
-import { and, asc, eq, inArray, isNotNull, isNull } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import type { StoredReading } from "@/db/schema";
 import { builds, maskRevisions, masks, readings, sweeps, traces } from "@/db/schema";
+import { arrangementOf } from "@/lib/commands/sweep/sweep-to-read";
+import { lineRanges } from "@/lib/core/mask/limit-at";
 import type { Mask } from "@/lib/core/mask/mask";
 import { reachesMask } from "@/lib/core/reading/combine-readings";
+import { spansBands } from "@/lib/core/reading/coverage";
 import type { SweepOutline } from "@/lib/core/reading/must-read-together";
 import type { MeasurementSettings } from "@/lib/core/sweep/settings";
 import { isNewestRevision } from "./newest-revision";
@@ -19,6 +22,7 @@ export interface HeldReading {
   restated: boolean;
   reading: StoredReading;
   settings: MeasurementSettings;
+  arrangement: string;
   traces: SweepOutline["traces"];
 }
 
@@ -41,6 +45,8 @@ export async function loadReadings(
       restated: readings.restated,
       reading: readings.content,
       settings: sweeps.settings,
+      benchId: sweeps.benchId,
+      link: sweeps.link,
     })
     .from(readings)
     .innerJoin(sweeps, and(eq(sweeps.teamId, readings.teamId), eq(sweeps.id, readings.sweepId)))
@@ -55,15 +61,32 @@ export async function loadReadings(
         eq(readings.teamId, teamId),
         isNull(sweeps.archivedAt),
         isNull(readings.notComparable),
-        isNotNull(readings.marginDb),
         isNewestRevision(),
         scope,
       ),
     )
     .orderBy(asc(masks.key), asc(sweeps.createdAt), asc(sweeps.id));
-  const reaching = rows.filter((row) => reachesMask(row.reading));
-  const outlines = await loadOutlines(tx, teamId, [...new Set(reaching.map((row) => row.sweepId))]);
-  return reaching.map((row) => ({ ...row, traces: outlines.get(row.sweepId) ?? [] }));
+  const outlines = await loadOutlines(tx, teamId, [...new Set(rows.map((row) => row.sweepId))]);
+  return rows
+    .map(({ benchId, link, ...row }) => ({
+      ...row,
+      arrangement: arrangementOf({ benchId, link, settings: row.settings }),
+      traces: outlines.get(row.sweepId) ?? [],
+    }))
+    .filter((row) => reachesMask(row.reading) || scansMask(row.mask, row.traces));
+}
+
+/**
+ * Whether a sweep scanned a mask, be it with detectors that cannot decide it: it has no margin then,
+ * and yet its polarization was looked at and is to be covered.
+ */
+function scansMask(mask: Mask, outlines: SweepOutline["traces"]): boolean {
+  return mask.lines.some((line) =>
+    outlines.some(
+      ({ kind, firstHz, lastHz }) =>
+        kind === "scan" && spansBands(lineRanges(line), firstHz, lastHz),
+    ),
+  );
 }
 
 /** What the traces of some sweeps are, without their levels. */

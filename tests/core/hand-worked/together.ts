@@ -113,7 +113,7 @@ export const togetherCases: TogetherCase[] = [
   spotIn("a spot of the other polarization", VERTICAL, HORIZONTAL, false),
   spotIn("a spot that states no polarization", VERTICAL, { polarization: null }, false),
   spotIn("a vertical spot beside an unstated scan", { polarization: null }, VERTICAL, false),
-  spotIn("a spot and a scan that both state nothing", UNSTATED, UNSTATED, true),
+  spotIn("a spot and a scan of two sweeps that both state nothing", UNSTATED, UNSTATED, false),
   spotIn("a spot at 2 m under a scan held over heights", { heightM: null }, { heightM: 2 }, true),
   spotIn("a spot at 2 m under a scan at 1 m", { heightM: 1 }, { heightM: 2 }, false),
   spotIn("a spot of unstated height under a scan at 1 m", { heightM: 1 }, { heightM: null }, false),

@@ -6,11 +6,13 @@ import type { RemeasureRow } from "@/lib/core/reading/remeasure-rows";
 import { DETECTOR_LABELS } from "@/lib/core/sweep/settings";
 import { formatFrequency, formatLevel } from "@/lib/core/units/format";
 import type { LevelUnit } from "@/lib/core/units/level-units";
+import { LEVEL_UNIT_LABELS } from "@/lib/core/units/level-units";
 
 const columnsFor = (unit: LevelUnit, isSeveral: boolean): DataColumn<RemeasureRow>[] => [
   {
     id: "frequency",
     header: "Frequency",
+    exportHeader: "Frequency, Hz",
     mono: true,
     align: "right",
     value: (p) => p.frequencyHz,
@@ -20,6 +22,7 @@ const columnsFor = (unit: LevelUnit, isSeveral: boolean): DataColumn<RemeasureRo
   {
     id: "rbw",
     header: "RBW",
+    exportHeader: "RBW, Hz",
     mono: true,
     align: "right",
     value: (p) => p.rbwHz,
@@ -35,6 +38,7 @@ const columnsFor = (unit: LevelUnit, isSeveral: boolean): DataColumn<RemeasureRo
   {
     id: "height",
     header: "Height",
+    exportHeader: "Height, m",
     mono: true,
     align: "right",
     value: (p) => p.heightM,
@@ -43,6 +47,7 @@ const columnsFor = (unit: LevelUnit, isSeveral: boolean): DataColumn<RemeasureRo
   {
     id: "azimuth",
     header: "Azimuth",
+    exportHeader: "Azimuth, °",
     mono: true,
     align: "right",
     value: (p) => p.azimuthDeg,
@@ -51,6 +56,7 @@ const columnsFor = (unit: LevelUnit, isSeveral: boolean): DataColumn<RemeasureRo
   {
     id: "bound",
     header: "Upper bound",
+    exportHeader: `Upper bound, ${LEVEL_UNIT_LABELS[unit]}`,
     mono: true,
     align: "right",
     value: (p) => Number(p.boundDb.toFixed(2)),
@@ -59,6 +65,7 @@ const columnsFor = (unit: LevelUnit, isSeveral: boolean): DataColumn<RemeasureRo
   {
     id: "limit",
     header: "Limit",
+    exportHeader: `Limit, ${LEVEL_UNIT_LABELS[unit]}`,
     mono: true,
     align: "right",
     value: (p) => Number(p.limitDb.toFixed(2)),

@@ -48,6 +48,7 @@ export function readingColumns(unit: LevelUnit, stepHz: number | null): Column[]
     {
       id: "frequency",
       header: "Frequency",
+      exportHeader: "Frequency, Hz",
       mono: true,
       align: "right",
       value: (s) => s.frequencyHz,
@@ -58,6 +59,7 @@ export function readingColumns(unit: LevelUnit, stepHz: number | null): Column[]
     {
       id: "margin",
       header: "Margin",
+      exportHeader: "Margin, dB",
       align: "right",
       mono: true,
       value: (s) => rounded(s.marginDb),

@@ -15,6 +15,8 @@ import { toDelimited } from "./to-delimited";
 export interface DataColumn<T> {
   id: string;
   header: string;
+  /** Head of the column in a copy or a file, where the unit is not in the cells; else `header`. */
+  exportHeader?: string;
   align?: "left" | "right";
   mono?: boolean;
   /** What is sorted, copied and exported; null sorts last. */
@@ -65,7 +67,10 @@ export function DataTable<T extends object>(props: DataTableProps<T>) {
   const shown = table.getRowModel().rows.map((row) => row.original);
   const delimited = (by: string) =>
     toDelimited(
-      [columns.map((c) => c.header), ...shown.map((row) => columns.map((c) => c.value(row)))],
+      [
+        columns.map((c) => c.exportHeader ?? c.header),
+        ...shown.map((row) => columns.map((c) => c.value(row))),
+      ],
       by,
     );
 

@@ -88,7 +88,9 @@ test("a peak over a quasi-peak limit is undecided, and its re-measure list goes 
   await section.getByRole("button", { name: "Copy table" }).click();
   await expect(section.getByRole("button", { name: "Copied" })).toBeVisible();
   const copied = await page.evaluate(() => navigator.clipboard.readText());
-  expect(copied.split("\n")[0]).toMatch(/^Frequency\tDetector\tRBW\tMask line\tPolarization/);
+  expect(copied.split("\n")[0]).toMatch(
+    /^Frequency, Hz\tDetector\tRBW, Hz\tMask line\tPolarization/,
+  );
   expect(copied.split("\n")[1]).toMatch(/^160000000\tquasi-peak\t120000\tQuasi-peak\t/);
   const arriving = page.waitForEvent("download");
   await section.getByRole("link", { name: "Save as CSV" }).click();

@@ -13,12 +13,13 @@ interface BuildReadingProps {
     mask: Mask;
     reading: Omit<Reading, "suspects">;
     sweeps: { id: string; name: string }[];
+    notHeld: { sweepId: string; name: string; reason: string }[];
   };
 }
 
 /** The line of record under one mask: which sweep decided each line, what is open, what weakens it. */
 export function BuildReading({ href, combined }: BuildReadingProps) {
-  const { maskId, mask, reading, sweeps } = combined;
+  const { maskId, mask, reading, sweeps, notHeld } = combined;
   const spots = reading.remeasure.length + reading.remeasureOmitted;
   return (
     <div className="mb-8 last:mb-0">
@@ -37,6 +38,15 @@ export function BuildReading({ href, combined }: BuildReadingProps) {
           </Link>
         ) : null}
       </p>
+      {notHeld.map(({ sweepId, name, reason }) => (
+        <p key={sweepId} className="mt-2 border-l-4 border-shoal bg-shoal-bed px-3 py-2 text-sm">
+          Left out:{" "}
+          <Link href={`/sweeps/${sweepId}?mask=${maskId}`} className="text-deep underline">
+            {name}
+          </Link>
+          . {reason}
+        </p>
+      ))}
       {reading.doubts.length > 0 ? (
         <details className="mt-2">
           <summary className="cursor-pointer text-deep underline">

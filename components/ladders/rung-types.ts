@@ -1,4 +1,4 @@
-import type { DoubtCode } from "@/lib/core/reading/reading";
+import type { Doubt } from "@/lib/core/reading/reading";
 import type { SweepDelta } from "@/lib/core/delta/delta";
 import type { StepState } from "@/lib/core/delta/ladder-order";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
@@ -19,7 +19,7 @@ export interface RungStep {
   state: StepState;
   base: { id: string; position: number; name: string } | null;
   isOnLine: boolean;
-  doubts: { code: DoubtCode; sweeps: number }[];
+  doubts: (Doubt & { sweeps: number })[];
   link: LinkSettings | null;
   onRecord: boolean;
   sweeps: { id: string; name: string; purpose: string }[];

@@ -33,11 +33,10 @@ export function revisionContent(
     throw new CommandError("conflict", "Nothing differs from the current revision.");
   }
   const wasFromMemory = current.content.provenance === "from memory";
-  const isSameLimits = isDeepStrictEqual(current.content.lines, content.lines);
-  if (wasFromMemory && content.provenance !== "from memory" && isSameLimits) {
+  if (wasFromMemory && content.provenance !== "from memory") {
     throw new CommandError("invalid", "Limits from memory are not made firm by an edit.", {
       provenance:
-        "Confirm the mask against your own copy instead: who, when and which copy are then kept.",
+        "Save it as from memory, and confirm it against your own copy then: who, when and which copy are kept.",
     });
   }
   return content;

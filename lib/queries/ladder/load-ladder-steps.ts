@@ -6,9 +6,10 @@ import type { StepState } from "@/lib/core/delta/ladder-order";
 import { baseOfStep, lineOfSteps } from "@/lib/core/delta/ladder-order";
 import type { Mask } from "@/lib/core/mask/mask";
 import type { LinkSettings } from "@/lib/core/link/link-settings";
-import type { DoubtCode } from "@/lib/core/reading/reading";
+import type { Doubt } from "@/lib/core/reading/reading";
 import { DOUBT_CODES } from "@/lib/core/reading/reading";
-import { listSweepDoubts } from "../sweep/list-doubts";
+import type { ReadingDoubts } from "../sweep/list-doubts";
+import { listReadingDoubts } from "../sweep/list-doubts";
 import type { HeldReading } from "../sweep/load-readings";
 import { loadReadings } from "../sweep/load-readings";
 import type { MaskStanding } from "../sweep/standings";
@@ -36,16 +37,24 @@ export interface LadderStep extends StepDeltas {
   link: LinkSettings | null;
   onRecord: boolean;
   sweeps: ComparedSweep[];
-  /** Doubts of the step's readings in force, each with how many of its sweeps have it. */
-  doubts: { code: DoubtCode; sweeps: number }[];
+  /** Doubts of the step's readings in force, each once, with how many of its sweeps have it. */
+  doubts: (Doubt & { sweeps: number })[];
 }
 
-/** How often each code stands in a list, in the order of `DOUBT_CODES`. */
-function countOf(codes: readonly DoubtCode[]): LadderStep["doubts"] {
-  return DOUBT_CODES.map((code) => ({
-    code,
-    sweeps: codes.filter((own) => own === code).length,
-  })).filter((doubt) => doubt.sweeps > 0);
+/** Doubts that say the same once, in the order of `DOUBT_CODES`. */
+function gatherDoubts(readings: readonly ReadingDoubts[]): LadderStep["doubts"] {
+  const found = new Map<string, { doubt: Doubt; sweepIds: Set<string> }>();
+  for (const { sweepId, stored, derived } of readings) {
+    for (const { partIndexes: _parts, ...doubt } of [...stored, ...derived]) {
+      const key = `${doubt.code} ${doubt.text}`;
+      const known = found.get(key) ?? { doubt, sweepIds: new Set<string>() };
+      known.sweepIds.add(sweepId);
+      found.set(key, known);
+    }
+  }
+  return [...found.values()]
+    .map(({ doubt, sweepIds }) => ({ ...doubt, sweeps: sweepIds.size }))
+    .sort((x, y) => DOUBT_CODES.indexOf(x.code) - DOUBT_CODES.indexOf(y.code));
 }
 
 /** A ladder with the deltas of its steps, inside a unit of work of its team; null without one. */
@@ -117,8 +126,8 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
   const line = new Set(lineOfSteps(rows).map((row) => row.id));
   const doubts =
     placed.length === 0
-      ? new Map<string, DoubtCode[]>()
-      : await listSweepDoubts(
+      ? []
+      : await listReadingDoubts(
           tx,
           teamId,
           inArray(
@@ -148,7 +157,7 @@ export async function loadLadderSteps(tx: Transaction, teamId: string, ladderId:
         held.filter(({ sweepId }) => own.some((sweep) => sweep.id === sweepId)),
       ),
       sweeps: row.sweeps,
-      doubts: countOf(own.flatMap((sweep) => doubts.get(sweep.id) ?? [])),
+      doubts: gatherDoubts(doubts.filter(({ sweepId }) => own.some((s) => s.id === sweepId))),
       againstPrevious: deltas[i]?.againstPrevious ?? [],
       againstStart: deltas[i]?.againstStart ?? [],
       unpaired: deltas[i]?.unpaired ?? [],

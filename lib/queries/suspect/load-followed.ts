@@ -80,7 +80,11 @@ export async function loadFollowed(tx: Transaction, teamId: string, programId: s
         sweepName: row.sweepName,
         measuredOn: row.measuredOn,
         maskId: row.maskId,
-        maskTitle: row.mask.title,
+        // Wherever a margin is told, so is that its limits were never confirmed.
+        maskTitle:
+          row.mask.provenance === "from memory"
+            ? `${row.mask.title} (from memory, not confirmed)`
+            : row.mask.title,
         unit: row.content.unit,
         standing: standingOfSuspect(suspect, row.content.guardDb),
         rbwHz: row.settings.rbwHz,

@@ -3,7 +3,7 @@ import { and, eq, isNull } from "drizzle-orm";
 import type { Transaction } from "@/db/client";
 import { readings, sweeps } from "@/db/schema";
 import { reachesMask } from "@/lib/core/reading/combine-readings";
-import type { DoubtCode } from "@/lib/core/reading/reading";
+import type { Doubt, DoubtCode } from "@/lib/core/reading/reading";
 import { DOUBT_CODES } from "@/lib/core/reading/reading";
 import type { CheckOfDay } from "../bench-check/check-of-day";
 import { checkOfDay } from "../bench-check/check-of-day";
@@ -28,20 +28,28 @@ async function loadDayChecks(
   return (day) => found.get(keyOf(day)) ?? null;
 }
 
+/** The doubts of one reading in force: those stored with it, and those of its bench's day. */
+export interface ReadingDoubts {
+  sweepId: string;
+  maskId: string;
+  stored: Doubt[];
+  derived: Doubt[];
+}
+
 /**
- * Which doubts the readings in force of some sweeps have, stored and derived ones alike, in the
- * order of `DOUBT_CODES`; by the sweep's id. Readings that cannot be compared or only touch a mask
- * say nothing, as in every list.
+ * The doubts of the readings in force of some sweeps. Readings that cannot be compared or only touch
+ * a mask say nothing, as in every list.
  */
-export async function listSweepDoubts(
+export async function listReadingDoubts(
   tx: Transaction,
   teamId: string,
-  scope: SQL,
-): Promise<Map<string, DoubtCode[]>> {
+  scope: SQL | undefined,
+): Promise<ReadingDoubts[]> {
   const all = await tx
     .select({
       id: readings.id,
       sweepId: readings.sweepId,
+      maskId: readings.maskId,
       content: readings.content,
       settings: sweeps.settings,
       benchId: sweeps.benchId,
@@ -64,16 +72,28 @@ export async function listSweepDoubts(
   const heldOf = await loadHeldAmbients(tx, teamId, ids);
   const ambients = await listAmbientSweeps(tx, teamId, rows);
   const dayCheck = await loadDayChecks(tx, teamId, rows);
-  const codes = new Map<string, Set<DoubtCode>>();
-  for (const row of rows) {
-    const own = codes.get(row.sweepId) ?? new Set<DoubtCode>();
-    codes.set(row.sweepId, own);
+  return rows.map((row) => {
     const { port } = row.settings;
-    const derived = deriveDoubts(
+    const { doubts } = deriveDoubts(
       { ...row.content, suspects: suspects.get(row.id) ?? [] },
       { port, ambients: heldOf(row.id, ambientsOf(ambients, row, port)), check: dayCheck(row) },
     );
-    for (const { code } of [...row.content.doubts, ...derived.doubts]) own.add(code);
+    const { sweepId, maskId, content } = row;
+    return { sweepId, maskId, stored: content.doubts, derived: doubts };
+  });
+}
+
+/** Which doubts some sweeps have, in the order of `DOUBT_CODES`; by the sweep's id. */
+export async function listSweepDoubts(
+  tx: Transaction,
+  teamId: string,
+  scope: SQL,
+): Promise<Map<string, DoubtCode[]>> {
+  const codes = new Map<string, Set<DoubtCode>>();
+  for (const { sweepId, stored, derived } of await listReadingDoubts(tx, teamId, scope)) {
+    const own = codes.get(sweepId) ?? new Set<DoubtCode>();
+    codes.set(sweepId, own);
+    for (const { code } of [...stored, ...derived]) own.add(code);
   }
   return new Map(
     [...codes].map(([sweepId, own]) => [sweepId, DOUBT_CODES.filter((code) => own.has(code))]),

@@ -41,7 +41,9 @@ describe("copyMask", () => {
     // Only confirming makes the same limits firm; an edit that says so by itself does not.
     await expect(
       reviseMask(ctx, { maskId, mask: { ...content, provenance: "read" } }),
-    ).rejects.toMatchObject({ fieldErrors: { provenance: expect.stringContaining("Confirm") } });
+    ).rejects.toMatchObject({
+      fieldErrors: { provenance: expect.stringContaining("confirm it against your own copy") },
+    });
     const edited = { ...content, title: "Wheelhouse limit, ours" };
     expect((await reviseMask(ctx, { maskId, mask: edited })).revision).toBe(2);
     expect((await readMask(ctx, shippedId))?.revisions).toHaveLength(1);

@@ -17,7 +17,9 @@ function show(peakDb: number, count: number): string {
     settings: SETTINGS,
     guardDb: 0,
   }));
-  const combined = { maskId: "mask-1", mask: MASK, reading: readTogether(sweeps, MASK), sweeps };
+  const notHeld = [{ sweepId: "far", name: "Far scan", reason: "It was taken at 10 m." }];
+  const reading = readTogether(sweeps, MASK);
+  const combined = { maskId: "mask-1", mask: MASK, reading, sweeps, notHeld };
   return renderToStaticMarkup(<BuildReading href="/here" combined={combined} />);
 }
 
@@ -28,6 +30,8 @@ describe("BuildReading", () => {
     expect(html).toContain('href="/sweeps/sweep-0"');
     expect(html).toContain('href="/here/remeasure?mask=mask-1"');
     expect(html).toContain("2 sweeps, taken together");
+    expect(html).toContain('href="/sweeps/far?mask=mask-1"');
+    expect(html).toContain("It was taken at 10 m.");
   });
 
   test("offers no sheet where nothing is to be measured again", () => {

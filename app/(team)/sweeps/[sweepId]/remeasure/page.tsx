@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { BenchSheet } from "@/components/readings/bench-sheet";
 import { PrintButton } from "@/components/readings/print-button";
 import { RemeasureOmitted } from "@/components/readings/remeasure-omitted";
@@ -30,7 +31,12 @@ export default async function RemeasurePage(props: RemeasurePageProps) {
       <PageHead
         title="Measure again"
         trail={[{ href: `/sweeps/${sweep.id}?mask=${held.maskId}`, label: sweep.name }]}
-        lead={`${sweep.programName} ${sweep.buildName} · ${sweep.benchName} · ${held.mask.title}`}
+        lead={
+          <>
+            {`${sweep.programName} ${sweep.buildName} · ${sweep.benchName} · ${held.mask.title}`}{" "}
+            <UnconfirmedMark provenance={held.mask.provenance} />
+          </>
+        }
         actions={rows.length > 0 ? <PrintButton /> : null}
       />
       {rows.length === 0 ? (

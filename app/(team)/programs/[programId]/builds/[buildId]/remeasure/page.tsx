@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
+import { UnconfirmedMark } from "@/components/masks/unconfirmed-mark";
 import { BenchSheet } from "@/components/readings/bench-sheet";
 import { PrintButton } from "@/components/readings/print-button";
 import { RemeasureOmitted } from "@/components/readings/remeasure-omitted";
@@ -34,7 +35,12 @@ export default async function BuildRemeasurePage(props: RemeasurePageProps) {
           { href: `/programs/${programId}`, label: build.programName },
           { href: `/programs/${programId}/builds/${buildId}`, label: build.name },
         ]}
-        lead={`${benches} · ${combined.mask.title}`}
+        lead={
+          <>
+            {`${benches} · ${combined.mask.title}`}{" "}
+            <UnconfirmedMark provenance={combined.mask.provenance} />
+          </>
+        }
         actions={rows.length > 0 ? <PrintButton /> : null}
       />
       {rows.length === 0 ? (
